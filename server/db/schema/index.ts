@@ -1,0 +1,7 @@
+export * from './people.ts'
+export * from './firm.ts'
+export * from './sheets.ts'
+export * from './catalogue.ts'
+export * from './build-ups.ts'
+export * from './jobs.ts'
+export * from './specifications.ts'

@@ -1,0 +1,67 @@
+import { randomBytes } from 'node:crypto'
+import { mkdir } from 'node:fs/promises'
+import { createServer, type RequestListener } from 'node:http'
+import { join } from 'node:path'
+import { createApp } from './app.ts'
+import { openDatabase } from './db/open.ts'
+import { fillDemo, demoAccounts } from './db/demo/fill.ts'
+import { readEnvironment } from './env.ts'
+import { hasPeople } from './features/people/queries.ts'
+import { openDiskStore } from './files/store.ts'
+import { pages } from './http/pages.ts'
+import { outboxMailer, smtpMailer } from './mail/send.ts'
+import { sessionSecretIn } from './secrets.ts'
+
+const log = (line: string) => process.stderr.write(`${new Date().toISOString()} ${line}\n`)
+const say = (line: string) => process.stdout.write(`${line}\n`)
+
+const starting: RequestListener = (_request, response) => {
+  response.writeHead(503, { 'Content-Type': 'application/json; charset=utf-8', 'Retry-After': '2' })
+  response.end(JSON.stringify({ error: { code: 'unavailable', message: 'Wearcourse is starting. Try again in a moment.' } }))
+}
+
+async function start(): Promise<void> {
+  const env = readEnvironment(process.env)
+  const clock = () => Date.now()
+  let listener = starting
+  const server = createServer((request, response) => listener(request, response))
+  await new Promise<void>((resolve, reject) => server.once('error', reject).listen(env.port, env.host, resolve))
+  await mkdir(env.dataDir, { recursive: true, mode: 0o700 })
+  say('Opening the database …')
+  const database = await openDatabase({ dataDir: env.dataDir, ...(env.databaseUrl ? { databaseUrl: env.databaseUrl } : {}), log })
+  const files = await openDiskStore(env.dataDir)
+  const mail = env.smtp ? smtpMailer(env.smtp) : await outboxMailer(env.dataDir, clock)
+  if (env.demo === 'auto' && !(await hasPeople(database.db))) {
+    say('Filling the empty database with the demo …')
+    await fillDemo({ db: database.db, files, now: clock() })
+  }
+  const firstLeadCode = (await hasPeople(database.db)) ? undefined : randomBytes(5).toString('hex')
+  listener = createApp({
+    db: database.db, pool: database.pool, isAnswering: () => database.isAnswering(), files, mail, clock, log, firstLeadCode,
+    publicUrl: env.publicUrl, sessionSecret: env.sessionSecret ?? (await sessionSecretIn(env.dataDir)), demo: demoAccounts,
+    pages: pages(join(import.meta.dirname, '../dist')),
+  })
+  say(`Wearcourse is open at ${env.publicUrl}`)
+  if (firstLeadCode) say(`No one is here yet. Make the first technical lead there with the code ${firstLeadCode}`)
+  else if (env.demo === 'auto') say(`Demo accounts: ${demoAccounts.emails.join(', ')} – password ${demoAccounts.password}`)
+
+  let closing = false
+  const close = async () => {
+    if (closing) return
+    closing = true
+    say('Closing …')
+    server.close()
+    server.closeIdleConnections()
+    setTimeout(() => server.closeAllConnections(), 3000).unref()
+    await database.close()
+    process.exit(0)
+  }
+  process.on('SIGINT', () => void close())
+  process.on('SIGTERM', () => void close())
+  process.on('unhandledRejection', (error) => log(`unhandled ${error instanceof Error ? (error.stack ?? error.message) : String(error)}`))
+}
+
+start().catch((error: unknown) => {
+  process.stderr.write(`Wearcourse could not start: ${error instanceof Error ? error.message : String(error)}\n`)
+  process.exit(1)
+})

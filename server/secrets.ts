@@ -1,0 +1,16 @@
+import { randomBytes } from 'node:crypto'
+import { readFile, writeFile } from 'node:fs/promises'
+import { join } from 'node:path'
+
+/** The session secret: made once and kept in `DATA_DIR/session-secret`, readable by the owner alone. */
+export async function sessionSecretIn(dataDir: string): Promise<string> {
+  const path = join(dataDir, 'session-secret')
+  try {
+    return (await readFile(path, 'utf8')).trim()
+  } catch (error) {
+    if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error
+    const secret = randomBytes(48).toString('base64url')
+    await writeFile(path, `${secret}\n`, { mode: 0o600, flag: 'wx' })
+    return secret
+  }
+}

@@ -1,0 +1,11 @@
+import type { Endpoint } from './endpoint.ts'
+import { healthEndpoints } from './health.ts'
+import { peopleEndpoints } from './people.ts'
+import { sessionEndpoints } from './session.ts'
+
+/** Every endpoint by name: the source of the OpenAPI document and of the tests that walk it. */
+export const endpoints: Record<string, Endpoint> = {
+  ...healthEndpoints,
+  ...sessionEndpoints,
+  ...peopleEndpoints,
+}

@@ -1,0 +1,73 @@
+import * as z from 'zod'
+import { mixFactsSchema } from './mix.ts'
+import { productFactsSchema } from './product.ts'
+import { quantitySchema } from './property.ts'
+
+/** Stages of a floor, from the slab upward. */
+export const stages = ['prep', 'fill', 'slurry', 'grind', 'prime', 'body', 'broadcast', 'seal', 'top', 'cove'] as const
+export const stageSchema = z.enum(stages)
+export type Stage = z.infer<typeof stageSchema>
+/** Stages that work the surface and lay down no resin. */
+export const dryStages = ['prep', 'grind'] as const satisfies readonly Stage[]
+
+/** Methods of ICRI 310.2R-2013. */
+export const preparationMethods = [
+  'detergent scrubbing', 'low-pressure water cleaning', 'acid etching', 'grinding', 'abrasive blasting', 'steel shot blasting', 'scarifying',
+  'needle scaling', 'high-pressure water jetting', 'scabbling', 'surface retarder', 'flame blasting', 'milling', 'handheld concrete breaker',
+] as const
+export const preparationSchema = z.strictObject({
+  method: z.enum(preparationMethods),
+  /** Concrete surface profile asked for, 1 to 10. */
+  profile: z.int().min(1).max(10).optional(),
+})
+
+export const buildUpStatusSchema = z.enum(['draft', 'released', 'superseded', 'withdrawn'])
+export type BuildUpStatus = z.infer<typeof buildUpStatusSchema>
+
+/** One step of a build-up. Thickness and spread rate are two ways to say one thing: at most one is given, the other is computed. */
+export const courseSchema = z.strictObject({
+  id: z.string().min(1).max(40),
+  stage: stageSchema,
+  title: z.string().trim().min(1).max(120),
+  mixId: z.string().nullable(),
+  thickness: z.strictObject({ value: z.number().positive().max(100_000), unit: z.enum(['mil', 'µm', 'mm', 'in']), film: z.enum(['wet', 'dry']) }).nullable(),
+  spreadRate: z.strictObject({ value: z.number().positive().max(100_000), unit: z.enum(['ft²/gal', 'm²/L']) }).nullable(),
+  /** Sand in the pail: mass per volume of mixed liquid resin. */
+  filler: z.strictObject({ productId: z.string(), loading: quantitySchema }).nullable(),
+  /** Sand thrown on the wet film: mass per area. */
+  broadcast: z.strictObject({ productId: z.string(), rate: quantitySchema, toRefusal: z.boolean() }).nullable(),
+  preparation: preparationSchema.nullable(),
+  /** Hours from the start of the floor's first course to the start of this one; null: as soon as the course beneath allows. */
+  startsAfter: z.number().min(0).max(8760).nullable(),
+  note: z.string().trim().max(2000),
+})
+export type Course = z.infer<typeof courseSchema>
+
+/** What the floor is laid under. */
+export const conditionsSchema = z.strictObject({
+  slabTemperature: quantitySchema,
+  airTemperature: quantitySchema,
+  /** Of the air, per cent. */
+  relativeHumidity: z.number().min(1).max(100),
+  /** Measured in the slab (ASTM F2170), per cent; null: not measured. */
+  substrateRelativeHumidity: z.number().min(0).max(100).nullable(),
+  /** Calcium-chloride rate (ASTM F1869); null: not measured. */
+  moistureEmission: quantitySchema.nullable(),
+  /** Place whose VOC rules are asked for; null: none chosen. */
+  vocPlace: z.string().nullable(),
+})
+export type Conditions = z.infer<typeof conditionsSchema>
+
+/** Everything `evaluate` needs: the courses bottom up, the facts they rest on, the conditions and the day of reckoning. */
+export const evaluationInputSchema = z.object({
+  courses: z.array(courseSchema).max(60),
+  mixes: z.record(z.string(), mixFactsSchema),
+  /** Aggregates and fillers by id. */
+  products: z.record(z.string(), productFactsSchema),
+  conditions: conditionsSchema,
+  /** ISO date on which ages and dated limits are judged. */
+  onDate: z.string(),
+  /** The firm's limit on the age of a safety sheet, years. */
+  sheetAgeLimitYears: z.number().positive(),
+})
+export type EvaluationInput = z.infer<typeof evaluationInputSchema>

@@ -1,0 +1,23 @@
+import tailwindcss from '@tailwindcss/vite'
+import react from '@vitejs/plugin-react'
+import { defineConfig } from 'vitest/config'
+
+const apiPort = process.env['API_PORT'] ?? '4621'
+
+export default defineConfig({
+  plugins: [react(), tailwindcss()],
+  build: { outDir: 'dist', assetsInlineLimit: 0, chunkSizeWarningLimit: 900 },
+  server: { port: 4620, proxy: { '/api': `http://127.0.0.1:${apiPort}` } },
+  test: {
+    projects: [
+      {
+        test: {
+          name: 'unit',
+          environment: 'node',
+          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts'],
+          setupFiles: ['tests/setup/no-console-errors.ts'],
+        },
+      },
+    ],
+  },
+})
