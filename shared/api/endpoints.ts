@@ -1,5 +1,6 @@
 import type { Endpoint } from './endpoint.ts'
 import { healthEndpoints } from './health.ts'
+import { jobEndpoints } from './jobs.ts'
 import { peopleEndpoints } from './people.ts'
 import { sessionEndpoints } from './session.ts'
 
@@ -8,4 +9,5 @@ export const endpoints: Record<string, Endpoint> = {
   ...healthEndpoints,
   ...sessionEndpoints,
   ...peopleEndpoints,
+  ...jobEndpoints,
 }
