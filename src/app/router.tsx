@@ -1,0 +1,25 @@
+import { createBrowserRouter, type RouteObject } from 'react-router'
+import { ErrorPage, NothingHere } from './error-page.tsx'
+import { Shell } from './shell.tsx'
+
+/** A page is loaded when it is first gone to; its module names the component. */
+function page<M>(path: string, load: () => Promise<M>, pick: (module: M) => React.ComponentType): RouteObject {
+  return { path, lazy: async () => ({ Component: pick(await load()) }), errorElement: <ErrorPage /> }
+}
+
+const signedIn: RouteObject[] = [
+  page('/', () => import('./home.tsx'), (module) => module.Home),
+  page('/people', () => import('../features/people/people-page.tsx'), (module) => module.PeoplePage),
+  page('/firm', () => import('../features/people/firm-page.tsx'), (module) => module.FirmPage),
+  page('/outbox', () => import('../features/people/outbox-page.tsx'), (module) => module.OutboxPage),
+  page('/changes', () => import('../features/people/changes-page.tsx'), (module) => module.ChangesPage),
+  page('/account', () => import('../features/people/account-page.tsx'), (module) => module.AccountPage),
+]
+
+export function createRouter() {
+  return createBrowserRouter([
+    page('/sign-in', () => import('../features/people/sign-in-page.tsx'), (module) => module.SignInPage),
+    page('/password', () => import('../features/people/password-page.tsx'), (module) => module.PasswordPage),
+    { element: <Shell />, errorElement: <ErrorPage />, hydrateFallbackElement: <></>, children: [...signedIn, { path: '*', element: <NothingHere /> }] },
+  ])
+}
