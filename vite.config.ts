@@ -14,7 +14,7 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
-          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts'],
+          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/api/**/*.test.ts'],
           setupFiles: ['tests/setup/no-console-errors.ts'],
         },
       },

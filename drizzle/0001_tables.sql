@@ -181,6 +181,7 @@ CREATE TABLE "build_ups" (
 	"number" integer GENERATED ALWAYS AS IDENTITY (sequence name "build_ups_number_seq" INCREMENT BY 1 MINVALUE 1 MAXVALUE 2147483647 START WITH 1 CACHE 1),
 	"name" text NOT NULL,
 	"note" text DEFAULT '' NOT NULL,
+	"version" integer DEFAULT 1 NOT NULL,
 	"created_at" timestamp with time zone DEFAULT now() NOT NULL,
 	"search_text" text DEFAULT '' NOT NULL,
 	CONSTRAINT "build_ups_number_unique" UNIQUE("number")
@@ -315,6 +316,7 @@ CREATE INDEX "sheet_subjects_by_mix" ON "sheet_subjects" USING btree ("mix_id");
 CREATE UNIQUE INDEX "build_up_versions_number" ON "build_up_versions" USING btree ("build_up_id","number");--> statement-breakpoint
 CREATE INDEX "build_up_versions_status" ON "build_up_versions" USING btree ("status");--> statement-breakpoint
 CREATE INDEX "build_ups_name" ON "build_ups" USING btree ("name","id");--> statement-breakpoint
+CREATE INDEX "build_ups_search" ON "build_ups" USING gin ("search_text" gin_trgm_ops);--> statement-breakpoint
 CREATE UNIQUE INDEX "courses_position" ON "courses" USING btree ("version_id","position");--> statement-breakpoint
 CREATE INDEX "courses_mix" ON "courses" USING btree ("mix_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "bays_position" ON "bays" USING btree ("job_id","position");--> statement-breakpoint

@@ -15,10 +15,12 @@ export const buildUps = pgTable(
     number: integer('number').notNull().unique().generatedAlwaysAsIdentity(),
     name: text('name').notNull(),
     note: text('note').notNull().default(''),
+    /** Edit counter of the name and note. */
+    version: integer('version').notNull().default(1),
     createdAt: instant('created_at').notNull().defaultNow(),
     searchText: text('search_text').notNull().default(''),
   },
-  (table) => [index('build_ups_name').on(table.name, table.id)],
+  (table) => [index('build_ups_name').on(table.name, table.id), index('build_ups_search').using('gin', sql`${table.searchText} gin_trgm_ops`)],
 )
 
 export const buildUpVersions = pgTable(
