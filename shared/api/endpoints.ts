@@ -1,3 +1,4 @@
+import { buildUpEndpoints } from './build-ups.ts'
 import type { Endpoint } from './endpoint.ts'
 import { healthEndpoints } from './health.ts'
 import { jobEndpoints } from './jobs.ts'
@@ -9,5 +10,6 @@ export const endpoints: Record<string, Endpoint> = {
   ...healthEndpoints,
   ...sessionEndpoints,
   ...peopleEndpoints,
+  ...buildUpEndpoints,
   ...jobEndpoints,
 }
