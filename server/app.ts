@@ -3,6 +3,7 @@ import type { Pool } from 'pg'
 import type { Database } from './db/open.ts'
 import { healthRoutes } from './features/health/routes.ts'
 import { findUser } from './features/people/queries.ts'
+import { jobRoutes } from './features/jobs/routes.ts'
 import { peopleRoutes } from './features/people/routes.ts'
 import { sessionRoutes } from './features/people/session-routes.ts'
 import { checkPassword } from './features/people/sign-in.ts'
@@ -32,7 +33,7 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes]
+const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {
