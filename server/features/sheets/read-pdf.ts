@@ -1,0 +1,90 @@
+import { createRequire } from 'node:module'
+import { pathToFileURL } from 'node:url'
+import { Worker } from 'node:worker_threads'
+import type { ReadResult } from './page-reader.ts'
+
+export interface ReadLimits {
+  milliseconds: number
+  /** Of JavaScript's own heap in the worker. */
+  heapMegabytes: number
+  /** How far the whole process may grow while a file is read: buffers are not on the heap. */
+  growthMegabytes: number
+}
+const usual: ReadLimits = { milliseconds: 30_000, heapMegabytes: 512, growthMegabytes: 1024 }
+const atOnce = 2
+const megabyte = 1024 * 1024
+/** A worker that waits this long for work is let go, with the memory it holds. */
+const idleMilliseconds = 20_000
+
+const tsx = pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href
+
+function startWorker({ heapMegabytes }: ReadLimits): Worker {
+  const worker = new Worker(new URL('./worker.ts', import.meta.url), {
+    execArgv: ['--import', tsx],
+    resourceLimits: { maxOldGenerationSizeMb: heapMegabytes },
+    stderr: true,
+    stdout: true,
+  })
+  worker.unref()
+  return worker
+}
+
+const idle = new Map<Worker, NodeJS.Timeout>()
+const waiting: (() => void)[] = []
+let busy = 0
+
+/** Reads a PDF's pages in a worker thread, two files at once. A worker that takes too long, takes too much or breaks is ended; the file is told of. */
+export async function readPdf(path: string, limits: ReadLimits = usual): Promise<ReadResult> {
+  if (busy >= atOnce) await new Promise<void>((resolve) => waiting.push(resolve))
+  else busy += 1
+  try {
+    return await readWith(limits === usual ? takeWorker() : startWorker(limits), path, limits)
+  } finally {
+    const next = waiting.shift()
+    if (next) next()
+    else busy -= 1
+  }
+}
+
+function takeWorker(): Worker {
+  for (const [worker, timer] of idle) {
+    clearTimeout(timer)
+    idle.delete(worker)
+    return worker
+  }
+  return startWorker(usual)
+}
+
+function rest(worker: Worker): void {
+  const timer = setTimeout(() => {
+    idle.delete(worker)
+    void worker.terminate()
+  }, idleMilliseconds)
+  idle.set(worker, timer.unref())
+}
+
+function readWith(worker: Worker, path: string, limits: ReadLimits): Promise<ReadResult> {
+  return new Promise((resolve) => {
+    const before = process.memoryUsage.rss()
+    const end = (result: ReadResult) => {
+      clearTimeout(timer)
+      clearInterval(watch)
+      worker.removeAllListeners()
+      worker.on('error', () => undefined)
+      if ('pages' in result || result.problem === 'encrypted') rest(worker)
+      else void worker.terminate()
+      resolve(result)
+    }
+    const tooMuch = (detail: string) => end({ problem: 'too-large', detail })
+    const timer = setTimeout(() => tooMuch(`more than ${limits.milliseconds / 1000} s to read`), limits.milliseconds)
+    const watch = setInterval(() => {
+      if (process.memoryUsage.rss() - before > limits.growthMegabytes * megabyte) tooMuch('more memory to read than allowed')
+    }, 50)
+    worker.once('message', end)
+    worker.once('error', (error: Error & { code?: string }) =>
+      error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? tooMuch('more memory to read than allowed') : end({ problem: 'damaged', detail: error.message }),
+    )
+    worker.once('exit', (code) => end({ problem: 'damaged', detail: `the reader ended with ${code}` }))
+    worker.postMessage(path)
+  })
+}
