@@ -59,6 +59,8 @@ export const jobSchema = z.object({
   bays: z.array(baySchema),
   crew: z.array(z.object({ id: idSchema, name: z.string() })),
   buildUp: jobBuildUpSchema.nullable(),
+  /** What the QR code on the job's sheet opens. */
+  siteCardUrl: z.string(),
   version: versionSchema,
   updatedAt: z.string(),
 })

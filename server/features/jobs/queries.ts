@@ -67,7 +67,7 @@ function instant(text: string | null): string | null {
 }
 
 /** A job without the facts of its build-up: those come from the build-ups' own queries. */
-export type JobRecord = Omit<Job, 'buildUp'> & { buildUpVersionId: string | null }
+export type JobRecord = Omit<Job, 'buildUp' | 'siteCardUrl'> & { buildUpVersionId: string | null }
 
 /** Is the person one of the job's crew? */
 export async function isOnJob(db: Reader, { jobId, personId }: { jobId: string; personId: string }): Promise<boolean> {
@@ -150,7 +150,7 @@ function dayOf(startsAt: string | null, now: number): string {
  * A job with the build-up version it is laid by. The facts are those frozen at release; the conditions are the job's own.
  * @throws AppError `not-found`
  */
-export async function readJob(db: Database, { jobId, now }: { jobId: string; now: number }): Promise<Job> {
+export async function readJob(db: Database, { jobId, now }: { jobId: string; now: number }): Promise<Omit<Job, 'siteCardUrl'>> {
   const { buildUpVersionId, ...job } = await readJobRecord(db, jobId)
   const buildUp = buildUpVersionId ? await buildUpOf(db, { versionId: buildUpVersionId, conditions: job.conditions, startsAt: job.startsAt, now }) : null
   return { ...job, buildUp }
