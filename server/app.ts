@@ -7,6 +7,7 @@ import { jobRoutes } from './features/jobs/routes.ts'
 import { peopleRoutes } from './features/people/routes.ts'
 import { sessionRoutes } from './features/people/session-routes.ts'
 import { checkPassword } from './features/people/sign-in.ts'
+import { siteCardRoutes } from './features/site-cards/routes.ts'
 import type { FileStore } from './files/store.ts'
 import type { AppContext } from './http/context.ts'
 import { handleErrors, nothingHere } from './http/handle-errors.ts'
@@ -33,7 +34,7 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes]
+const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes, siteCardRoutes]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {

@@ -4,6 +4,7 @@ import { healthEndpoints } from './health.ts'
 import { jobEndpoints } from './jobs.ts'
 import { peopleEndpoints } from './people.ts'
 import { sessionEndpoints } from './session.ts'
+import { siteCardEndpoints } from './site-cards.ts'
 
 /** Every endpoint by name: the source of the OpenAPI document and of the tests that walk it. */
 export const endpoints: Record<string, Endpoint> = {
@@ -12,4 +13,5 @@ export const endpoints: Record<string, Endpoint> = {
   ...peopleEndpoints,
   ...buildUpEndpoints,
   ...jobEndpoints,
+  ...siteCardEndpoints,
 }
