@@ -90,7 +90,7 @@ function boxesByLine(words: readonly PlacedWord[]): Box[] {
     if (line && before && onOneLine(before, word)) line.push(word)
     else lines.push([word])
   }
-  return lines.flatMap((line) => boxAround(line) ?? [])
+  return lines.map(boxAround).filter((box) => box !== null)
 }
 
 const wordsAround = 5

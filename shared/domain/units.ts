@@ -33,6 +33,8 @@ const factors = {
   temperatureDifference: { 'Δ°C': 1, 'Δ°F': 5 / 9 },
   /** pascal */
   pressure: { MPa: 1e6, psi },
+  /** newton; 1 lbf is the weight of 1 lb at standard gravity */
+  force: { N: 1, kN: 1e3, lbf: pound * 9.80665 },
   /** pascal second */
   viscosity: { 'mPa·s': 1e-3 },
   /** kilogram per square metre and second */
