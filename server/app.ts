@@ -8,6 +8,7 @@ import { peopleRoutes } from './features/people/routes.ts'
 import { sessionRoutes } from './features/people/session-routes.ts'
 import { checkPassword } from './features/people/sign-in.ts'
 import { siteCardRoutes } from './features/site-cards/routes.ts'
+import { sheetRoutes } from './features/sheets/routes.ts'
 import type { FileStore } from './files/store.ts'
 import type { AppContext } from './http/context.ts'
 import { handleErrors, nothingHere } from './http/handle-errors.ts'
@@ -34,7 +35,7 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes, siteCardRoutes]
+const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes, siteCardRoutes, sheetRoutes]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {

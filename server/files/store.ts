@@ -1,18 +1,18 @@
-import { createHash } from 'node:crypto'
-import { createReadStream } from 'node:fs'
+import { createHash, randomUUID } from 'node:crypto'
+import { createReadStream, createWriteStream } from 'node:fs'
 import { mkdir, open, rename, rm, stat } from 'node:fs/promises'
 import { join } from 'node:path'
 import type { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
-import { createWriteStream } from 'node:fs'
-import { randomUUID } from 'node:crypto'
 
 /** Files by the SHA-256 of their bytes, never altered. */
 export interface FileStore {
   /** Folder for uploads that are not yet accepted; on the same disk as the store. */
   incoming: string
-  /** Takes a file of `incoming` over; the same bytes are kept once. */
-  adopt(path: string, sha256: string): Promise<void>
+  /** Takes a file of `incoming` over; the same bytes are kept once. True when they were not here before. */
+  adopt(path: string, sha256: string): Promise<boolean>
+  /** Forgets a file whose adoption was not committed. */
+  discard(sha256: string): Promise<void>
   /** Keeps bytes made here (exports) and tells their hash. */
   keep(bytes: Uint8Array): Promise<string>
   has(sha256: string): Promise<boolean>
@@ -37,16 +37,21 @@ export async function openDiskStore(dataDir: string): Promise<FileStore> {
   const has = async (sha256: string) => stat(pathOf(sha256)).then(() => true, () => false)
   const adopt = async (path: string, sha256: string) => {
     const target = pathOf(sha256)
-    if (await has(sha256)) return rm(path, { force: true })
+    if (await has(sha256)) {
+      await rm(path, { force: true })
+      return false
+    }
     await mkdir(join(root, sha256.slice(0, 2)), { recursive: true, mode: 0o700 })
     await syncToDisk(path)
     await rename(path, target)
     await syncToDisk(join(root, sha256.slice(0, 2)))
+    return true
   }
   return {
     incoming,
     adopt,
     has,
+    discard: (sha256) => rm(pathOf(sha256), { force: true }),
     async keep(bytes) {
       const sha256 = createHash('sha256').update(bytes).digest('hex')
       const path = join(incoming, randomUUID())

@@ -4,6 +4,7 @@ import { healthEndpoints } from './health.ts'
 import { jobEndpoints } from './jobs.ts'
 import { peopleEndpoints } from './people.ts'
 import { sessionEndpoints } from './session.ts'
+import { sheetEndpoints } from './sheets.ts'
 import { siteCardEndpoints } from './site-cards.ts'
 
 /** Every endpoint by name: the source of the OpenAPI document and of the tests that walk it. */
@@ -14,4 +15,5 @@ export const endpoints: Record<string, Endpoint> = {
   ...buildUpEndpoints,
   ...jobEndpoints,
   ...siteCardEndpoints,
+  ...sheetEndpoints,
 }

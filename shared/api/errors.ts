@@ -26,10 +26,11 @@ export const errorCodes = {
 
 export type ErrorCode = keyof typeof errorCodes
 const codes = Object.keys(errorCodes) as [ErrorCode, ...ErrorCode[]]
+export const errorCodeSchema = z.enum(codes)
 
 export const errorBodySchema = z.object({
   error: z.object({
-    code: z.enum(codes),
+    code: errorCodeSchema,
     message: z.string(),
     /** Address of the field (`body.parts.0.productId`) to what is wrong with it. */
     fields: z.record(z.string(), z.string()).optional(),

@@ -1,6 +1,5 @@
-import { createRequire } from 'node:module'
-import { pathToFileURL } from 'node:url'
-import { Worker } from 'node:worker_threads'
+import type { Worker } from 'node:worker_threads'
+import { startThread } from '../../thread.ts'
 import type { ReadResult } from './page-reader.ts'
 
 export interface ReadLimits {
@@ -16,15 +15,14 @@ const megabyte = 1024 * 1024
 /** A worker that waits this long for work is let go, with the memory it holds. */
 const idleMilliseconds = 20_000
 
-const tsx = pathToFileURL(createRequire(import.meta.url).resolve('tsx')).href
-
 function startWorker({ heapMegabytes }: ReadLimits): Worker {
-  const worker = new Worker(new URL('./worker.ts', import.meta.url), {
-    execArgv: ['--import', tsx],
+  const worker = startThread(new URL('./worker.ts', import.meta.url), {
     resourceLimits: { maxOldGenerationSizeMb: heapMegabytes },
     stderr: true,
     stdout: true,
   })
+  worker.on('error', () => undefined)
+  worker.once('exit', () => forget(worker))
   worker.unref()
   return worker
 }
@@ -47,19 +45,24 @@ export async function readPdf(path: string, limits: ReadLimits = usual): Promise
 }
 
 function takeWorker(): Worker {
-  for (const [worker, timer] of idle) {
-    clearTimeout(timer)
-    idle.delete(worker)
-    return worker
-  }
-  return startWorker(usual)
+  const [worker] = idle.keys()
+  if (!worker) return startWorker(usual)
+  forget(worker)
+  return worker
+}
+
+/** Starts a worker ahead of its work: loading the reader takes longer than reading most sheets. */
+export function prepareReader(): void {
+  if (idle.size + busy < atOnce) rest(startWorker(usual))
+}
+
+function forget(worker: Worker): void {
+  clearTimeout(idle.get(worker))
+  idle.delete(worker)
 }
 
 function rest(worker: Worker): void {
-  const timer = setTimeout(() => {
-    idle.delete(worker)
-    void worker.terminate()
-  }, idleMilliseconds)
+  const timer = setTimeout(() => void worker.terminate(), idleMilliseconds)
   idle.set(worker, timer.unref())
 }
 
@@ -69,22 +72,20 @@ function readWith(worker: Worker, path: string, limits: ReadLimits): Promise<Rea
     const end = (result: ReadResult) => {
       clearTimeout(timer)
       clearInterval(watch)
-      worker.removeAllListeners()
-      worker.on('error', () => undefined)
-      if ('pages' in result || result.problem === 'encrypted') rest(worker)
+      worker.off('message', end).off('error', broken).off('exit', ended)
+      if (limits === usual && ('pages' in result || result.problem === 'encrypted')) rest(worker)
       else void worker.terminate()
       resolve(result)
     }
     const tooMuch = (detail: string) => end({ problem: 'too-large', detail })
+    const broken = (error: Error & { code?: string }) =>
+      error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? tooMuch('more memory to read than allowed') : end({ problem: 'damaged', detail: error.message })
+    const ended = (code: number) => end({ problem: 'damaged', detail: `the reader ended with ${code}` })
     const timer = setTimeout(() => tooMuch(`more than ${limits.milliseconds / 1000} s to read`), limits.milliseconds)
     const watch = setInterval(() => {
       if (process.memoryUsage.rss() - before > limits.growthMegabytes * megabyte) tooMuch('more memory to read than allowed')
     }, 50)
-    worker.once('message', end)
-    worker.once('error', (error: Error & { code?: string }) =>
-      error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? tooMuch('more memory to read than allowed') : end({ problem: 'damaged', detail: error.message }),
-    )
-    worker.once('exit', (code) => end({ problem: 'damaged', detail: `the reader ended with ${code}` }))
+    worker.once('message', end).once('error', broken).once('exit', ended)
     worker.postMessage(path)
   })
 }
