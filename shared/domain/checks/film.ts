@@ -1,0 +1,42 @@
+import { leastOf } from '../course-result.ts'
+import { factsOf, rangeOf } from '../fact.ts'
+import { type Figure, figureOfFact, notStated } from '../figure.ts'
+import { formatRange } from '../format.ts'
+import { valueIn } from '../units.ts'
+import { type Check, type Laid, type Verdict, resinCourses, unknown } from './check.ts'
+
+/** Compares in the unit of the limit, unrounded; a part in a million is left to the binary fraction. */
+function compare(film: number, { min, max }: { min?: number | undefined; max?: number | undefined }) {
+  if (min !== undefined && film < min * (1 - 1e-6)) return 'below'
+  if (max !== undefined && film > max * (1 + 1e-6)) return 'above'
+  return 'within'
+}
+
+function verdictOf({ course, mix, result }: Laid): Verdict {
+  const facts = mix ? factsOf(mix.facts, 'filmThickness') : []
+  const fact = facts.find((one) => one.film !== undefined) ?? facts[0]
+  const limit = rangeOf(fact)
+  if (!mix || !fact || !limit) {
+    const missing = notStated('filmThickness', { of: mix?.name ?? course.title, subject: mix ? { kind: 'mix', id: mix.id } : null, ask: mix ? 'the maker, in writing' : 'whoever builds this up' })
+    return unknown(course.id, mix ? `No sheet of ${mix.name} states a film thickness.` : 'No mix is chosen.', [missing])
+  }
+  const film: Figure = fact.film === 'dry' ? result.dryFilm : result.wetFilm
+  if (film.kind === 'not-stated') return unknown(course.id, `The ${fact.film ?? 'wet'} film of this course is not known.`, [film])
+  const place = compare(valueIn(leastOf(film.value), limit.unit), limit)
+  const figures = [
+    { label: `${fact.film ?? 'wet'} film`, figure: film },
+    { label: 'the sheet’s range', figure: figureOfFact(fact) },
+  ]
+  const says = `${formatRange(film.value)}${fact.film ? ` ${fact.film}` : ''} is laid; the sheet allows ${formatRange(limit)}${fact.film ? ` ${fact.film}` : ' (wet or dry not stated; compared wet)'}.`
+  if (place === 'within') return { courseId: course.id, status: 'met', says, figures }
+  const todo = place === 'below' ? 'Lay it thicker, or choose a mix that may be laid this thin.' : 'Lay it in two coats, or choose a mix that may be laid this thick.'
+  return { courseId: course.id, status: 'stop', says, todo, figures }
+}
+
+export const filmInRange: Check = {
+  id: 'film-in-range',
+  title: 'Film within the sheet’s range',
+  needs: ['filmThickness', 'thickness or spread rate of the course'],
+  source: 'the mix’s data sheet',
+  run: (floor) => resinCourses(floor).filter(({ course }) => course.stage !== 'fill').map(verdictOf),
+}
