@@ -2,10 +2,12 @@ import * as z from 'zod'
 
 /** `?q=&sort=&limit=&cursor=`; a leading `-` on `sort` turns the order round. Cursors are opaque. */
 export function listQuery<const S extends readonly [string, ...string[]]>(sortable: S) {
-  const choices = sortable.flatMap((key) => [key, `-${key}`]) as [S[number] | `-${S[number]}`, ...(S[number] | `-${S[number]}`)[]]
+  type Choice = S[number] | `-${S[number]}`
+  const choices = sortable.flatMap((key) => [key, `-${key}`]) as [Choice, ...Choice[]]
+  const order: z.ZodType<Choice, string> = z.enum(choices as [string, ...string[]]) as never
   return z.object({
     q: z.string().trim().max(200).default(''),
-    sort: z.enum(choices).default(choices[0]),
+    sort: order.default(choices[0] as never),
     limit: z.coerce.number().int().min(1).max(200).default(50),
     cursor: z.string().max(40).regex(/^[A-Za-z0-9_-]+$/).optional(),
   })

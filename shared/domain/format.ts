@@ -28,9 +28,12 @@ export function shownUnit(unit: Unit, system: ShownSystem): Unit {
   return us.has(unit) === (system === 'us') ? unit : (counterpartOf(unit) ?? unit)
 }
 
-/** A number as people write it: thousands with commas, no trailing zeros that mean nothing. */
+/** Made once each: a build-up is worked out on every keystroke. */
+const writers = Array.from({ length: 13 }, (_, maximumFractionDigits) => new Intl.NumberFormat('en-US', { maximumFractionDigits }))
+
+/** A number as people write it: thousands with commas, no trailing zeros that mean nothing. At most twelve decimals. */
 export function formatNumber(value: number, decimals = decimalsFor(value)): string {
-  return roundHalfEven(value, decimals).toLocaleString('en-US', { maximumFractionDigits: decimals, useGrouping: true })
+  return writers[decimals]?.format(roundHalfEven(value, decimals)) ?? String(value)
 }
 
 /** `Δ` tells differences from degrees in types; people read °F. */
