@@ -9,6 +9,11 @@ function page<M>(path: string, load: () => Promise<M>, pick: (module: M) => Reac
 
 const signedIn: RouteObject[] = [
   page('/', () => import('./home.tsx'), (module) => module.Home),
+  page('/jobs', () => import('../features/jobs/jobs-page.tsx'), (module) => module.JobsPage),
+  page('/jobs/new', () => import('../features/jobs/job-page.tsx'), (module) => module.NewJobPage),
+  page('/jobs/:jobId', () => import('../features/jobs/job-page.tsx'), (module) => module.JobPage),
+  page('/site-cards', () => import('../features/site-cards/site-cards-page.tsx'), (module) => module.SiteCardsPage),
+  page('/site-cards/:jobId', () => import('../features/site-cards/site-card-page.tsx'), (module) => module.SiteCardPage),
   page('/people', () => import('../features/people/people-page.tsx'), (module) => module.PeoplePage),
   page('/firm', () => import('../features/people/firm-page.tsx'), (module) => module.FirmPage),
   page('/outbox', () => import('../features/people/outbox-page.tsx'), (module) => module.OutboxPage),
