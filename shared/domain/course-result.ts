@@ -12,7 +12,7 @@ import { proportionsOf } from './proportion.ts'
 import type { Property, Range } from './property.ts'
 import { valueAt } from './sheet-table.ts'
 import { type Quantity, type Unit, convert, quantity, valueIn } from './units.ts'
-import { windowFacts } from './window.ts'
+import { windowAt } from './window.ts'
 
 type Source = Extract<Figure, { kind: 'computed' }>['from'][number]
 
@@ -179,8 +179,8 @@ export function courseResult(course: Course, input: EvaluationInput, next: MixFa
   const filler = fillerOf(course, input.products)
   const films = filmsOf(course, mix, filler)
   const resinPerArea = resinOf(films.spread, filler, course)
-  const at = (property: Property, facts: readonly Fact[] | undefined = mix?.facts): Figure =>
-    mix && facts ? valueAt(facts, { property, temperature: input.conditions.slabTemperature, mix }) : noMix(property, course)
+  const at = (property: Property): Figure =>
+    mix ? valueAt(mix.facts, { property, temperature: input.conditions.slabTemperature, mix }) : noMix(property, course)
   const handled = productsOf(course, input)
   return {
     courseId: course.id,
@@ -192,7 +192,7 @@ export function courseResult(course: Course, input: EvaluationInput, next: MixFa
     ...proportionsOf(mix),
     potLife: at('potLife'),
     workingTime: at('workingTime'),
-    window: at('recoatWindow', mix && windowFacts(mix.facts, next?.name)),
+    window: mix ? windowAt(mix, { temperature: input.conditions.slabTemperature, next }) : noMix('recoatWindow', course),
     footTraffic: at('footTraffic'),
     vehicleTraffic: at('vehicleTraffic'),
     fullCure: at('fullCure'),
