@@ -97,6 +97,9 @@ const coursesBody = z
 const draftBody = z.strictObject({ courses: coursesBody, conditions: conditionsBody })
 const reasonsBody = z.record(z.string().regex(/^[a-z0-9-]{1,60}:[A-Za-z0-9_-]{1,40}$/, 'A reason is kept under its check and course.'), paragraph(1000))
 
+const choiceSchema = z.object({ id: idSchema, name: z.string(), maker: z.string() })
+const mixChoiceSchema = choiceSchema.extend({ chemistry: z.string(), color: z.string() })
+
 export const buildUpEndpoints = {
   listBuildUps: endpoint({
     method: 'get', path: '/api/build-ups', access: 'build-up:read', summary: 'List the build-ups by their newest version',
@@ -111,6 +114,10 @@ export const buildUpEndpoints = {
     method: 'get', path: '/api/build-ups/facts', access: 'build-up:read', summary: 'Read what is known of mixes and aggregates, for a draft at work',
     query: z.object({ mixes: idList(), products: idList() }),
     response: z.object({ mixes: z.record(z.string(), mixFactsSchema), products: z.record(z.string(), productFactsSchema) }),
+  }),
+  listChoices: endpoint({
+    method: 'get', path: '/api/build-ups/choices', access: 'build-up:read', summary: 'Find mixes and aggregates to choose for a course',
+    query: z.object({ q: z.string().trim().max(200).default('') }), response: z.object({ mixes: z.array(mixChoiceSchema), aggregates: z.array(choiceSchema) }),
   }),
   readBuildUp: endpoint({
     method: 'get', path: '/api/build-ups/:buildUpId', access: 'build-up:read', summary: 'Open a build-up at a version, or at its newest', params: buildUpId,

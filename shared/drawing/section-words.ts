@@ -1,15 +1,14 @@
 import { stageNames } from '../domain/course.ts'
+import { formatNumber } from '../domain/format.ts'
 import { valueIn } from '../domain/units.ts'
 import type { SectionScale } from './scale.ts'
 import { type SectionLayer, laysFilm } from './section-layer.ts'
 
 export type DrawingUnit = 'mil' | 'in' | 'µm' | 'mm'
 
-/** Three figures that count, as a dimension is written: 10.7, 125, 1,000; inches to the thousandth. */
+/** A dimension as it is written: 10.7, 125, 1,000. */
 export function lengthText(micrometres: number, unit: DrawingUnit): string {
-  const value = valueIn({ value: micrometres, unit: 'µm' }, unit)
-  const places = unit === 'in' ? 3 : Math.max(0, Math.min(3, 2 - Math.floor(Math.log10(Math.max(value, 1e-9)))))
-  return Number(value.toFixed(places)).toLocaleString('en-US', { maximumFractionDigits: 3 })
+  return formatNumber(valueIn({ value: micrometres, unit: 'µm' }, unit))
 }
 
 /** Courses as a person counts them: from the slab, from 1. */

@@ -55,7 +55,7 @@ describe('sectionOf', () => {
     // 125 mil = 3,175 µm; 10.7 mil = 271.8 µm
     expect(texts({ ...builder, unit: 'µm' })).toEqual(expect.arrayContaining(['3,175', '272', '3,719 µm']))
     // 146.4 mil = 0.146 in
-    expect(texts({ ...builder, unit: 'in' })).toEqual(expect.arrayContaining(['0.125', '0.011', '0.146 in']))
+    expect(texts({ ...builder, unit: 'in' })).toEqual(expect.arrayContaining(['0.125', '0.0107', '0.146 in']))
   })
 
   it('does not total what it does not know, and draws it dashed', () => {

@@ -14,6 +14,8 @@ const signedIn: RouteObject[] = [
   page('/jobs/:jobId', () => import('../features/jobs/job-page.tsx'), (module) => module.JobPage),
   page('/site-cards', () => import('../features/site-cards/site-cards-page.tsx'), (module) => module.SiteCardsPage),
   page('/site-cards/:jobId', () => import('../features/site-cards/site-card-page.tsx'), (module) => module.SiteCardPage),
+  page('/build-ups', () => import('../features/build-ups/build-ups-page.tsx'), (module) => module.BuildUpsPage),
+  page('/build-ups/:buildUpId', () => import('../features/build-ups/builder-page.tsx'), (module) => module.BuilderPage),
   page('/people', () => import('../features/people/people-page.tsx'), (module) => module.PeoplePage),
   page('/firm', () => import('../features/people/firm-page.tsx'), (module) => module.FirmPage),
   page('/outbox', () => import('../features/people/outbox-page.tsx'), (module) => module.OutboxPage),

@@ -9,6 +9,7 @@ import type { Evaluation } from '../../../shared/domain/evaluation.ts'
 import { recordChange } from '../../db/audit.ts'
 import type { Database, Transaction } from '../../db/open.ts'
 import { buildUpVersions, buildUps, courses } from '../../db/schema/build-ups.ts'
+import { mixes, products } from '../../db/schema/catalogue.ts'
 import { people } from '../../db/schema/people.ts'
 import { offsetOf, pageOf } from '../../http/list.ts'
 import { readMixFacts, readProductFacts } from '../catalogue/queries.ts'
@@ -176,6 +177,26 @@ export async function listNewest(db: Database, wanted: ListWanted) {
     .offset(offset)
   const [counted] = await db.select({ total: count() }).from(buildUps).innerJoin(buildUpVersions, joined).where(where)
   return pageOf(rows, { offset, limit: wanted.limit, total: counted?.total ?? 0 })
+}
+
+/** Mixes and aggregates in use that a course may be given: those nearest to what is typed, or the first by name. */
+export async function readChoices(db: Reader, typed: string) {
+  const q = typed.toLowerCase()
+  const most = 200
+  const near = (text: typeof mixes.searchText | typeof products.searchText) => (q ? or(sql`${text} like ${containing(q)}`, sql`word_similarity(${q}, ${text}) >= 0.4`) : undefined)
+  const found = await db
+    .select({ id: mixes.id, name: mixes.name, maker: mixes.maker, chemistry: mixes.chemistry, color: mixes.color })
+    .from(mixes)
+    .where(and(eq(mixes.status, 'active'), near(mixes.searchText)))
+    .orderBy(mixes.name, mixes.id)
+    .limit(most)
+  const aggregates = await db
+    .select({ id: products.id, name: products.name, maker: products.maker })
+    .from(products)
+    .where(and(eq(products.status, 'active'), inArray(products.kind, ['aggregate', 'filler']), near(products.searchText)))
+    .orderBy(products.name, products.id)
+    .limit(most)
+  return { mixes: found, aggregates }
 }
 
 /** The released version of each build-up, by build-up. */

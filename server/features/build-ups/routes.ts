@@ -5,7 +5,7 @@ import { evaluate } from '../../../shared/domain/evaluate.ts'
 import type { AppContext } from '../../http/context.ts'
 import { serve } from '../../http/serve.ts'
 import {
-  addBuildUp, addDraft, copyBuildUp, listNewest, readBuildUp, readFacts, renameBuildUp, saveDraft, withdrawVersion, workOfStages,
+  addBuildUp, addDraft, copyBuildUp, listNewest, readBuildUp, readChoices, readFacts, renameBuildUp, saveDraft, withdrawVersion, workOfStages,
 } from './queries.ts'
 import { release } from './release.ts'
 import { countFindings, summarise } from './summary.ts'
@@ -24,6 +24,7 @@ export function buildUpRoutes({ db, clock }: AppContext): Router {
     return readBuildUp(db, buildUpId, { now })
   })
   serve(router, wire.readCourseFacts, ({ query }) => readFacts(db, { mixIds: query.mixes, productIds: query.products }))
+  serve(router, wire.listChoices, ({ query }) => readChoices(db, query.q))
   serve(router, wire.readBuildUp, ({ params, query }) => readBuildUp(db, params.buildUpId, { number: query.version, now: clock() }))
   serve(router, wire.renameBuildUp, ({ params, body, user }) => db.transaction((tx) => renameBuildUp(tx, params.buildUpId, { ...body, by: user })))
   serve(router, wire.copyBuildUp, async ({ params, body, user }) => {

@@ -1,0 +1,54 @@
+import { useDeferredValue, useMemo, useRef, useState } from 'react'
+import type { VersionSummary } from '../../../shared/api/build-ups.ts'
+import { sectionLayers } from '../../../shared/drawing/section-layer.ts'
+import { Card } from '../../ui/page.tsx'
+import type { BuilderView } from './builder-view.ts'
+import { CourseList } from './course-list.tsx'
+import { FindingsPanel } from './findings-panel.tsx'
+import { Hazards } from './hazards.tsx'
+import { SectionColumn } from './section-column.tsx'
+import { TimelineCard } from './timeline-card.tsx'
+import { TotalsBlock } from './totals-block.tsx'
+
+interface BuilderBodyProps {
+  view: BuilderView
+  version: VersionSummary
+  reasons: Readonly<Record<string, string>>
+}
+
+/** The sheet itself: section, courses, checks and title block, and the timeline beneath. */
+export function BuilderBody({ view, version, reasons }: BuilderBodyProps) {
+  const { work, input, evaluation } = view
+  const [lit, setLit] = useState<string | null>(null)
+  const [open, setOpen] = useState<string | null>(null)
+  const list = useRef<HTMLOListElement>(null)
+  const drawn = useDeferredValue(evaluation)
+  const layers = useMemo(() => sectionLayers({ ...input, courses: work.courses }, drawn), [input, work.courses, drawn])
+  const titles = useMemo(() => Object.fromEntries(work.courses.map(({ id, title }) => [id, title])), [work.courses])
+  const pick = (id: string) => {
+    setOpen(id)
+    document.querySelector<HTMLElement>(`#course-${CSS.escape(id)} button`)?.focus()
+  }
+  return (
+    <>
+      <div className="mt-4 grid border border-rule bg-card md:grid-cols-[270px_minmax(0,1fr)] xl:grid-cols-[340px_minmax(0,1fr)_310px]">
+        <SectionColumn layers={layers} rows={list} lit={lit} onLight={setLit} onPick={pick} />
+        <CourseList view={view} list={list} lit={lit} onLight={setLit} open={open} onOpen={setOpen} />
+        <div className="border-t border-rule px-4 py-3 md:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
+          <FindingsPanel findings={evaluation.findings} titles={titles} lit={lit} onLight={setLit} reasons={reasons} />
+          <TotalsBlock totals={evaluation.totals} version={version} />
+        </div>
+      </div>
+      {work.courses.length > 0 && (
+        <>
+          <TimelineCard work={work} input={input} evaluation={drawn} lit={lit} onLight={setLit} />
+          <Card title="Hazards of the whole floor" className="mt-4">
+            <div className="p-4">
+              <Hazards hazards={evaluation.hazards} title="Taken together" />
+            </div>
+          </Card>
+        </>
+      )}
+    </>
+  )
+}

@@ -1,0 +1,112 @@
+import { Link } from 'react-router'
+import { type Finding, type FindingStatus, findingStatuses } from '../../../shared/domain/finding.ts'
+import type { Missing } from '../../../shared/domain/figure.ts'
+import { paths } from '../../lib/paths.ts'
+import { FigureView } from '../../ui/figure-view.tsx'
+import { StatusMark } from '../../ui/status-mark.tsx'
+
+interface FindingsPanelProps {
+  findings: readonly Finding[]
+  /** Course id to its title. */
+  titles: Readonly<Record<string, string>>
+  lit: string | null
+  onLight: (courseId: string | null) => void
+  /** Why cautions and unknowns were accepted at release, by `checkId:courseId`. */
+  reasons: Readonly<Record<string, string>>
+}
+
+/** What the checks say, the worst first; what is met is folded to its count. */
+export function FindingsPanel({ findings, ...rest }: FindingsPanelProps) {
+  const by = (status: FindingStatus) => findings.filter((finding) => finding.status === status)
+  const met = by('met')
+  const open = findingStatuses.filter((status) => status !== 'met').flatMap(by)
+  return (
+    <section aria-label="Checks">
+      <h2 className="mb-2 text-small font-semibold text-pencil">Checks against the sheets loaded</h2>
+      {findings.length === 0 && <p className="text-pencil">Nothing to check yet. Add a course and choose its mix.</p>}
+      <ul>
+        {open.map((finding, index) => (
+          <FindingItem key={`${finding.checkId} ${finding.courseId} ${index}`} finding={finding} {...rest} />
+        ))}
+      </ul>
+      {met.length > 0 && (
+        <details className="mt-2">
+          <summary className="cursor-pointer">
+            <StatusMark status="met" /> {met.length} {open.length > 0 ? 'others ' : ''}
+          </summary>
+          <ul className="mt-2">
+            {met.map((finding, index) => (
+              <FindingItem key={`${finding.checkId} ${finding.courseId} ${index}`} finding={finding} {...rest} />
+            ))}
+          </ul>
+        </details>
+      )}
+      <p className="mt-3 text-small text-pencil">Met means met against the sheets loaded here. The sheet, the label, the law and the competent person decide.</p>
+    </section>
+  )
+}
+
+function FindingItem({ finding, titles, lit, onLight, reasons }: { finding: Finding } & Omit<FindingsPanelProps, 'findings'>) {
+  const { courseId } = finding
+  const reason = reasons[`${finding.checkId}:${courseId ?? 'floor'}`]
+  return (
+    <li
+      className={`-mx-2 mb-1 px-2 py-1 ${courseId !== null && courseId === lit ? 'bg-resin-wash' : ''}`} onPointerEnter={() => onLight(courseId)} onPointerLeave={() => onLight(null)}
+    >
+      <details onFocus={() => onLight(courseId)} onBlur={() => onLight(null)}>
+        <summary className="grid cursor-pointer grid-cols-[20px_1fr] [&::-webkit-details-marker]:hidden">
+          <StatusMark status={finding.status} wordless />
+          <span>
+            <strong className="font-semibold">{courseId === null ? finding.title : `${titles[courseId] ?? ''}: ${lowered(finding.title)}`}</strong>
+            <span className="block">{finding.says}</span>
+          </span>
+        </summary>
+        <div className="mt-1 ml-5 border-l border-rule pl-3 text-small">
+          {finding.todo && <p className="mb-1">{finding.todo}</p>}
+          <FindingWorking finding={finding} />
+        </div>
+      </details>
+      {reason && <p className="ml-5 text-small text-pencil">Accepted at release: {reason}</p>}
+    </li>
+  )
+}
+
+function FindingWorking({ finding }: { finding: Finding }) {
+  return (
+    <>
+      <dl>
+        {finding.figures.map(({ label, figure }) => (
+          <div key={label} className="flex justify-between gap-3 border-b border-rule py-0.5">
+            <dt className="text-pencil">{label}</dt>
+            <dd className="text-right">
+              <FigureView figure={figure} />
+            </dd>
+          </div>
+        ))}
+      </dl>
+      {finding.missing.map((missing) => (
+        <MissingLine key={`${missing.of} ${missing.property} ${missing.part}`} missing={missing} />
+      ))}
+      <p className="mt-1 text-pencil">{finding.source}</p>
+    </>
+  )
+}
+
+/** What is not stated, who could state it, and the record to put it in. */
+function MissingLine({ missing }: { missing: Missing }) {
+  const { subject } = missing
+  const to = subject && (subject.kind === 'mix' ? paths.mix(subject.id) : subject.kind === 'product' ? paths.product(subject.id) : null)
+  return (
+    <p className="mt-1">
+      {missing.because ? `${missing.because}. ` : ''}
+      {missing.ask}{' '}
+      {to && (
+        <Link to={to} className="text-resin underline">
+          Open {missing.of}
+        </Link>
+      )}
+    </p>
+  )
+}
+
+const lowered = (text: string) => (/^[A-Z][a-z]/.test(text) ? text.charAt(0).toLowerCase() + text.slice(1) : text)

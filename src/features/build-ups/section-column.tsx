@@ -1,0 +1,73 @@
+import { type RefObject, useLayoutEffect, useState } from 'react'
+import type { SectionLayer } from '../../../shared/drawing/section-layer.ts'
+import type { DrawingUnit } from '../../../shared/drawing/section-words.ts'
+import { sectionNotes } from '../../../shared/drawing/section-words.ts'
+import { sectionOf } from '../../../shared/drawing/section.ts'
+import { SectionFigure } from '../../ui/section-figure.tsx'
+import { useUnitSystem } from '../../ui/unit-system.tsx'
+
+interface SectionColumnProps {
+  layers: readonly SectionLayer[]
+  /** The list whose rows (`data-course`) the leaders run to. */
+  rows: RefObject<HTMLElement | null>
+  lit: string | null
+  onLight: (courseId: string | null) => void
+  onPick: (courseId: string) => void
+}
+
+interface Measures {
+  width: number
+  height: number
+  anchors: Record<string, number>
+}
+
+const sameAs = (a: Measures, b: Measures) => JSON.stringify(a) === JSON.stringify(b)
+const leastHeight = 430
+
+/** Where the heads of the rows stand beside the figure; followed as rows open and the window changes. */
+function useMeasures(column: HTMLElement | null, rows: RefObject<HTMLElement | null>, layers: readonly SectionLayer[]): Measures | null {
+  const [measures, setMeasures] = useState<Measures | null>(null)
+  useLayoutEffect(() => {
+    const list = rows.current
+    if (!column || !list) return
+    const measure = () => {
+      const box = column.getBoundingClientRect()
+      const beside = list.getBoundingClientRect().left >= box.right - 2
+      const heads = [...list.querySelectorAll<HTMLElement>('[data-course]')]
+      const anchors = beside ? Object.fromEntries(heads.map((head) => [head.dataset['course'] ?? '', Math.round(head.getBoundingClientRect().top + head.offsetHeight / 2 - box.top)])) : {}
+      const next = { width: Math.floor(box.width), height: beside ? Math.max(leastHeight, Math.round(list.getBoundingClientRect().height)) : leastHeight - 60, anchors }
+      setMeasures((now) => (now && sameAs(now, next) ? now : next))
+    }
+    const observer = new ResizeObserver(measure)
+    observer.observe(list)
+    observer.observe(column)
+    for (const head of list.querySelectorAll('[data-course]')) observer.observe(head)
+    measure()
+    return () => observer.disconnect()
+  }, [column, rows, layers])
+  return measures
+}
+
+/** Unit of the dimension lines for the units that a person wants to see. */
+export function drawingUnit(system: 'stated' | 'us' | 'si', layers: readonly SectionLayer[]): DrawingUnit {
+  if (system !== 'si') return 'mil'
+  return Math.max(0, ...layers.map((layer) => layer.thickness ?? 0)) >= 3000 ? 'mm' : 'µm'
+}
+
+/** The section beside the rows, with its leaders and its notes. */
+export function SectionColumn({ layers, rows, ...pointing }: SectionColumnProps) {
+  const [column, setColumn] = useState<HTMLElement | null>(null)
+  const { system } = useUnitSystem()
+  const measures = useMeasures(column, rows, layers)
+  const unit = drawingUnit(system, layers)
+  const beside = measures !== null && Object.keys(measures.anchors).length > 0
+  const options = measures && { width: measures.width, height: measures.height, unit, ...(beside ? { anchors: measures.anchors } : {}) }
+  return (
+    <figure ref={setColumn} className="min-w-0 border-b border-rule md:border-r md:border-b-0">
+      {options && <SectionFigure layers={layers} {...options} {...pointing} className="block" />}
+      {options && (
+        <figcaption className="border-t border-rule px-3 py-2 text-small text-pencil">{sectionNotes(layers, sectionOf(layers, options).scale, unit).join(' ')}</figcaption>
+      )}
+    </figure>
+  )
+}
