@@ -1,0 +1,75 @@
+import { useState } from 'react'
+import { useNavigate } from 'react-router'
+import type { Box } from '../../../shared/domain/fact.ts'
+import { type PlacedWord, quoteOf } from '../../../shared/domain/sheet-text.ts'
+import { Button } from '../../ui/button.tsx'
+import { AreaField } from '../../ui/field.tsx'
+import { Notice } from '../../ui/page.tsx'
+import { type PageSize, backWith, ownPage } from './marking.ts'
+
+interface MarkPanelProps {
+  revisionId: string
+  page: number
+  size: PageSize | undefined
+  words: readonly PlacedWord[]
+  box: Box | undefined
+  onBox: (box: Box) => void
+  returnTo: string
+}
+
+/** Beside the page while a place is marked: the words in the box, and the way back with it. */
+export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo }: MarkPanelProps) {
+  const navigate = useNavigate()
+  if (!ownPage(returnTo)) return <Notice tone="stop">The page that asked for this place cannot be gone back to. Open the form again and mark from there.</Notice>
+  const placeBox = () => {
+    if (size) onBox([size.width * 0.3, size.height * 0.3, size.width * 0.7, size.height * 0.33])
+    // The box is there after the next drawing of the page.
+    requestAnimationFrame(() => document.getElementById('marked-box')?.focus())
+  }
+  return (
+    <section aria-label="Mark the place" className="border border-resin bg-card p-4">
+      <h2 className="text-section">Mark the place</h2>
+      <p className="mb-3 text-pencil">Draw a box around the words that state the value, or tap one word.</p>
+      {box ? (
+        <Quote
+          key={`${page} ${box.join()}`}
+          words={quoteOf(words, box)}
+          onUse={(quote) => void navigate(backWith(returnTo, { revisionId, page, box, quote }) ?? '/')}
+        />
+      ) : (
+        <Button disabled={!size} onClick={placeBox}>
+          Put a box on the page
+        </Button>
+      )}
+      <p className="mt-3 text-small text-pencil">
+        By keyboard: arrow keys move the box, Shift and arrow keys size it, with Alt in fine steps. A hit of the search can be marked, too.
+      </p>
+      <div className="mt-3">
+        <Button look="quiet" onClick={() => void navigate(returnTo)}>
+          Go back without a place
+        </Button>
+      </div>
+    </section>
+  )
+}
+
+function Quote({ words, onUse }: { words: string; onUse: (quote: string) => void }) {
+  const [quote, setQuote] = useState(words)
+  const [error, setError] = useState<string>()
+  const use = () => {
+    const said = quote.trim()
+    if (said === '') setError('Write the words of the sheet that state the value.')
+    else onUse(said)
+  }
+  return (
+    <>
+      <AreaField
+        label="The sheet’s words" rows={3} maxLength={500} value={quote} onChange={(event) => setQuote(event.target.value)} error={error}
+        help={words === '' ? 'There is no text in this box. Write what stands there.' : 'As they stand in the box. Put right what was read wrongly.'}
+      />
+      <Button look="primary" className="mt-3" onClick={use}>
+        Use this place
+      </Button>
+    </>
+  )
+}
