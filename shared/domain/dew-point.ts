@@ -31,16 +31,29 @@ export function frostPoint(air: Air): Quantity<'°C'> {
   return quantity((overIce.b * gamma) / (overIce.a - gamma), '°C')
 }
 
-/** Slab above dew point, as a difference in the unit asked for: 5 Δ°F is 2.78 Δ°C. */
-export function dewPointMargin<U extends 'Δ°F' | 'Δ°C'>(slab: Quantity, air: Air, unit: U): Quantity<U> {
-  return convert(quantity(valueIn(slab, '°C') - dewPoint(air).value, 'Δ°C'), unit)
+/** Where water first settles on a cooling surface: as dew, or below 0 °C as frost, which comes half a kelvin before dew would. */
+export function condensationPoint(air: Air): { at: Quantity<'°C'>; name: 'dew point' | 'frost point' } {
+  const dew = dewPoint(air)
+  return dew.value >= 0 ? { at: dew, name: 'dew point' } : { at: frostPoint(air), name: 'frost point' }
 }
 
-/** Highest humidity of the air that still leaves a margin between slab and dew point, per cent. */
+/**
+ * Magnus constants of other sources move the dew point by up to 0.06 °C (reference values in tests/reference/dew-point.test.ts): a margin within this
+ * of its limit is neither kept nor missed, whatever the last digit says. The instruments' error is larger still; see `marginBounds`.
+ */
+export const greyBand = quantity(0.1, 'Δ°C')
+
+/** Slab above the dew point (below 0 °C: above the frost point), as a difference in the unit asked for: 5 Δ°F is 2.78 Δ°C. */
+export function dewPointMargin<U extends 'Δ°F' | 'Δ°C'>(slab: Quantity, air: Air, unit: U): Quantity<U> {
+  return convert(quantity(valueIn(slab, '°C') - condensationPoint(air).at.value, 'Δ°C'), unit)
+}
+
+/** Highest humidity of the air that still leaves a margin between slab and dew (or frost) point, per cent. Above 100: any humidity does. */
 export function highestHumidity({ slab, air, margin }: { slab: Quantity; air: Quantity; margin: Quantity<'Δ°F'> | Quantity<'Δ°C'> }): number {
   const t = valueIn(air, '°C')
   const td = valueIn(slab, '°C') - valueIn(margin, 'Δ°C')
-  return 100 * Math.exp((overWater.a * td) / (overWater.b + td) - (overWater.a * t) / (overWater.b + t))
+  const over = td >= 0 ? overWater : overIce
+  return 100 * Math.exp((over.a * td) / (over.b + td) - (overWater.a * t) / (overWater.b + t))
 }
 
 /** Common instruments: ±0.5 °C on either thermometer, ±3 % RH. Common practice; the instrument's own sheet decides. */

@@ -1,3 +1,4 @@
+import type { Loss } from './job.ts'
 import { type Quantity, convert, quantity, valueIn } from './units.ts'
 
 /**
@@ -32,6 +33,16 @@ export function wetFilmOfDry<F extends Film>(dry: F, { volumeSolids, thinning = 
   return { ...dry, value: (dry.value * (1 + thinning)) / fraction(volumeSolids) }
 }
 
+/** Theoretical spread rate of a dry film: 1604.17 × volume solids ÷ mil in ft²/gal; 1000 × volume solids ÷ µm in m²/L. Thinner counts into the volume. */
+export function spreadOfDryFilm(dry: Film, given: { volumeSolids: Quantity<'%'>; thinning?: number }): Spread {
+  return spreadOfWetFilm(wetFilmOfDry(dry, given))
+}
+
+/** Practical spread rate: what the floor gets per volume ordered. `lost`: theoretical × (1 − loss); `added`: theoretical ÷ (1 + loss). */
+export function practicalSpread<S extends Spread>(theoretical: S, loss: Loss): S {
+  return { ...theoretical, value: theoretical.value / withLoss(1, loss) }
+}
+
 /** Dry film reached: volume used × volume solids ÷ area. */
 export function dryFilmUsed({ volume, area, volumeSolids }: { volume: Quantity; area: Quantity; volumeSolids: Quantity<'%'> }): Quantity<'µm'> {
   return quantity((valueIn(volume, 'm³') * fraction(volumeSolids) * 1e6) / valueIn(area, 'm²'), 'µm')
@@ -46,7 +57,7 @@ export function volumeOfFilm({ area, film }: { area: Quantity; film: Quantity })
  * Volume to order for a volume on the floor. `lost`: a fraction of what is ordered never reaches the floor, so divide by 1 − loss;
  * `added`: an addition on top, so multiply by 1 + loss. 20 % lost is × 1.25, 20 % added is × 1.20.
  */
-export function withLoss(net: number, loss: { percent: number; convention: 'lost' | 'added' }): number {
+export function withLoss(net: number, loss: Loss): number {
   const share = loss.percent / 100
   return loss.convention === 'lost' ? net / (1 - share) : net * (1 + share)
 }

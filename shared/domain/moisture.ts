@@ -1,10 +1,13 @@
-import { type Quantity, quantity, valueIn } from './units.ts'
+import { type Quantity, convert, quantity, valueIn } from './units.ts'
 import { wholeUp } from './rounding.ts'
 
-/** Moisture emission rate: mass gained ÷ (area × time). Source: ASTM F1869, formula from memory. */
-export function moistureEmissionRate({ gain, area, time }: { gain: Quantity; area: Quantity; time: Quantity }): Quantity<'lb/1000 ft²·24 h'> {
-  const perSecond = valueIn(gain, 'kg') / (valueIn(area, 'm²') * valueIn(time, 's'))
-  return quantity(perSecond / valueIn(quantity(1, 'lb/1000 ft²·24 h'), 'g/m²·24 h') * 86_400_000, 'lb/1000 ft²·24 h')
+/**
+ * Moisture emission rate: mass gained ÷ (area × time); 52.911 × g ÷ (ft² × h) in lb/1000 ft²·24 h. The area is the one under the dome.
+ * Source: ASTM F1869, formula from memory.
+ */
+export function moistureEmissionRate<U extends 'lb/1000 ft²·24 h' | 'g/m²·24 h'>({ gain, area, time }: { gain: Quantity; area: Quantity; time: Quantity }, unit: U): Quantity<U> {
+  const perDay = valueIn(gain, 'g') / (valueIn(area, 'm²') * valueIn(time, 'd'))
+  return convert(quantity(perDay, 'g/m²·24 h'), unit)
 }
 
 /** Depth of a humidity probe: 40 % of the slab drying from one side, 20 % from both. Source: ASTM F2170. */

@@ -17,7 +17,7 @@ export function roundHalfEven(value: number, decimals: number): number {
  * What is above a whole number by less than 10⁻⁹ is that number, so that exactly 60.000 gal is 20 kits of 3 gal and not 21.
  */
 export function wholeUp(value: number): number {
-  return Math.ceil(value - 1e-9)
+  return Math.ceil(value - 1e-9) + 0
 }
 
 /** Decimals that show a positive number to at least three significant digits, at most four decimals, none from 100 on. */

@@ -28,7 +28,7 @@ describe('a value at a temperature, from the sheet’s own table', () => {
   })
 
   it('is interpolated straight in ln t over 1/T between two columns, with the sum shown', () => {
-    // T 60 °F = 288.706 K between 283.15 K and 294.261 K: weight (1/283.15 − 1/288.706) ÷ (1/283.15 − 1/294.261) = 0.50961; 60 × (30/60)^0.50962 = 42.14
+    // T 60 °F = 288.706 K between 283.15 K and 294.261 K: weight (1/283.15 − 1/288.706) ÷ (1/283.15 − 1/294.261) = 0.50962; 60 × (30/60)^0.50962 = 42.14
     const figure = ask(table, f(60))
     expect(figure.kind).toBe('computed')
     if (figure.kind !== 'computed') return

@@ -1,4 +1,4 @@
-import { dewPoint, dewPointMargin, marginBounds } from '../dew-point.ts'
+import { condensationPoint, dewPointMargin, marginBounds } from '../dew-point.ts'
 import { factOf, factsOf, rangeOf } from '../fact.ts'
 import { type Figure, figureOfFact, notStated } from '../figure.ts'
 import { formatNumber, formatRange, unitText } from '../format.ts'
@@ -41,13 +41,14 @@ export const temperatureInRange: Check = {
 
 function marginFigure(margin: Quantity, { input }: Floor): Figure {
   const { slabTemperature, airTemperature, relativeHumidity } = input.conditions
-  const dew = convert(dewPoint({ temperature: airTemperature, relativeHumidity }), slabTemperature.unit === '°F' ? '°F' : '°C')
+  const { at, name } = condensationPoint({ temperature: airTemperature, relativeHumidity })
+  const dew = convert(at, slabTemperature.unit === '°F' ? '°F' : '°C')
   const degrees = (of: Quantity) => `${formatNumber(of.value, 1)} ${unitText(of.unit)}`
   return {
     kind: 'computed',
     value: { min: margin.value, max: margin.value, unit: margin.unit },
     working: {
-      formula: 'slab − dew point (over water)',
+      formula: name === 'dew point' ? 'slab − dew point (over water)' : 'slab − frost point (over ice)',
       sum: `${degrees(slabTemperature)} − ${degrees(dew)} (air ${degrees(airTemperature)}, ${formatNumber(relativeHumidity)} % RH) = ${degrees(margin)}`,
       source: 'Magnus formula, WMO No. 8 constants',
     },
