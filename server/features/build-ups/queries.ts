@@ -1,5 +1,6 @@
 import { and, asc, count, desc, eq, inArray, ne, or, sql } from 'drizzle-orm'
 import { randomUUID } from 'node:crypto'
+import { isDeepStrictEqual } from 'node:util'
 import { AppError } from '../../../shared/api/errors.ts'
 import type { BuildUpSummary, VersionSummary } from '../../../shared/api/build-ups.ts'
 import type { User } from '../../../shared/api/session.ts'
@@ -329,10 +330,9 @@ async function takeVersion(tx: Transaction, { buildUpId, number, version }: Vers
 
 /** What changed between two lists of courses, course by course, for the trail. */
 function differences(before: Work, after: Work) {
-  const same = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b)
-  const changedIn = (list: readonly Course[], other: readonly Course[]) => list.filter((course) => !same(course, other.find(({ id }) => id === course.id)))
-  const conditions = !same(before.conditions, after.conditions)
-  const order = !same(before.courses.map(({ id }) => id), after.courses.map(({ id }) => id))
+  const changedIn = (list: readonly Course[], other: readonly Course[]) => list.filter((course) => !isDeepStrictEqual(course, other.find(({ id }) => id === course.id)))
+  const conditions = !isDeepStrictEqual(before.conditions, after.conditions)
+  const order = !isDeepStrictEqual(before.courses.map(({ id }) => id), after.courses.map(({ id }) => id))
   const side = (of: Work, other: Work) => ({
     courses: changedIn(of.courses, other.courses),
     ...(order ? { order: of.courses.map(({ id }) => id) } : {}),
