@@ -17,6 +17,7 @@ const idleMilliseconds = 20_000
 
 function startWorker({ heapMegabytes }: ReadLimits): Worker {
   const worker = startThread(new URL('./worker.ts', import.meta.url), {
+    ahead: ['pdfjs-dist/legacy/build/pdf.mjs', 'pdfjs-dist/legacy/build/pdf.worker.mjs'],
     resourceLimits: { maxOldGenerationSizeMb: heapMegabytes },
     stderr: true,
     stdout: true,
@@ -69,11 +70,12 @@ function rest(worker: Worker): void {
 function readWith(worker: Worker, path: string, limits: ReadLimits): Promise<ReadResult> {
   return new Promise((resolve) => {
     const before = process.memoryUsage.rss()
-    const end = (result: ReadResult) => {
+    const answered = (result: ReadResult) => end(result, true)
+    const end = (result: ReadResult, isHealthy = false) => {
       clearTimeout(timer)
       clearInterval(watch)
-      worker.off('message', end).off('error', broken).off('exit', ended)
-      if (limits === usual && ('pages' in result || result.problem === 'encrypted')) rest(worker)
+      worker.off('message', answered).off('error', broken).off('exit', ended)
+      if (limits === usual && isHealthy) rest(worker)
       else void worker.terminate()
       resolve(result)
     }
@@ -85,7 +87,7 @@ function readWith(worker: Worker, path: string, limits: ReadLimits): Promise<Rea
     const watch = setInterval(() => {
       if (process.memoryUsage.rss() - before > limits.growthMegabytes * megabyte) tooMuch('more memory to read than allowed')
     }, 50)
-    worker.once('message', end).once('error', broken).once('exit', ended)
+    worker.once('message', answered).once('error', broken).once('exit', ended)
     worker.postMessage(path)
   })
 }
