@@ -14,6 +14,8 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
           include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/api/**/*.test.ts'],
           setupFiles: ['tests/setup/no-console-errors.ts'],
         },

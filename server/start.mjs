@@ -70,9 +70,8 @@ function serve() {
 }
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) {
+  const [, , what = 'serve'] = process.argv
   install()
-  if (process.argv[2] !== 'prepare') {
-    build()
-    serve()
-  }
+  if (what !== 'prepare') build()
+  if (what === 'serve') serve()
 }
