@@ -18,3 +18,18 @@ export function voidsOf({ specificGravity, bulkDensity }: { specificGravity: num
 export function yieldPerLiquid(loading: Quantity, grainDensity: Quantity): number {
   return 1 + valueIn(loading, 'g/L') / valueIn(grainDensity, 'g/L')
 }
+
+/**
+ * Volume that a mortar takes on the floor: the greater of its absolute volume (resin + grains) and its sand packed by itself. Where the sand governs,
+ * the resin does not fill the voids and air stays in. Source: absolute volumes; ASTM C29 terms.
+ */
+export function mortarVolume({ resin, sand, grainDensity, bulkDensity }: { resin: Quantity; sand: Quantity; grainDensity: Quantity; bulkDensity: Quantity }) {
+  const absolute = valueIn(resin, 'm³') + absoluteVolume(sand, grainDensity).value
+  const packed = valueIn(sand, 'kg') / valueIn(bulkDensity, 'g/L')
+  return { volume: quantity(Math.max(absolute, packed), 'm³'), sandGoverns: packed > absolute }
+}
+
+/** Mass of sand on an area covered to a height by a heap's density: what a broadcast of that height holds, packed. */
+export function packedOnArea(height: Quantity, bulkDensity: Quantity): Quantity<'kg/m²'> {
+  return quantity(valueIn(height, 'm') * valueIn(bulkDensity, 'g/L'), 'kg/m²')
+}

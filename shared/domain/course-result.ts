@@ -1,8 +1,8 @@
-import { yieldPerLiquid } from './aggregate.ts'
 import { type Course, type EvaluationInput, dryStages } from './build-up.ts'
 import type { CourseResult } from './evaluation.ts'
 import { type Fact, factOf, factsOf, rangeOf } from './fact.ts'
 import { type Figure, notStated } from './figure.ts'
+import { filledYield } from './filled-mix.ts'
 import { formatNumber, formatRange } from './format.ts'
 import { type Film, type Spread, spreadOfWetFilm, wetFilmOfSpread } from './film.ts'
 import { unionOfHazards } from './hazard.ts'
@@ -40,14 +40,11 @@ function noThickness(course: Course): Figure {
   return notStated('filmThickness', { of: course.title, subject: null, ask: 'whoever builds this up', because: 'neither thickness nor spread rate is given' })
 }
 
-/** Volume of sand per volume of liquid resin, from the loading and the grain's density; undefined when the density is not stated. */
+/** Volume of sand per volume of liquid resin; undefined, with what is missing, when the grain's density is not stated. */
 function fillerOf(course: Course, products: EvaluationInput['products']) {
-  if (!course.filler) return { perLiquid: 0, product: undefined, fact: undefined }
-  const product = products[course.filler.productId]
-  const fact = product && factOf(product.facts, 'density')
-  const range = rangeOf(fact)
-  if (!product || !fact || !range) return { perLiquid: undefined, product, fact: undefined }
-  return { perLiquid: yieldPerLiquid(course.filler.loading, leastOf(range)) - 1, product, fact }
+  const filled = filledYield(course, products)
+  if ('missing' in filled) return { perLiquid: undefined, missing: filled.missing, fact: undefined }
+  return { perLiquid: filled.perLiquid - 1, missing: undefined, fact: filled.fact }
 }
 type Filler = ReturnType<typeof fillerOf>
 
@@ -70,7 +67,7 @@ function filmsOf(course: Course, mix: MixFacts | undefined, filler: Filler): Fil
   const noShare = () =>
     !mix ? noMix('volumeSolids', course)
     : !solids ? missingOfMix('volumeSolids', mix)
-    : missingDensity(filler.product, course)
+    : (filler.missing ?? missingOfMix('volumeSolids', mix))
   const from = solidsFact ? [sourceOf('solids by volume', solidsFact)] : []
   const percent = share === undefined ? '' : `${formatNumber(share * 100, 1)} %`
 
@@ -92,12 +89,6 @@ function filmsOf(course: Course, mix: MixFacts | undefined, filler: Filler): Fil
   return { wet, dry, spread }
 }
 
-function missingDensity(product: ProductFacts | undefined, course: Course): Figure {
-  return notStated('density', {
-    of: product?.name ?? course.title, subject: product ? { kind: 'product', id: product.id } : null, ask: 'the maker, in writing', because: 'the sand’s own density is not stated',
-  })
-}
-
 /** What a person chose for a course is a figure too. */
 function chosen(value: Quantity, how: string): Figure {
   return computed(value, { formula: 'chosen for this course', sum: `${shown(value)} ${how}`, source: 'the build-up' })
@@ -116,9 +107,9 @@ function spreadFigure(film: Film): Figure {
 }
 
 /** Liquid resin for 1,000 ft² in gallons, or for 100 m² in litres: film × area ÷ yield of the filled mix. */
-function resinOf(spread: Figure, filler: Filler, course: Course): Figure {
+function resinOf(spread: Figure, filler: Filler): Figure {
   if (spread.kind === 'not-stated') return spread
-  if (filler.perLiquid === undefined) return missingDensity(filler.product, course)
+  if (filler.missing) return filler.missing
   const rate = leastOf(spread.value)
   const us = rate.unit === 'ft²/gal'
   const area = us ? 1000 : 100
@@ -178,7 +169,7 @@ export function courseResult(course: Course, input: EvaluationInput, next: MixFa
   const mix = course.mixId ? input.mixes[course.mixId] : undefined
   const filler = fillerOf(course, input.products)
   const films = filmsOf(course, mix, filler)
-  const resinPerArea = resinOf(films.spread, filler, course)
+  const resinPerArea = resinOf(films.spread, filler)
   const at = (property: Property): Figure =>
     mix ? valueAt(mix.facts, { property, temperature: input.conditions.slabTemperature, mix }) : noMix(property, course)
   const handled = productsOf(course, input)
