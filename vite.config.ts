@@ -18,6 +18,7 @@ export default defineConfig({
           hookTimeout: 60_000,
           include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/api/**/*.test.ts'],
           setupFiles: ['tests/setup/no-console-errors.ts'],
+          globalSetup: ['tests/setup/database-template.ts'],
         },
       },
     ],

@@ -1,49 +1,83 @@
-import { mkdirSync, mkdtempSync, rmSync } from 'node:fs'
-import { tmpdir } from 'node:os'
-import { join } from 'node:path'
+import { mkdirSync } from 'node:fs'
 import { type NodePgDatabase, drizzle } from 'drizzle-orm/node-postgres'
-import { migrate } from 'drizzle-orm/node-postgres/migrator'
 import pg from 'pg'
-import { startThread } from '../thread.ts'
+import { startEmbedded } from './embedded.ts'
+import { migrateDatabase } from './migrate.ts'
 import * as schema from './schema/index.ts'
 
 export type Database = NodePgDatabase<typeof schema>
 export type Transaction = Parameters<Parameters<Database['transaction']>[0]>[0]
+
 export interface OpenDatabase {
   db: Database
   pool: pg.Pool
   kind: 'embedded' | 'server'
+  /** Does it answer, within two seconds. */
   isAnswering(): Promise<boolean>
   checkpoint(): Promise<void>
+  /** Writes a copy of the embedded data folder to a file; refused on a server. */
+  dumpTo(file: string): Promise<void>
   close(): Promise<void>
 }
 
-export async function openDatabase(options: { dataDir: string; databaseUrl?: string; log?: (line: string) => void }): Promise<OpenDatabase> {
-  const folder = join(options.dataDir, 'database')
-  mkdirSync(folder, { recursive: true, mode: 0o700 })
-  const socketFolder = mkdtempSync(join(tmpdir(), 'wc-'))
-  const worker = startThread(new URL('./pglite-worker.ts', import.meta.url), {
-    workerData: { dir: folder, socket: join(socketFolder, '.s.PGSQL.5432') },
+export interface OpenOptions {
+  dataDir: string
+  databaseUrl?: string
+  log?: (line: string) => void
+  /** After this the caller gets an error and the database counts as not answering until it does again. */
+  queryTimeLimitMs?: number
+  /** A dump of a migrated data folder to begin with. */
+  loadFrom?: string
+}
+
+const defaultTimeLimit = 20_000
+
+/** Opens the database, embedded in `dataDir` or on the server of `databaseUrl`, and brings its tables up to date. */
+export async function openDatabase(options: OpenOptions): Promise<OpenDatabase> {
+  const limit = options.queryTimeLimitMs ?? defaultTimeLimit
+  const log = options.log ?? (() => undefined)
+  mkdirSync(options.dataDir, { recursive: true, mode: 0o700 })
+  const embedded = options.databaseUrl ? undefined : await startEmbedded({ dataDir: options.dataDir, loadFrom: options.loadFrom, log })
+  // One connection to the embedded database: pglite-socket queues single protocol messages, so the parse, bind and execute of two connections
+  // outside transactions mix (seen: "bind supplies 2 parameters, requires 3", "portal does not exist", a session lost).
+  const pool = new pg.Pool({
+    ...(embedded ? { ...embedded.connection, max: 1 } : { connectionString: options.databaseUrl, max: 10, statement_timeout: limit }),
+    connectionTimeoutMillis: 10_000,
+    query_timeout: limit,
   })
-  await new Promise<void>((resolve, reject) => {
-    worker.once('message', () => resolve())
-    worker.once('error', reject)
-  })
-  const pool = new pg.Pool({ host: socketFolder, port: 5432, user: 'postgres', database: 'postgres', max: 3, connectionTimeoutMillis: 5000 })
-  pool.on('error', (error) => options.log?.(String(error)))
+  pool.on('error', (error) => log(`database ${error.message}`))
   const db = drizzle(pool, { schema })
-  await migrate(db, { migrationsFolder: join(import.meta.dirname, '../../drizzle') })
+  const close = async () => {
+    await pool.end()
+    await embedded?.close()
+  }
+  try {
+    await migrateDatabase(db, pool, embedded ? 'embedded' : 'server')
+  } catch (error) {
+    await close()
+    throw error
+  }
   return {
-    db, pool, kind: 'embedded',
-    isAnswering: () => pool.query('select 1').then(() => true, () => false),
-    checkpoint: async () => void (await pool.query('checkpoint')),
-    async close() {
-      await pool.end()
-      const closed = new Promise((resolve) => worker.once('message', resolve))
-      worker.postMessage('close')
-      await closed
-      await worker.terminate()
-      rmSync(socketFolder, { recursive: true, force: true })
-    },
+    db,
+    pool,
+    kind: embedded ? 'embedded' : 'server',
+    isAnswering: () => answers(pool),
+    checkpoint: () => embedded?.order('checkpoint') ?? Promise.resolve(),
+    dumpTo: (file) => embedded?.order({ dumpTo: file }) ?? Promise.reject(new Error('A PostgreSQL server is backed up with pg_dump.')),
+    close,
+  }
+}
+
+/** One question with a short limit of its own: a database that is stuck or full must not hold the health check up. */
+async function answers(pool: pg.Pool): Promise<boolean> {
+  let timer: NodeJS.Timeout | undefined
+  const late = new Promise<boolean>((resolve) => {
+    timer = setTimeout(() => resolve(false), 2000)
+  })
+  const answered = pool.query('select 1').then(() => true, () => false)
+  try {
+    return await Promise.race([answered, late])
+  } finally {
+    clearTimeout(timer)
   }
 }

@@ -1,0 +1,24 @@
+import { mkdtemp, rm } from 'node:fs/promises'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
+import type { TestProject } from 'vitest/node'
+import { openDatabase } from '../../server/db/open.ts'
+
+declare module 'vitest' {
+  interface ProvidedContext {
+    /** Path of a dump of a migrated, empty database. */
+    databaseTemplate: string
+  }
+}
+
+/** Makes the migrated database once for a run; every test file begins with a copy. */
+export async function setup(project: TestProject): Promise<() => Promise<void>> {
+  const dataDir = await mkdtemp(join(tmpdir(), 'wearcourse-template-'))
+  const dump = join(dataDir, 'template.tar')
+  const database = await openDatabase({ dataDir })
+  await database.checkpoint()
+  await database.dumpTo(dump)
+  await database.close()
+  project.provide('databaseTemplate', dump)
+  return () => rm(dataDir, { recursive: true, force: true })
+}
