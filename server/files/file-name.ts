@@ -8,8 +8,8 @@ export function cleanFileName(name: string, ending: string): string {
     .replace(/[\p{Cc}\p{Cf}\p{Cs}\p{Co}\p{Zl}\p{Zp}]/gu, '')
     .replace(/[<>:"|?*]/g, '_')
     .replace(/\s+/g, ' ')
-    .replace(/^[\s.]+|[\s.]+$/g, '')
+    .trim()
   const stem = clean.toLowerCase().endsWith(ending) ? clean.slice(0, -ending.length) : clean
-  const kept = [...stem].slice(0, longest).join('').trim()
+  const kept = Array.from(stem.replace(/^[\s.]+|[\s.]+$/g, '')).slice(0, longest).join('').trim()
   return `${kept || 'sheet'}${ending}`
 }

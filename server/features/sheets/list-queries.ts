@@ -1,6 +1,7 @@
-import { type SQL, and, asc, count, desc, eq, isNull, sql } from 'drizzle-orm'
+import { type SQL, and, asc, count, desc, eq, isNull, ne, sql } from 'drizzle-orm'
 import type * as z from 'zod'
 import type { SheetRow, Subject, sheetEndpoints } from '../../../shared/api/sheets.ts'
+import type { SheetKind } from '../../../shared/domain/sheet.ts'
 import type { Database } from '../../db/open.ts'
 import { mixes, products } from '../../db/schema/catalogue.ts'
 import { sheetRevisions, sheets } from '../../db/schema/sheets.ts'
@@ -50,13 +51,13 @@ export async function listSheets(db: Database, wanted: Wanted & { oldestDay: str
   return pageOf(items, { offset, limit, total: counted?.total ?? 0 })
 }
 
-/** Sheets with a title like this one, likest first. */
-export function findAlike(db: Database, { title, exceptId }: { title: string; exceptId: string }) {
+/** Sheets of the same kind with a title like this one, likest first. */
+export function findAlike(db: Database, { title, kind, exceptId }: { title: string; kind: SheetKind; exceptId: string }) {
   const likeness = sql`similarity(lower(${sheets.title}), lower(${title}))`
   return db
     .select({ id: sheets.id, kind: sheets.kind, title: sheets.title })
     .from(sheets)
-    .where(and(sql`${likeness} > 0.45`, sql`${sheets.id} <> ${exceptId}`))
+    .where(and(sql`${likeness} > 0.45`, eq(sheets.kind, kind), ne(sheets.id, exceptId)))
     .orderBy(desc(likeness), asc(sheets.id))
     .limit(5)
 }

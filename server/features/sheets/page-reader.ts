@@ -43,7 +43,7 @@ async function readPage(document: PDFDocumentProxy, number: number): Promise<Rea
   const page = await document.getPage(number)
   const viewport = page.getViewport({ scale: 1 })
   const operators = await page.getOperatorList({ annotationMode: 0 })
-  const lines = placeWords({ operators, fontOf: fontsOf(page), toShown: viewport.transform as number[], size: viewport })
+  const lines = placeWords({ operators, fontOf: fontsOf(page), toShown: viewport.transform, size: viewport })
   page.cleanup()
   return {
     width: round(viewport.width),

@@ -27,6 +27,10 @@ interface Input {
 const identity: Matrix = [1, 0, 0, 1, 0, 0]
 const fontIdentity: Matrix = [0.001, 0, 0, 0.001, 0, 0]
 
+/** Of the em, where a font does not say. */
+const usualAscent = 0.8
+const usualDescent = -0.2
+
 /** Text state of ISO 32000-1, 9.3. */
 const freshText = {
   font: undefined as GlyphRunFont | undefined, size: 0, direction: 1, charSpacing: 0, wordSpacing: 0, scale: 1, leading: 0, rise: 0,
@@ -51,8 +55,8 @@ export function placeWords({ operators, fontOf, toShown, size }: Input): PlacedT
     state = stack.pop() ?? state
   }
   operators.fnArray.forEach((operator, index) => {
-    const args = (operators.argsArray[index] ?? []) as never[]
-    const [first = 0, second = 0] = args as unknown as number[]
+    const args = (operators.argsArray[index] ?? []) as unknown[]
+    const [first = 0, second = 0] = args as number[]
     switch (operator) {
       case OPS.save:
         stack.push({ ...state })
@@ -63,17 +67,17 @@ export function placeWords({ operators, fontOf, toShown, size }: Input): PlacedT
         break
       case OPS.paintFormXObjectBegin:
         stack.push({ ...state })
-        if (args[0]) state.ctm = times(state.ctm, args[0])
+        if (args[0]) state.ctm = times(state.ctm, args[0] as Matrix)
         break
       case OPS.transform:
-        state.ctm = times(state.ctm, args)
+        state.ctm = times(state.ctm, args as number[])
         break
       case OPS.beginText:
         matrix = identity
         x = y = lineX = lineY = 0
         break
       case OPS.setTextMatrix:
-        matrix = (args.length === 1 ? Array.from(args[0] as unknown as ArrayLike<number>) : args) as Matrix
+        matrix = (args.length === 1 ? Array.from(args[0] as ArrayLike<number>) : args) as Matrix
         x = y = lineX = lineY = 0
         break
       case OPS.moveText:
@@ -90,7 +94,7 @@ export function placeWords({ operators, fontOf, toShown, size }: Input): PlacedT
         move(0, state.leading)
         break
       case OPS.setFont:
-        state.font = fontOf(args[0] as unknown as string)
+        state.font = fontOf(args[0] as string)
         state.size = Math.abs(second)
         state.direction = second < 0 ? -1 : 1
         break
@@ -107,7 +111,7 @@ export function placeWords({ operators, fontOf, toShown, size }: Input): PlacedT
         state.rise = first
         break
       case OPS.showText: {
-        const [dx, dy] = showGlyphs({ glyphs: args[0] as unknown as (Glyph | number)[], state, matrix: times(state.ctm, matrix), x, y, writer })
+        const [dx, dy] = showGlyphs({ glyphs: args[0] as (Glyph | number)[], state, matrix: times(state.ctm, matrix), x, y, writer })
         x += dx
         y += dy
         break
@@ -132,8 +136,8 @@ function showGlyphs({ glyphs, state, matrix, x, y, writer }: Run): [number, numb
   const fontMatrix = font?.fontMatrix ?? fontIdentity
   const perUnit = size * (fontMatrix[0] ?? 0.001)
   const scale = state.scale * direction
-  const ascent = size * (font?.isType3Font ? 0.8 : clamp(font?.ascent, 0.5, 1.2, 0.8)) * direction
-  const descent = size * (font?.isType3Font ? -0.2 : clamp(font?.descent, -0.5, 0, -0.2)) * direction
+  const ascent = size * direction * (font?.isType3Font ? usualAscent : within(font?.ascent, [0.5, 1.2], usualAscent))
+  const descent = size * direction * (font?.isType3Font ? usualDescent : within(font?.descent, [-0.5, 0], usualDescent))
   const vertical = font?.vertical === true
   let pen = 0
   for (const glyph of glyphs) {
@@ -158,6 +162,7 @@ function showGlyphs({ glyphs, state, matrix, x, y, writer }: Run): [number, numb
   return vertical ? [0, -pen] : [pen * scale, 0]
 }
 
-function clamp(value: number | undefined, least: number, most: number, otherwise: number): number {
+/** A font's own measure as far as it can be believed. */
+function within(value: number | undefined, [least, most]: [number, number], otherwise: number): number {
   return value === undefined || !Number.isFinite(value) || value === 0 ? otherwise : Math.min(most, Math.max(least, value))
 }

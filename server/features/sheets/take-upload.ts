@@ -49,20 +49,20 @@ async function keep({ db, files, fields, user, file, pages }: Kept): Promise<Upl
   const { path, sha256, fileName, bytes } = file
   const suggestion = suggestDetails(pages, fileName)
   const details = { kind: fields.kind ?? suggestion.kind, title: fields.title ?? suggestion.title, maker: fields.maker ?? '', subjects: [] }
-  let isNew = false
+  const stored = { isNew: false }
   try {
     const kept = await db.transaction(async (tx) => {
       const sheetId = fields.sheetId ?? (await addSheet(tx, details, user.id))
       const revisionId = await addRevision(tx, { sheetId, sha256, bytes, fileName, revisionDate: fields.revisionDate ?? null, pages, uploadedBy: user.id })
-      isNew = await files.adopt(path, sha256)
+      stored.isNew = await files.adopt(path, sha256)
       return { revisionId, sheet: await readSheet(tx, sheetId, user) }
     })
-    const alike = fields.sheetId ? [] : await findAlike(db, { title: kept.sheet.title, exceptId: kept.sheet.id })
+    const alike = fields.sheetId ? [] : await findAlike(db, { title: kept.sheet.title, kind: kept.sheet.kind, exceptId: kept.sheet.id })
     return { outcome: 'added', fileName, ...kept, suggestion, alike }
   } catch (error) {
     const here = await findByBytes(db, sha256)
     if (here) return { outcome: 'duplicate', fileName, ...here }
-    if (isNew) await files.discard(sha256)
+    if (stored.isNew) await files.discard(sha256)
     throw error
   }
 }

@@ -1,4 +1,4 @@
-import { type FormEvent, type ReactNode, useState } from 'react'
+import { type ReactNode, type SubmitEvent, useState } from 'react'
 import type { Sheet, Subject, Suggestion } from '../../../shared/api/sheets.ts'
 import { sheetEndpoints } from '../../../shared/api/sheets.ts'
 import type { SheetKind } from '../../../shared/domain/sheet.ts'
@@ -39,10 +39,11 @@ export function DetailsForm({ sheet, revisionId, suggestion, alike = [], beside,
     setSubjects(next)
     if (maker === '' && next[0]) setMaker(next[0].maker)
   }
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
-    const revisionDate = String(values.get('dates.0.revisionDate')).trim() || null
+    const typed = values.get('dates.0.revisionDate')
+    const revisionDate = (typeof typed === 'string' && typed.trim()) || null
     const body = { version: sheet.version, kind: values.get('kind'), title: values.get('title'), maker, subjects: subjects.map(refOf), dates: [{ revisionId, revisionDate }] }
     const saved = await submit(body)
     if (!saved) return

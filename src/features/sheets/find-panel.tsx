@@ -22,7 +22,7 @@ export function FindPanel({ find, onMark }: FindPanelProps) {
     return () => clearTimeout(timer)
   }, [text, q, setQ])
   return (
-    <search className="block border border-rule bg-card p-4">
+    <search className="block border border-rule bg-card p-3 lg:p-4">
       <TextField
         label="Search in this sheet" type="search" value={text} onChange={(event) => setText(event.target.value)}
         onKeyDown={(event) => {
@@ -60,19 +60,19 @@ export function FindPanel({ find, onMark }: FindPanelProps) {
   )
 }
 
-function HitList({ find }: { find: Finding }) {
+function HitList({ find: { hits, current, goTo } }: { find: Finding }) {
   const currentItem = useRef<HTMLLIElement>(null)
   useEffect(() => {
     const list = currentItem.current?.parentElement
     if (list && currentItem.current) list.scrollTop = currentItem.current.offsetTop - list.clientHeight / 2
-  }, [find.current])
+  }, [current])
   return (
-    <ol className="relative mt-2 max-h-56 overflow-y-auto lg:max-h-96">
-      {find.hits.map((hit, index) => (
-        <li key={index} ref={index === find.current ? currentItem : undefined}>
+    <ol className="relative mt-2 max-h-32 overflow-y-auto lg:max-h-96">
+      {hits.map((hit, index) => (
+        <li key={index} ref={index === current ? currentItem : undefined}>
           <button
-            type="button" aria-current={index === find.current || undefined} onClick={() => find.goTo(index)}
-            className={`block w-full border-l-4 px-2 py-1 text-left text-small ${index === find.current ? 'border-resin bg-resin-wash' : 'border-transparent hover:bg-paper'}`}
+            type="button" aria-current={index === current || undefined} onClick={() => goTo(index)}
+            className={`block w-full border-l-4 px-2 py-1 text-left text-small ${index === current ? 'border-resin bg-resin-wash' : 'border-transparent hover:bg-paper'}`}
           >
             <span className="text-pencil">Page {hit.page}</span> {hit.excerpt}
           </button>

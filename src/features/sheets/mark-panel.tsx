@@ -27,9 +27,9 @@ export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo 
     requestAnimationFrame(() => document.getElementById('marked-box')?.focus())
   }
   return (
-    <section aria-label="Mark the place" className="border border-resin bg-card p-4">
-      <h2 className="text-section">Mark the place</h2>
-      <p className="mb-3 text-pencil">Draw a box around the words that state the value, or tap one word.</p>
+    <section aria-label="Mark the place" className="border border-resin bg-card p-3 lg:p-4">
+      <h2 className="text-section max-lg:sr-only">Mark the place</h2>
+      <p className={`mb-2 text-pencil ${box ? 'max-lg:hidden' : ''}`}>Draw a box around the words that state the value, or tap one word.</p>
       {box ? (
         <Quote
           key={`${page} ${box.join()}`}
@@ -41,14 +41,12 @@ export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo 
           Put a box on the page
         </Button>
       )}
-      <p className="mt-3 text-small text-pencil">
+      <p className="mt-3 text-small text-pencil max-lg:hidden">
         By keyboard: arrow keys move the box, Shift and arrow keys size it, with Alt in fine steps. A hit of the search can be marked, too.
       </p>
-      <div className="mt-3">
-        <Button look="quiet" onClick={() => void navigate(returnTo)}>
-          Go back without a place
-        </Button>
-      </div>
+      <Button look="quiet" className="mt-2 -ml-3" onClick={() => void navigate(returnTo)}>
+        Go back without a place
+      </Button>
     </section>
   )
 }
@@ -64,10 +62,10 @@ function Quote({ words, onUse }: { words: string; onUse: (quote: string) => void
   return (
     <>
       <AreaField
-        label="The sheet’s words" rows={3} maxLength={500} value={quote} onChange={(event) => setQuote(event.target.value)} error={error}
+        label="The sheet’s words" rows={2} maxLength={500} value={quote} onChange={(event) => setQuote(event.target.value)} error={error}
         help={words === '' ? 'There is no text in this box. Write what stands there.' : 'As they stand in the box. Put right what was read wrongly.'}
       />
-      <Button look="primary" className="mt-3" onClick={use}>
+      <Button look="primary" className="mt-2" onClick={use}>
         Use this place
       </Button>
     </>

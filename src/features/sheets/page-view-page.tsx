@@ -93,7 +93,8 @@ function Pages({ revision }: { revision: Revision }) {
     <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_320px]">
       <div className="min-w-0 max-lg:order-2">
         <ViewToolbar page={page} pages={revision.pages} onPage={goTo} zoom={zoom} onZoom={setZoom} />
-        <div ref={ref} className="mt-3 overflow-x-auto" tabIndex={0} role="region" aria-label={`Page ${page} of ${revision.pages}`}>
+        {/* eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls must be reachable by keyboard */}
+        <div ref={ref} className="mt-3 overflow-x-auto" tabIndex={0} role="region" data-wide={zoom > 1 || undefined} aria-label={`Page ${page} of ${revision.pages}`}>
           {error !== undefined && <Notice tone="stop">The PDF could not be fetched. Load the page again, or download the file.</Notice>}
           {pdf && width > 0 && (
             <PdfPage pdf={pdf} page={page} fitWidth={width} zoom={zoom}>
@@ -108,12 +109,19 @@ function Pages({ revision }: { revision: Revision }) {
           {!pdf && error === undefined && <p role="status" className="min-h-[70vh] p-4 text-pencil">Loading the PDF …</p>}
         </div>
       </div>
-      <aside className="flex flex-col gap-4 lg:sticky lg:top-3">
+      {/* One column on a phone: search, page, and the mark's panel at the foot of the screen. */}
+      <div className="flex flex-col gap-4 max-lg:contents lg:sticky lg:top-3">
         {marking && (
-          <MarkPanel revisionId={revision.id} page={page} size={words.data} words={words.data?.words ?? []} box={marked} onBox={setBox} returnTo={returnTo} />
+          <div className="max-lg:sticky max-lg:bottom-0 max-lg:z-10 max-lg:order-3">
+            <MarkPanel revisionId={revision.id} page={page} size={words.data} words={words.data?.words ?? []} box={marked} onBox={setBox} returnTo={returnTo} />
+          </div>
         )}
-        {revision.state === 'ready' && <FindPanel find={find} onMark={marking ? markHit : undefined} />}
-      </aside>
+        {revision.state === 'ready' && (
+          <div className="max-lg:order-1">
+            <FindPanel find={find} onMark={marking ? markHit : undefined} />
+          </div>
+        )}
+      </div>
     </div>
   )
 }
@@ -139,7 +147,7 @@ function useViewAddress(pages: number) {
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
       const by = event.key === 'ArrowRight' ? 1 : event.key === 'ArrowLeft' ? -1 : 0
-      const elsewhere = (event.target as HTMLElement).closest('input, textarea, select, [contenteditable], [role="application"]')
+      const elsewhere = (event.target as HTMLElement).closest('input, textarea, select, [contenteditable], [role="application"], [data-wide]')
       if (by === 0 || elsewhere || event.ctrlKey || event.metaKey || event.altKey || event.shiftKey) return
       if (page + by >= 1 && page + by <= pages) {
         event.preventDefault()

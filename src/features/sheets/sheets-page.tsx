@@ -78,9 +78,9 @@ function SheetsTable({ page, address, stale }: { page: ListPage<SheetRow>; addre
   const columns = useMemo<ListColumns<SheetRow>>(
     () => [
       { id: 'title', accessorKey: 'title', header: 'Sheet', cell: ({ row }) => <SheetTitle sheet={row.original} /> },
+      { id: 'revisionDate', accessorKey: 'revisionDate', header: 'Revision, age', cell: ({ row }) => <SheetAge {...row.original} /> },
       { id: 'kind', header: 'Kind', enableSorting: false, accessorFn: (row) => (row.kind === 'data' ? 'data' : 'safety') },
       { id: 'maker', accessorKey: 'maker', header: 'Maker', cell: ({ row }) => row.original.maker || <span className="text-pencil">not given</span> },
-      { id: 'revisionDate', accessorKey: 'revisionDate', header: 'Revision, age', cell: ({ row }) => <SheetAge {...row.original} /> },
       { id: 'subjects', header: 'Speaks of', enableSorting: false, cell: ({ row }) => <Subjects names={row.original.subjects} /> },
       { id: 'pages', accessorKey: 'pages', header: 'Pages', meta: { numeric: true }, cell: ({ row }) => <OpenPdf sheet={row.original} /> },
       { id: 'uploadedAt', accessorKey: 'uploadedAt', header: 'Uploaded', cell: ({ row }) => <time dateTime={row.original.uploadedAt}>{dayOf(row.original.uploadedAt)}</time> },
@@ -121,7 +121,7 @@ function Subjects({ names }: { names: string[] }) {
 
 function OpenPdf({ sheet }: { sheet: SheetRow }) {
   return (
-    <Link className="text-resin underline-offset-4 hover:underline" aria-label={`Open ${sheet.title}, ${sheet.pages} pages`} to={paths.sheetPage(sheet.revisionId)}>
+    <Link className="text-resin underline-offset-4 hover:underline" aria-label={`Open ${sheet.title}, ${sheet.pages} ${sheet.pages === 1 ? 'page' : 'pages'}`} to={paths.sheetPage(sheet.revisionId)}>
       {sheet.pages}
     </Link>
   )

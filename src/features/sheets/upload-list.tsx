@@ -120,8 +120,7 @@ function Added({ result, saved, onSaved }: OutcomeProps<Extract<UploadedFile, { 
   return (
     <>
       <p className="mt-1 mb-2 text-pencil">
-        Kept, {revision?.pages} {revision?.pages === 1 ? 'page' : 'pages'}. Check what the text suggests.{' '}
-        {revision?.state === 'no-text' && <NoText />}
+        Kept, {revision?.pages} {revision?.pages === 1 ? 'page' : 'pages'}. {revision?.state === 'no-text' ? <NoText /> : 'Check what the text suggests.'}
       </p>
       <DetailsForm sheet={result.sheet} revisionId={result.revisionId} suggestion={result.suggestion} alike={result.alike} onSaved={onSaved} beside={open} />
     </>
