@@ -16,7 +16,7 @@ export default defineConfig({
           environment: 'node',
           testTimeout: 30_000,
           hookTimeout: 60_000,
-          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/api/**/*.test.ts'],
+          include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/reference/**/*.test.ts', 'tests/api/**/*.test.ts', 'tests/durability/**/*.test.ts'],
           setupFiles: ['tests/setup/no-console-errors.ts'],
           globalSetup: ['tests/setup/database-template.ts'],
         },

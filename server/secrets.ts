@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto'
-import { readFile, writeFile } from 'node:fs/promises'
+import { readFile } from 'node:fs/promises'
 import { join } from 'node:path'
+import { writeDurably } from './files/write-durably.ts'
 
 /** The session secret: made once and kept in `DATA_DIR/session-secret`, readable by the owner alone. */
 export async function sessionSecretIn(dataDir: string): Promise<string> {
@@ -10,7 +11,7 @@ export async function sessionSecretIn(dataDir: string): Promise<string> {
   } catch (error) {
     if ((error as NodeJS.ErrnoException).code !== 'ENOENT') throw error
     const secret = randomBytes(48).toString('base64url')
-    await writeFile(path, `${secret}\n`, { mode: 0o600, flag: 'wx' })
+    writeDurably(path, `${secret}\n`)
     return secret
   }
 }

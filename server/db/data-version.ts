@@ -1,7 +1,8 @@
-import { existsSync, readFileSync, readdirSync, writeFileSync } from 'node:fs'
+import { existsSync, readFileSync, readdirSync } from 'node:fs'
 import { createRequire } from 'node:module'
 import { dirname, join } from 'node:path'
 import * as z from 'zod'
+import { writeDurably } from '../files/write-durably.ts'
 
 const markSchema = z.object({ pglite: z.string(), format: z.number() })
 const format = 1
@@ -20,10 +21,10 @@ export function checkDataVersion(dataDir: string): void {
   const database = join(dataDir, 'database')
   const isEmpty = !existsSync(database) || readdirSync(database).length === 0
   if (isEmpty) {
-    writeFileSync(mark, `${JSON.stringify({ pglite: pgliteVersion, format })}\n`, { mode: 0o600 })
+    writeDurably(mark, `${JSON.stringify({ pglite: pgliteVersion, format })}\n`)
     return
   }
-  const written = existsSync(mark) ? markSchema.safeParse(JSON.parse(readFileSync(mark, 'utf8'))) : undefined
+  const written = existsSync(mark) ? markSchema.safeParse(JSON.parse(readFileSync(mark, 'utf8') || 'null')) : undefined
   if (written?.success && written.data.pglite === pgliteVersion && written.data.format === format) return
   const by = written?.success ? `PGlite ${written.data.pglite}` : 'an unknown version of PGlite'
   throw new Error(
