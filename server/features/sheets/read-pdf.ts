@@ -9,7 +9,7 @@ export interface ReadLimits {
   /** How far the whole process may grow while a file is read: buffers are not on the heap. */
   growthMegabytes: number
 }
-const usual: ReadLimits = { milliseconds: 30_000, heapMegabytes: 512, growthMegabytes: 1024 }
+const usual: ReadLimits = { milliseconds: 30_000, heapMegabytes: 512, growthMegabytes: 640 }
 const atOnce = 2
 const megabyte = 1024 * 1024
 /** A worker that waits this long for work is let go, with the memory it holds. */
