@@ -15,9 +15,10 @@ function radiusOf(grain: number | null, { layer, bottom, top }: PlacedLayer, sca
 
 /** Paths of stones, one a colour. */
 function sand(places: readonly Point[], radius: number, { id, random }: { id: string; random: () => number }): Shape[] {
+  const edge = radius > 2.2 ? { stroke: '#6f5d3c', strokeWidth: 0.5 } : {}
   const byColor = sands.map((): string[] => [])
   for (const at of places) byColor[Math.floor(random() * sands.length)]?.push(stone(at, radius * (0.62 + random() * 0.46), random))
-  return byColor.flatMap((d, index): Shape[] => (d.length > 0 ? [{ kind: 'path', d: d.join(''), fill: sands[index] ?? '#7d6a4d', course: id }] : []))
+  return byColor.flatMap((d, index): Shape[] => (d.length > 0 ? [{ kind: 'path', d: d.join(''), fill: sands[index] ?? sands[0] ?? '', course: id, ...edge }] : []))
 }
 
 /** Sand mixed into a course: throughout its body, down into the spalls it takes. */

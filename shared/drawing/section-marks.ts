@@ -93,6 +93,17 @@ export function leaders(placing: Placing, { x, y }: Ends): Shape[] {
   })
 }
 
+/** Numbers of the courses at short leaders, where no rows stand beside the figure. */
+export function numbers(placing: Placing): { shapes: Shape[]; y: Record<string, number> } {
+  const list = origins(placing)
+  const places = spread(list.map(({ exit }) => exit), { gap: 15, from: 8, to: placing.ground.end + 20 })
+  const y = Object.fromEntries(list.map(({ one }, index) => [one.layer.id, places[index] ?? 0]))
+  const shapes = list.map(({ one: { layer, number } }): Shape => ({
+    kind: 'text', x: placing.ground.right + 36, y: (y[layer.id] ?? 0) + 4, text: String(number), size, fill: ink.ink, course: layer.id,
+  }))
+  return { shapes, y }
+}
+
 /** Titles at the ends of the leaders, for a figure that stands by itself. Returns the places they took. */
 export function titles(placing: Placing, { x, from, to, unit }: { x: number; from: number; to: number; unit: DrawingUnit }): { shapes: Shape[]; y: Record<string, number> } {
   const list = origins(placing)

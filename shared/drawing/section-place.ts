@@ -62,13 +62,21 @@ function tallest(films: readonly SectionLayer[], most: number): number {
   return most * Math.min(1, 0.2 + (0.8 * thickest) / 3175)
 }
 
-const middle = (numbers: readonly number[]) => numbers.reduce((sum, one) => sum + one, 0) / numbers.length
+/** The middle of the rows as if none were open, so that the floor stays where it is when one opens. */
+function middleOfRows(anchors: readonly number[]): number {
+  const rising = [...anchors].sort((a, b) => a - b)
+  let at = rising[0] ?? 0
+  const closed = rising.map((y, index) => (at += index === 0 ? 0 : Math.min(y - (rising[index - 1] ?? y), 96)))
+  return closed.reduce((sum, one) => sum + one, 0) / closed.length
+}
+
 const within = (value: number, low: number, high: number) => Math.min(Math.max(value, low), Math.max(low, high))
 
 /** Lays the courses out on the slab: scale, planes and contours. */
 export function place(layers: readonly SectionLayer[], frame: Frame): Placing {
   const { compact } = frame
-  const room = frame.bottom - frame.top
+  // more room than the courses need does not change their scale: the figure does not jump when a row opens
+  const room = Math.min(frame.bottom - frame.top, compact ? Infinity : 190 + layers.length * 64)
   const films = layers.filter((layer) => laysFilm(layer.stage))
   const unknown = films.filter((layer) => layer.thickness === null).length * unknownHeight[compact ? 'compact' : 'full']
   const share = room * (compact ? 0.58 : 0.5)
@@ -78,8 +86,8 @@ export function place(layers: readonly SectionLayer[], frame: Frame): Placing {
   const heightOf = (layer: SectionLayer) => (layer.thickness === null ? unknownHeight[compact ? 'compact' : 'full'] : drawnHeight(layer.thickness, scale))
   const stack = films.reduce((sum, layer) => sum + heightOf(layer), 0)
   const slab = compact ? room - stack : within(room * 0.4, 96, 210)
-  const free = room - stack - slab
-  const top = frame.anchors.length === 0 ? frame.top + Math.max(0, free) / 2 : within(middle(frame.anchors) - stack * 0.6, frame.top, frame.top + free)
+  const free = frame.bottom - frame.top - stack - slab
+  const top = frame.anchors.length === 0 ? frame.top + Math.max(0, free) / 2 : within(middleOfRows(frame.anchors) - stack * 0.6, frame.top, frame.top + free)
   const ground = groundOf(layers, { ...frame, surface: top + stack, end: Math.min(frame.bottom, top + stack + slab) })
   return { placed: stackUp(layers, ground, heightOf), ground, scale, top }
 }

@@ -1,7 +1,7 @@
 import { type SectionScale } from './scale.ts'
 import { broadcastGrains, fillerGrains } from './section-grains.ts'
 import type { SectionLayer } from './section-layer.ts'
-import { dimensions, leaders, titles } from './section-marks.ts'
+import { dimensions, leaders, numbers, titles } from './section-marks.ts'
 import { type PlacedLayer, type Placing, place } from './section-place.ts'
 import { filledSpalls, slabShapes } from './section-slab.ts'
 import { type DrawingUnit, alternativeText, layerWords, sectionNotes } from './section-words.ts'
@@ -55,7 +55,7 @@ export function sectionOf(layers: readonly SectionLayer[], options: SectionOptio
   const noteWidth = width - 16
   const frameOf = (noteRows: number) => ({
     left: compact ? 0 : margins.left,
-    right: compact ? width : floor - (anchors || standalone ? margins.right : 14),
+    right: compact ? width : floor - margins.right + (anchors || standalone ? 0 : 10),
     top: compact ? 4 : 30,
     bottom: height - (compact ? 0 : 16 + noteRows * note.line),
     compact,
@@ -93,7 +93,9 @@ function pointers(placing: Placing, { unit, anchors, standalone, width, height }
     const { shapes, y } = titles(placing, { x: floor, from: 16, to: Math.max(height - 90, placing.ground.end), unit })
     return [...leaders(placing, { x: floor, y }), ...shapes]
   }
-  return anchors ? leaders(placing, { x: width, y: anchors }) : []
+  if (anchors) return leaders(placing, { x: width, y: anchors })
+  const { shapes, y } = numbers(placing)
+  return [...leaders(placing, { x: placing.ground.right + 32, y }), ...shapes]
 }
 
 /** Slab first, then the courses as they are laid; grains that stand out of a film are covered by the next. */

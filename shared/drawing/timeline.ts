@@ -57,6 +57,14 @@ function hoursAcross(entries: readonly TimelineEntry[]): number {
   return Math.max(far, ...closes, ...cure) * 1.06
 }
 
+/** The course whose cure the floor waits for; undefined while the start of any course is not known. */
+function lastToCure(rows: readonly TimelineRow[]): TimelineRow | undefined {
+  if (rows.some((row) => row.entry.start === null)) return undefined
+  const wait = ({ entry }: TimelineRow) => Math.max(entry.foot ?? -1, entry.vehicles ?? -1)
+  const longest = Math.max(-1, ...rows.map(wait))
+  return longest < 0 ? undefined : rows.findLast((row) => wait(row) === longest)
+}
+
 interface Axis {
   left: number
   right: number
@@ -75,7 +83,7 @@ export function timelineOf(rows: readonly TimelineRow[], { width, clock, narrow 
   const rowHeight = narrow ? 62 : 42
   const height = 12 + rows.length * rowHeight + 26
   const places = rows.map((row, index) => ({ row, line: 12 + index * rowHeight + (narrow ? 38 : 24) }))
-  const last = rows.findLast((row) => row.entry.foot !== null || row.entry.vehicles !== null)
+  const last = lastToCure(rows)
   return {
     width, height, hours,
     shapes: [
@@ -124,14 +132,14 @@ function title({ id, number, title: words, color }: TimelineRow, { line, narrow,
   const [first = ''] = wrap(words, { width: narrow ? 320 : left - 38, size: size + 1 })
   const cut = first === words ? words : `${first} …`
   return [
-    { kind: 'text', x: narrow ? 8 : 8, y, text: String(number), size: size + 1, fill: ink.pencil, course: id },
-    { kind: 'text', x: 28, y, text: cut, size: size + 1, fill: ink.ink, course: id, ...(color === null ? {} : { weight: 600 as const }) },
+    { kind: 'text', x: narrow ? 13 : 8, y, text: String(number), size: size + 1, fill: ink.pencil, course: id },
+    { kind: 'text', x: narrow ? 32 : 28, y, text: cut, size: size + 1, fill: ink.ink, course: id, ...(color === null ? {} : { weight: 600 as const }) },
   ]
 }
 
 /** The solid bar from the start to the end of the working time; a surface that is only worked has a tick. */
 function working({ id, color, entry }: TimelineRow, line: number, { at }: Axis): Shape[] {
-  if (entry.start === null) return []
+  if (entry.start === null) return [{ kind: 'text', x: at(0) + 6, y: line + 4, text: 'start not known', size, fill: ink.pencil, course: id }]
   const x = fixed(at(entry.start))
   const end = entry.workingUntil === null ? x + 3 : Math.max(at(entry.workingUntil), x + 3)
   const known = entry.workingUntil !== null

@@ -16,7 +16,7 @@ const emissions = ['lb/1000 ft²·24 h', 'g/m²·24 h'] as const
 /** What the floor is laid under. Everything on the page is reckoned at these. */
 export function ConditionsBar({ conditions, onChange }: ConditionsBarProps) {
   return (
-    <fieldset className="grid grid-cols-2 gap-x-4 gap-y-3 border border-rule bg-card px-4 py-3 md:grid-cols-3 xl:grid-cols-[repeat(4,minmax(0,1fr))_minmax(0,1.5fr)_minmax(0,1.4fr)]">
+    <fieldset className="grid grid-cols-2 gap-x-4 gap-y-3 border border-rule bg-card px-4 py-3 md:grid-cols-4 xl:grid-cols-[repeat(4,minmax(0,1fr))_minmax(0,1.5fr)_minmax(0,1.4fr)]">
       <legend className="sr-only">Conditions</legend>
       <QuantityField
         label="Slab" name="slabTemperature" units={temperatures} value={conditions.slabTemperature as { value: number; unit: '°F' }}
@@ -32,10 +32,10 @@ export function ConditionsBar({ conditions, onChange }: ConditionsBarProps) {
         onChange={(value) => onChange({ substrateRelativeHumidity: value })}
       />
       <QuantityField
-        label="Moisture emission" name="moistureEmission" units={emissions} value={conditions.moistureEmission as { value: number; unit: (typeof emissions)[number] } | null}
+        label="Moisture emission" name="moistureEmission" className="col-span-2 xl:col-span-1" units={emissions} value={conditions.moistureEmission as { value: number; unit: (typeof emissions)[number] } | null}
         onChange={(value) => onChange({ moistureEmission: value })}
       />
-      <SelectField label="VOC rules of" name="vocPlace" value={conditions.vocPlace ?? ''} onChange={(event) => onChange({ vocPlace: event.target.value || null })}>
+      <SelectField label="VOC rules of" name="vocPlace" className="col-span-2 xl:col-span-1" value={conditions.vocPlace ?? ''} onChange={(event) => onChange({ vocPlace: event.target.value || null })}>
         <option value="">none chosen</option>
         {vocPlaces.map((place) => (
           <option key={place.id} value={place.id}>

@@ -1,26 +1,58 @@
 import type { CourseResult, Proportion } from '../../../shared/domain/evaluation.ts'
 import type { Figure } from '../../../shared/domain/figure.ts'
-import { formatNumber } from '../../../shared/domain/format.ts'
+import { type ShownSystem, formatNumber, formatRange, shownUnit } from '../../../shared/domain/format.ts'
+import { convert } from '../../../shared/domain/units.ts'
 import { FigureView } from '../../ui/figure-view.tsx'
+import { useUnitSystem } from '../../ui/unit-system.tsx'
 import { Hazards } from './hazards.tsx'
 
-const rows: [keyof CourseResult, string][] = [
-  ['wetFilm', 'Wet film'], ['dryFilm', 'Dry film'], ['spreadRate', 'Spread rate'], ['resinPerArea', 'Mixed resin'], ['aggregatePerArea', 'Sand'], ['potLife', 'Pot life'],
-  ['workingTime', 'Working time on the floor'], ['window', 'Window for the next course'], ['footTraffic', 'Foot traffic'], ['vehicleTraffic', 'Vehicle traffic'],
-  ['fullCure', 'Full cure'], ['voc', 'VOC'],
-]
+type Row = { label: string; figure: Figure; text?: string }
+
+/** Square metres of 1,000 ft²: 1000 × 0.3048², exact. */
+const thousandSquareFeet = 1000 * 0.3048 ** 2
+
+/** Resin is told per 1,000 ft² in gallons or per 100 m² in litres: the area changes with the unit. */
+function resinRow(figure: Figure, system: ShownSystem): Row {
+  if (figure.kind === 'not-stated') return { label: 'Mixed resin', figure }
+  const { unit } = figure.value
+  const shown = shownUnit(unit, system)
+  const label = `Mixed resin per ${shown === 'gal' ? '1,000 ft²' : '100 m²'}`
+  if (shown === unit) return { label, figure }
+  const scale = shown === 'L' ? 100 / thousandSquareFeet : thousandSquareFeet / 100
+  const scaled = (end: number | undefined) => (end === undefined ? undefined : convert({ value: end * scale, unit }, shown).value)
+  const [min, max] = [scaled(figure.value.min), scaled(figure.value.max)]
+  return { label, figure, text: formatRange({ ...(min === undefined ? {} : { min }), ...(max === undefined ? {} : { max }), unit: shown }) }
+}
+
+function rowsOf(result: CourseResult, system: ShownSystem): Row[] {
+  const { wetFilm, dryFilm, spreadRate, resinPerArea, aggregatePerArea, potLife, workingTime, window, footTraffic, vehicleTraffic, fullCure, voc } = result
+  return [
+    { label: 'Wet film', figure: wetFilm },
+    { label: 'Dry film', figure: dryFilm },
+    { label: 'Spread rate', figure: spreadRate },
+    resinRow(resinPerArea, system),
+    ...(aggregatePerArea ? [{ label: 'Sand', figure: aggregatePerArea }] : []),
+    { label: 'Pot life', figure: potLife },
+    { label: 'Working time on the floor', figure: workingTime },
+    { label: 'Window for the next course', figure: window },
+    { label: 'Foot traffic', figure: footTraffic },
+    { label: 'Vehicle traffic', figure: vehicleTraffic },
+    { label: 'Full cure', figure: fullCure },
+    { label: 'VOC', figure: voc },
+  ]
+}
 
 /** All that a course comes to: each figure with how it is known. */
 export function CourseFigures({ result }: { result: CourseResult }) {
-  const shown = rows.flatMap(([key, label]) => (result[key] === null ? [] : [{ label, figure: result[key] as Figure }]))
+  const { system } = useUnitSystem()
   return (
     <div className="grid gap-x-8 gap-y-4 sm:grid-cols-2">
-      <dl className="grid grid-cols-[minmax(0,1fr)_auto] gap-x-4">
-        {shown.map(({ label, figure }) => (
+      <dl className="grid grid-cols-[minmax(0,1fr)_auto] content-start">
+        {rowsOf(result, system).map(({ label, figure, text }) => (
           <div key={label} className="contents">
             <dt className="border-b border-rule py-1 text-pencil">{label}</dt>
-            <dd className="border-b border-rule py-1 text-right">
-              <FigureView figure={figure} />
+            <dd className="border-b border-rule py-1 pl-4 text-right">
+              <FigureView figure={figure} {...(text ? { text } : {})} />
             </dd>
           </div>
         ))}
@@ -55,9 +87,9 @@ function Proportions({ result }: { result: CourseResult }) {
             <th scope="row" className="py-1 font-normal">
               {proportion.part} <span className="text-pencil">{proportion.name}</span>
             </th>
-            <td className="py-1 text-right">{share(proportion.volumeShare)}</td>
-            <td className="py-1 text-right">{share(proportion.massShare)}</td>
-            <td className="py-1 text-right">
+            <td className="py-1 pl-3 text-right whitespace-nowrap">{share(proportion.volumeShare)}</td>
+            <td className="py-1 pl-3 text-right whitespace-nowrap">{share(proportion.massShare)}</td>
+            <td className="py-1 pl-3 text-right whitespace-nowrap">
               <FigureView figure={proportion.density} />
             </td>
           </tr>

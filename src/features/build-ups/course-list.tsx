@@ -30,7 +30,7 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
     setOver(null)
   }
   return (
-    <ol ref={list} className="min-w-0 list-none">
+    <ol ref={list} className="min-w-0 list-none self-start">
       {falling.map(({ course, index }) => (
         <li
           key={course.id} className={`border-b border-rule ${over === course.id && dragged !== course.id ? 'outline-2 -outline-offset-2 outline-resin' : ''} ${dragged === course.id ? 'opacity-50' : ''}`}

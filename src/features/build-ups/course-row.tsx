@@ -78,8 +78,10 @@ function RowFigures({ course, result, onChange }: CourseRowProps) {
   return (
     <div className="col-span-2 col-start-2 flex flex-wrap items-start justify-between gap-x-4 gap-y-1 lg:contents">
       <div className="lg:text-right">{onChange ? <CourseInputs course={course} result={result} onChange={onChange} /> : <FixedFilm result={result} />}</div>
-      <Labelled label="pot life">{result && <FigureView figure={result.potLife} />}</Labelled>
-      <Labelled label="window for the next">{result && <FigureView figure={result.window} />}</Labelled>
+      <div className="flex flex-col items-end gap-1 sm:contents">
+        <Labelled label="pot life">{result && <FigureView figure={result.potLife} />}</Labelled>
+        <Labelled label="window for the next">{result && <FigureView figure={result.window} />}</Labelled>
+      </div>
     </div>
   )
 }

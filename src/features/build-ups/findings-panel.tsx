@@ -15,34 +15,68 @@ interface FindingsPanelProps {
   reasons: Readonly<Record<string, string>>
 }
 
-/** What the checks say, the worst first; what is met is folded to its count. */
+/** What the checks say, the worst first; one check that says the same of several courses is one line; what is met is folded to its count. */
 export function FindingsPanel({ findings, ...rest }: FindingsPanelProps) {
   const by = (status: FindingStatus) => findings.filter((finding) => finding.status === status)
   const met = by('met')
-  const open = findingStatuses.filter((status) => status !== 'met').flatMap(by)
+  const open = findingStatuses.filter((status) => status !== 'met').flatMap((status) => groupsOf(by(status)))
   return (
     <section aria-label="Checks">
       <h2 className="mb-2 text-small font-semibold text-pencil">Checks against the sheets loaded</h2>
       {findings.length === 0 && <p className="text-pencil">Nothing to check yet. Add a course and choose its mix.</p>}
       <ul>
-        {open.map((finding, index) => (
-          <FindingItem key={`${finding.checkId} ${finding.courseId} ${index}`} finding={finding} {...rest} />
+        {open.map((group) => (
+          <FindingGroup key={`${group[0]?.status} ${group[0]?.checkId}`} group={group} {...rest} />
         ))}
       </ul>
       {met.length > 0 && (
         <details className="mt-2">
           <summary className="cursor-pointer">
-            <StatusMark status="met" /> {met.length} {open.length > 0 ? 'others ' : ''}
+            <StatusMark status="met" /> {met.length}
           </summary>
           <ul className="mt-2">
-            {met.map((finding, index) => (
-              <FindingItem key={`${finding.checkId} ${finding.courseId} ${index}`} finding={finding} {...rest} />
+            {groupsOf(met).map((group) => (
+              <FindingGroup key={group[0]?.checkId} group={group} {...rest} />
             ))}
           </ul>
         </details>
       )}
       <p className="mt-3 text-small text-pencil">Met means met against the sheets loaded here. The sheet, the label, the law and the competent person decide.</p>
     </section>
+  )
+}
+
+/** Findings of one status by their check, in order. */
+function groupsOf(findings: readonly Finding[]): Finding[][] {
+  const groups = new Map<string, Finding[]>()
+  for (const finding of findings) groups.set(finding.checkId, [...(groups.get(finding.checkId) ?? []), finding])
+  return [...groups.values()]
+}
+
+type GroupProps = { group: readonly Finding[] } & Omit<FindingsPanelProps, 'findings'>
+
+function FindingGroup({ group, ...rest }: GroupProps) {
+  const [first] = group
+  if (!first) return null
+  if (group.length <= 2 && first.status !== 'met') return group.map((finding, index) => <FindingItem key={`${finding.courseId} ${index}`} finding={finding} {...rest} />)
+  if (group.length === 1) return <FindingItem finding={first} {...rest} />
+  return (
+    <li className="-mx-2 mb-1 px-2 py-1">
+      <details>
+        <summary className="grid cursor-pointer grid-cols-[20px_1fr] [&::-webkit-details-marker]:hidden">
+          <StatusMark status={first.status} wordless />
+          <span>
+            <strong className="font-semibold">{first.title}</strong>
+            <span className="block text-pencil">{group.length} courses ▾</span>
+          </span>
+        </summary>
+        <ul className="mt-1 ml-5">
+          {group.map((finding, index) => (
+            <FindingItem key={`${finding.courseId} ${index}`} finding={finding} {...rest} />
+          ))}
+        </ul>
+      </details>
+    </li>
   )
 }
 

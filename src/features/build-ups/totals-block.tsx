@@ -5,10 +5,10 @@ import { FigureView } from '../../ui/figure-view.tsx'
 /** The drawing's title block: what the floor comes to and who answers for it. */
 export function TotalsBlock({ totals, version }: { totals: Evaluation['totals']; version: VersionSummary }) {
   const cells: [string, React.ReactNode][] = [
-    ['Total build', <FigureView key="t" figure={totals.thickness} />],
+    ['Total build, dry', <FigureView key="t" figure={totals.thickness} />],
     ['VOC, worst', <FigureView key="v" figure={totals.vocWorst} />],
-    ['Hours to feet', <FigureView key="f" figure={totals.hoursToFoot} />],
-    ['Hours to vehicles', <FigureView key="w" figure={totals.hoursToVehicles} />],
+    ['To feet', <FigureView key="f" figure={totals.hoursToFoot} />],
+    ['To vehicles', <FigureView key="w" figure={totals.hoursToVehicles} />],
     ['Dew point', <FigureView key="d" figure={totals.dewPoint} />],
     ['Version', `${version.number}, ${version.status}`],
     ['Released by', version.releasedByName ?? 'not released'],
