@@ -29,7 +29,7 @@ async function start(): Promise<void> {
   await mkdir(env.dataDir, { recursive: true, mode: 0o700 })
   say('Opening the database …')
   const database = await openDatabase({ dataDir: env.dataDir, ...(env.databaseUrl ? { databaseUrl: env.databaseUrl } : {}), log })
-  const files = await openDiskStore(env.dataDir)
+  const files = env.s3 ? await (await import('./files/s3-store.ts')).openS3Store(env.dataDir, env.s3) : await openDiskStore(env.dataDir)
   const mail = env.smtp ? smtpMailer(env.smtp) : await outboxMailer(env.dataDir, clock)
   if (env.demo === 'auto' && !(await hasPeople(database.db))) {
     say('Filling the empty database with the demo …')

@@ -21,17 +21,25 @@ export interface FileStore {
   bytes(sha256: string): Promise<Uint8Array<ArrayBuffer>>
 }
 
-const hashPattern = /^[0-9a-f]{64}$/
+export function isSha256(text: string): boolean {
+  return /^[0-9a-f]{64}$/.test(text)
+}
+
+/** Makes `DATA_DIR/incoming` and empties it: what a crash left behind was never accepted. */
+export async function emptyIncoming(dataDir: string): Promise<string> {
+  const incoming = join(dataDir, 'incoming')
+  await rm(incoming, { recursive: true, force: true })
+  await mkdir(incoming, { recursive: true, mode: 0o700 })
+  return incoming
+}
 
 /** The store on disk: `DATA_DIR/files/ab/abcd…`. A file appears under its name only when whole and on the disk. */
 export async function openDiskStore(dataDir: string): Promise<FileStore> {
   const root = join(dataDir, 'files')
-  const incoming = join(dataDir, 'incoming')
-  await rm(incoming, { recursive: true, force: true })
-  await mkdir(incoming, { recursive: true, mode: 0o700 })
+  const incoming = await emptyIncoming(dataDir)
   await mkdir(root, { recursive: true, mode: 0o700 })
   const pathOf = (sha256: string) => {
-    if (!hashPattern.test(sha256)) throw new RangeError('not a SHA-256')
+    if (!isSha256(sha256)) throw new RangeError('not a SHA-256')
     return join(root, sha256.slice(0, 2), sha256)
   }
   const has = async (sha256: string) => stat(pathOf(sha256)).then(() => true, () => false)
