@@ -2,6 +2,7 @@ import express, { type Express, type Router } from 'express'
 import type { Pool } from 'pg'
 import type { Database } from './db/open.ts'
 import { buildUpRoutes } from './features/build-ups/routes.ts'
+import { catalogueRoutes } from './features/catalogue/routes.ts'
 import { healthRoutes } from './features/health/routes.ts'
 import { findUser } from './features/people/queries.ts'
 import { jobRoutes } from './features/jobs/routes.ts'
@@ -36,7 +37,7 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, jobRoutes, siteCardRoutes, sheetRoutes, buildUpRoutes]
+const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, catalogueRoutes, jobRoutes, siteCardRoutes, sheetRoutes, buildUpRoutes]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {

@@ -1,4 +1,5 @@
 import { buildUpEndpoints } from './build-ups.ts'
+import { catalogueEndpoints } from './catalogue.ts'
 import type { Endpoint } from './endpoint.ts'
 import { healthEndpoints } from './health.ts'
 import { jobEndpoints } from './jobs.ts'
@@ -12,6 +13,7 @@ export const endpoints: Record<string, Endpoint> = {
   ...healthEndpoints,
   ...sessionEndpoints,
   ...peopleEndpoints,
+  ...catalogueEndpoints,
   ...buildUpEndpoints,
   ...jobEndpoints,
   ...siteCardEndpoints,

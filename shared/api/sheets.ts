@@ -23,16 +23,16 @@ function isDay(date: string): boolean {
 }
 
 /** What a sheet speaks of: one product or one mix. */
-export const subjectRefSchema = z.union([z.strictObject({ productId: idSchema }), z.strictObject({ mixId: idSchema })])
+const subjectRefSchema = z.union([z.strictObject({ productId: idSchema }), z.strictObject({ mixId: idSchema })])
 export type SubjectRef = z.infer<typeof subjectRefSchema>
-export const subjectSchema = z.object({ kind: z.enum(['product', 'mix']), id: idSchema, name: z.string(), maker: z.string() })
+const subjectSchema = z.object({ kind: z.enum(['product', 'mix']), id: idSchema, name: z.string(), maker: z.string() })
 export type Subject = z.infer<typeof subjectSchema>
 
 /** Found simply in the text, for a person to check; never kept without one. */
-export const suggestionSchema = z.object({ kind: sheetKindSchema, title: z.string(), revisionDate: z.string().nullable() })
+const suggestionSchema = z.object({ kind: sheetKindSchema, title: z.string(), revisionDate: z.string().nullable() })
 export type Suggestion = z.infer<typeof suggestionSchema>
 
-export const revisionSchema = z.object({
+const revisionSchema = z.object({
   id: idSchema,
   fileName: z.string(),
   bytes: z.int(),
@@ -48,7 +48,7 @@ export const revisionSchema = z.object({
 })
 export type Revision = z.infer<typeof revisionSchema>
 
-export const sheetSchema = z.object({
+const sheetSchema = z.object({
   id: idSchema,
   kind: sheetKindSchema,
   title: z.string(),
@@ -61,7 +61,7 @@ export const sheetSchema = z.object({
 export type Sheet = z.infer<typeof sheetSchema>
 
 /** A revision in the list of sheets. */
-export const sheetRowSchema = z.object({
+const sheetRowSchema = z.object({
   sheetId: idSchema,
   revisionId: idSchema,
   kind: sheetKindSchema,

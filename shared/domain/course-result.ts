@@ -79,7 +79,7 @@ function filmsOf(course: Course, mix: MixFacts | undefined, filler: Filler): Fil
     const wet = computed(film, { formula: 'wet film = dry film ÷ solids', sum: `${shown({ value, unit })} ÷ ${percent} = ${shown(film)}`, source: 'definition of solids by volume' }, from)
     return { wet, dry, spread: spreadFigure(film) }
   }
-  const film: Film | undefined = course.thickness ? ({ value: course.thickness.value, unit: course.thickness.unit } as Film) : course.spreadRate ? wetFilmOfSpread(course.spreadRate as Spread) as Film : undefined
+  const film: Film | undefined = course.thickness ? ({ value: course.thickness.value, unit: course.thickness.unit }) : course.spreadRate ? wetFilmOfSpread(course.spreadRate) : undefined
   if (!film) return { wet: noThickness(course), dry: noThickness(course), spread: noThickness(course) }
   const wet = course.thickness ? chosen(film, 'wet') : computed(film, wetWorking(course.spreadRate as Spread, film))
   const spread = course.spreadRate ? chosen(course.spreadRate, 'of the mix') : spreadFigure(film)

@@ -120,7 +120,7 @@ export function formatValue(fact: Pick<Fact, 'property' | 'value'> & Partial<Fac
   if ('is' in value) return value.is ? 'yes' : 'no'
   const substance = substanceOf(fact as Fact)
   if (substance) return formatSubstance(substance)
-  const text = property === 'recoatWindow' ? formatWindow(value as Range, system) : formatRange(value as Range, system, property)
+  const text = property === 'recoatWindow' ? formatWindow(value, system) : formatRange(value, system, property)
   return [text, fact.film, fact.of && `(${fact.of})`, fact.thinned && 'thinned'].filter(Boolean).join(' ')
 }
 

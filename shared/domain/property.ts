@@ -1,5 +1,5 @@
 import * as z from 'zod'
-import { type Dimension, type Unit, dimensionOf, units } from './units.ts'
+import { type Dimension, dimensionOf, units } from './units.ts'
 
 /** How a property's value is written down. See the value schemas below. */
 export type ValueForm = 'quantity' | 'ratio' | 'window' | 'codes' | 'substance' | 'text' | 'date' | 'flag'
@@ -80,9 +80,9 @@ const finite = z.number().min(-1e9).max(1e9)
 /** A quantity as written: both ends equal for a single figure, one end alone for a bound. */
 export const rangeSchema = z
   .strictObject({ min: finite.optional(), max: finite.optional(), unit: unitSchema })
-  .refine((range) => range.min !== undefined || range.max !== undefined, { message: 'Give a least or a greatest value.' })
+  .refine((range) => range.min !== undefined || range.max !== undefined, { error: 'Give a least or a greatest value.' })
   .refine((range) => range.min === undefined || range.max === undefined || range.min <= range.max, {
-    message: 'The least value is above the greatest.',
+    error: 'The least value is above the greatest.',
   })
 export type Range = z.infer<typeof rangeSchema>
 
@@ -158,6 +158,6 @@ export function valueProblem(property: Property, value: unknown): string | undef
   const parsed = valueSchemas[form].safeParse(value)
   if (!parsed.success) return parsed.error.issues[0]?.message ?? 'The value is not of the right form.'
   if (!dimensions) return undefined
-  const unit = (parsed.data as Range).unit as Unit
+  const unit = (parsed.data as Range).unit
   return dimensions.includes(dimensionOf(unit)) ? undefined : `${unit} is not a unit of ${properties[property].label.toLowerCase()}.`
 }

@@ -43,7 +43,7 @@ export function quoteOf(words: readonly PlacedWord[], box: Box): string {
 }
 
 /** Characters that are written in more than one way, brought to one for comparison. */
-export function searchable(text: string): string {
+function searchable(text: string): string {
   return text
     .toLowerCase()
     .replace(/[\u2010-\u2015\u2212]/g, '-')

@@ -127,7 +127,7 @@ function scaleBetween(from: Unit, to: Unit): number {
  * @throws RangeError when the units measure different things.
  */
 export function convert<U extends Unit>(from: Quantity, to: U): Quantity<U> {
-  if ((from.unit as Unit) === to) return { value: from.value, unit: to }
+  if (from.unit === to) return { value: from.value, unit: to }
   if (dimensionOf(from.unit) !== dimensionOf(to)) throw new RangeError(`${from.unit} and ${to} measure different things`)
   if (dimensionOf(to) === 'temperature') return { value: converter(from.value).from(from.unit).to(to), unit: to }
   return { value: from.value * scaleBetween(from.unit, to), unit: to }

@@ -87,7 +87,7 @@ export function leaders(placing: Placing, { x, y }: Ends): Shape[] {
     if (end === undefined) return []
     const line: Point[] = [from, [elbow, exit], [Math.max(x - 14, elbow), end], [x, end]]
     return [
-      { kind: 'path', d: pathOf(line), stroke: ink.pencil, strokeWidth: 0.7, course: one.layer.id },
+      { kind: 'path', d: pathOf(line), stroke: ink.pencil, strokeWidth: 0.7, course: one.layer.id, role: 'leader' },
       { kind: 'path', d: `M${fixed(from[0]) - 1.6} ${fixed(from[1])}a1.6 1.6 0 1 0 3.2 0a1.6 1.6 0 1 0 -3.2 0Z`, fill: ink.ink, course: one.layer.id },
     ]
   })

@@ -9,6 +9,8 @@ export interface PathShape {
   opacity?: number
   /** The course it belongs to. */
   course?: string
+  /** A line that leads from a course to its row. */
+  role?: 'leader'
 }
 
 export interface TextShape {

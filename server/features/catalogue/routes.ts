@@ -1,0 +1,36 @@
+import { Router } from 'express'
+import { catalogueEndpoints as wire } from '../../../shared/api/catalogue.ts'
+import type { User } from '../../../shared/api/session.ts'
+import type { AppContext } from '../../http/context.ts'
+import { serve } from '../../http/serve.ts'
+import { listMakers, listMixes, listProducts } from './list-queries.ts'
+import { type Writer, addFact, addMix, addProduct, amendFact, changeMix, changeProduct, endFact, ofMix, ofProduct, readMix, readProduct } from './write-queries.ts'
+
+const writer = ({ id, name }: User): Writer => ({ id, name })
+
+/** Products, mixes and what is known of them. */
+export function catalogueRoutes({ db }: AppContext): Router {
+  const router = Router()
+
+  serve(router, wire.listProducts, ({ query }) => listProducts(db, query))
+  serve(router, wire.addProduct, async ({ body, user }) => readProduct(db, await db.transaction((tx) => addProduct(tx, body, writer(user)))))
+  serve(router, wire.readProduct, ({ params }) => readProduct(db, params.productId))
+  serve(router, wire.changeProduct, async ({ params, body, user }) => {
+    await db.transaction((tx) => changeProduct(tx, params.productId, { ...body, by: writer(user) }))
+    return readProduct(db, params.productId)
+  })
+  serve(router, wire.addProductFact, ({ params, body, user }) => db.transaction((tx) => addFact(tx, ofProduct(params.productId), body, writer(user))))
+  serve(router, wire.listMixes, ({ query }) => listMixes(db, query))
+  serve(router, wire.addMix, async ({ body, user }) => readMix(db, await db.transaction((tx) => addMix(tx, body, writer(user)))))
+  serve(router, wire.readMix, ({ params }) => readMix(db, params.mixId))
+  serve(router, wire.changeMix, async ({ params, body, user }) => {
+    await db.transaction((tx) => changeMix(tx, params.mixId, { ...body, by: writer(user) }))
+    return readMix(db, params.mixId)
+  })
+  serve(router, wire.addMixFact, ({ params, body, user }) => db.transaction((tx) => addFact(tx, ofMix(params.mixId), body, writer(user))))
+  serve(router, wire.amendFact, ({ params, body, user }) => db.transaction((tx) => amendFact(tx, params.factId, body, writer(user))))
+  serve(router, wire.endFact, ({ params, user }) => db.transaction((tx) => endFact(tx, params.factId, writer(user))))
+  serve(router, wire.listMakers, async () => ({ items: await listMakers(db) }))
+
+  return router
+}
