@@ -18,7 +18,7 @@ describe('sand', () => {
   })
 
   it.each([[0.5, 4.6, 1.208, 15.5], [1, 9.2, 1.416, 18.17], [1.5, 13.8, 1.624, 20.84], [2, 18.4, 1.832, 23.51], [3, 27.6, 2.248, 28.85]])(
-    'in the pail at %d : 1 by weight, %d lb per gallon of 9.2 lb/gal resin, yields %d gal and %d ft² at 1/8 in', (_, pounds, yielded, area) => {
+    'in the pail at %d : 1 by weight, %d lb per gallon of 9.2 lb/gal resin, yields %d gal and %d ft² at 1/8 in', (...[, pounds, yielded, area]) => {
       const perLiquid = yieldPerLiquid(quantity(pounds, 'lb/gal'), quartz)
       expect(perLiquid).toBeCloseTo(yielded, 3)
       expect((perLiquid * 1604.1667) / 125).toBeCloseTo(area, 1)

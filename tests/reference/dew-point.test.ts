@@ -69,7 +69,7 @@ describe('the frost-point trap', () => {
 describe('slab above the dew point', () => {
   it.each([
     ['a', 20, 65, 17, 3.8], ['b', 20, 65, 16, 2.8], ['c', 25, 75, 22, 1.7], ['e', 10, 88, 14, 5.9],
-  ])('%s: air %d °C, %d %% RH, slab %d °C is %d °C above', (_, t, rh, slab, margin) => {
+  ])('%s: air %d °C, %d %% RH, slab %d °C is %d °C above', (...[, t, rh, slab, margin]) => {
     expect(dewPointMargin(quantity(slab, '°C'), air(t, rh), 'Δ°C').value).toBeCloseTo(margin, 1)
   })
 

@@ -46,7 +46,7 @@ describe('spread of 100 % solids resin (table computed from the definitions)', (
     [5, 127, 320.83, 7.874], [8, 203.2, 200.52, 4.921], [10, 254, 160.42, 3.937], [12, 304.8, 133.68, 3.281], [16, 406.4, 100.26, 2.461],
     [20, 508, 80.21, 1.9685], [40, 1016, 40.1, 0.9843], [62.5, 1587.5, 25.667, 0.6299], [125, 3175, 12.833, 0.315], [250, 6350, 6.417, 0.1575],
   ] as const
-  it.each(table)('%d mil is %d µm, %d ft²/gal, %d m²/L', (mil, micron, us, si) => {
+  it.each(table)('%d mil is %d µm, %d ft²/gal, %d m²/L', (...[mil, micron, us, si]) => {
     near(valueIn(quantity(mil, 'mil'), 'µm'), micron, 1e-9)
     near(spreadOfWetFilm(quantity(mil, 'mil')).value, us, 2e-4)
     near(spreadOfWetFilm(quantity(micron, 'µm')).value, si, 2e-4)

@@ -6,5 +6,5 @@ declare module 'psychrolib' {
     GetTDewPointFromRelHum: (temperature: number, relativeHumidity: number) => number
   }
   const psychrolib: Psychrolib
-  export default psychrolib
+  export = psychrolib
 }

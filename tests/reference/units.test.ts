@@ -42,7 +42,7 @@ describe('figures of the trade, from the exact definitions', () => {
     [1, 'g/cm³', 8.3454045, 'lb/gal'], [1, 'g/cm³', 62.42796, 'lb/ft³'], [1, 'MPa', 145.03774, 'psi'], [1, 'lb/1000 ft²·24 h', 4.8824276, 'g/m²·24 h'],
     [1, 'lb/ft²', 4.8824276, 'kg/m²'], [5, 'Δ°F', 2.7777778, 'Δ°C'], [3, 'Δ°C', 5.4, 'Δ°F'], [50, '°F', 10, '°C'], [-40, '°F', -40, '°C'],
     [0.016, 'in', 0.4064, 'mm'], [0.5, 'lb/ft²', 2.44121, 'kg/m²'], [9.2, 'lb/gal', 1.1024, 'kg/L'],
-  ] as const)('%d %s is %d %s', (value, from, expected, to) => {
+  ] as const)('%d %s is %d %s', (...[value, from, expected, to]) => {
     expect(Math.abs(valueIn(quantity<Unit>(value, from), to) / expected - 1)).toBeLessThan(1e-5)
   })
 
