@@ -23,7 +23,17 @@ export function yieldPerLiquid(loading: Quantity, grainDensity: Quantity): numbe
  * Volume that a mortar takes on the floor: the greater of its absolute volume (resin + grains) and its sand packed by itself. Where the sand governs,
  * the resin does not fill the voids and air stays in. Source: absolute volumes; ASTM C29 terms.
  */
-export function mortarVolume({ resin, sand, grainDensity, bulkDensity }: { resin: Quantity; sand: Quantity; grainDensity: Quantity; bulkDensity: Quantity }) {
+export function mortarVolume({
+  resin,
+  sand,
+  grainDensity,
+  bulkDensity,
+}: {
+  resin: Quantity
+  sand: Quantity
+  grainDensity: Quantity
+  bulkDensity: Quantity
+}) {
   const absolute = valueIn(resin, 'm³') + absoluteVolume(sand, grainDensity).value
   const packed = valueIn(sand, 'kg') / valueIn(bulkDensity, 'g/L')
   return { volume: quantity(Math.max(absolute, packed), 'm³'), sandGoverns: packed > absolute }

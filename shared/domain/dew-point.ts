@@ -49,7 +49,15 @@ export function dewPointMargin<U extends 'Δ°F' | 'Δ°C'>(slab: Quantity, air:
 }
 
 /** Highest humidity of the air that still leaves a margin between slab and dew (or frost) point, per cent. Above 100: any humidity does. */
-export function highestHumidity({ slab, air, margin }: { slab: Quantity; air: Quantity; margin: Quantity<'Δ°F'> | Quantity<'Δ°C'> }): number {
+export function highestHumidity({
+  slab,
+  air,
+  margin,
+}: {
+  slab: Quantity
+  air: Quantity
+  margin: Quantity<'Δ°F'> | Quantity<'Δ°C'>
+}): number {
   const t = valueIn(air, '°C')
   const td = valueIn(slab, '°C') - valueIn(margin, 'Δ°C')
   const over = td >= 0 ? overWater : overIce
@@ -57,13 +65,17 @@ export function highestHumidity({ slab, air, margin }: { slab: Quantity; air: Qu
 }
 
 /** Common instruments: ±0.5 °C on either thermometer, ±3 % RH. Common practice; the instrument's own sheet decides. */
-export const commonInstruments = { temperature: quantity(0.5, 'Δ°C'), relativeHumidity: 3 }
+const commonInstruments = { temperature: quantity(0.5, 'Δ°C'), relativeHumidity: 3 }
 
 /**
  * The least and the greatest margin that the readings allow, given the instruments' errors: slab low and air warm and moist, and the reverse.
  * Difference in Δ°C.
  */
-export function marginBounds(slab: Quantity, air: Air, instruments = commonInstruments): { least: Quantity<'Δ°C'>; greatest: Quantity<'Δ°C'> } {
+export function marginBounds(
+  slab: Quantity,
+  air: Air,
+  instruments = commonInstruments,
+): { least: Quantity<'Δ°C'>; greatest: Quantity<'Δ°C'> } {
   const error = instruments.temperature.value
   const shifted = (sign: 1 | -1) => {
     const humidity = Math.min(100, Math.max(1, air.relativeHumidity - sign * instruments.relativeHumidity))

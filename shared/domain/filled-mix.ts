@@ -30,5 +30,10 @@ export function filledYield(course: Pick<Course, 'title' | 'filler'>, products: 
 }
 
 function noGrainDensity(title: string, product: ProductFacts | undefined, because = 'the sand’s own density is not stated'): Figure {
-  return notStated('density', { of: product?.name ?? title, subject: product ? { kind: 'product', id: product.id } : null, ask: 'the maker, in writing', because })
+  return notStated('density', {
+    of: product?.name ?? title,
+    subject: product ? { kind: 'product', id: product.id } : null,
+    ask: 'the maker, in writing',
+    because,
+  })
 }

@@ -29,7 +29,10 @@ export function dryFilmOfWet<F extends Film>(wet: F, volumeSolids: Quantity<'%'>
 }
 
 /** Wet film that leaves a dry one: dry × (1 + thinner by volume) ÷ volume solids. `thinning` is volume of thinner per volume of coating. */
-export function wetFilmOfDry<F extends Film>(dry: F, { volumeSolids, thinning = 0 }: { volumeSolids: Quantity<'%'>; thinning?: number }): F {
+export function wetFilmOfDry<F extends Film>(
+  dry: F,
+  { volumeSolids, thinning = 0 }: { volumeSolids: Quantity<'%'>; thinning?: number },
+): F {
   return { ...dry, value: (dry.value * (1 + thinning)) / fraction(volumeSolids) }
 }
 
@@ -44,7 +47,15 @@ export function practicalSpread<S extends Spread>(theoretical: S, loss: Loss): S
 }
 
 /** Dry film reached: volume used × volume solids ÷ area. */
-export function dryFilmUsed({ volume, area, volumeSolids }: { volume: Quantity; area: Quantity; volumeSolids: Quantity<'%'> }): Quantity<'µm'> {
+export function dryFilmUsed({
+  volume,
+  area,
+  volumeSolids,
+}: {
+  volume: Quantity
+  area: Quantity
+  volumeSolids: Quantity<'%'>
+}): Quantity<'µm'> {
   return quantity((valueIn(volume, 'm³') * fraction(volumeSolids) * 1e6) / valueIn(area, 'm²'), 'µm')
 }
 

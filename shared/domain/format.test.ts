@@ -1,11 +1,24 @@
 import { describe, expect, it } from 'vitest'
 import type { Fact } from './fact.ts'
-import { counterpartOf, formatBoth, formatConditions, formatFigure, formatNumber, formatQuantity, formatRange, formatValue, formatWindow, formatWindowFigure, shownUnit } from './format.ts'
+import {
+  counterpartOf,
+  formatBoth,
+  formatConditions,
+  formatFigure,
+  formatNumber,
+  formatQuantity,
+  formatRange,
+  formatValue,
+  formatWindow,
+  formatWindowFigure,
+  shownUnit,
+} from './format.ts'
 import { notStated } from './figure.ts'
 import type { PropertyValue } from './property.ts'
 import { dimensionOf, quantity, units } from './units.ts'
 
-const value = (property: Fact['property'], given: PropertyValue, others: Partial<Fact> = {}) => formatValue({ property, value: given, ...others })
+const value = (property: Fact['property'], given: PropertyValue, others: Partial<Fact> = {}) =>
+  formatValue({ property, value: given, ...others })
 
 describe('a range in words', () => {
   it('says a single figure once, a range with its ends, and a bound as a bound', () => {
@@ -71,7 +84,9 @@ describe('a value of every form', () => {
     expect(value('mixRatio', { parts: [2, 1], basis: 'volume' })).toBe('2 : 1 by volume')
     expect(value('mixRatio', { parts: [100, 43.4] })).toBe('100 : 43.4 (basis not stated)')
     expect(value('hazardStatements', { codes: ['H315', 'H317'] })).toBe('H315, H317')
-    expect(value('ingredient', { name: 'Benzyl alcohol', cas: '100-51-6', min: 10, max: 30, unit: '%' })).toBe('Benzyl alcohol (100-51-6), 10–30 %')
+    expect(value('ingredient', { name: 'Benzyl alcohol', cas: '100-51-6', min: 10, max: 30, unit: '%' })).toBe(
+      'Benzyl alcohol (100-51-6), 10–30 %',
+    )
     expect(value('ingredient', { name: 'Pigment', unit: '%' })).toBe('Pigment, share not stated')
     expect(value('gloves', { text: 'butyl rubber' })).toBe('butyl rubber')
     expect(value('revisionDate', { date: '2024-03' })).toBe('2024-03')

@@ -9,12 +9,46 @@ export type ShownSystem = 'stated' | 'us' | 'si'
 
 /** US units with the SI unit that people of the trade use for the same thing. What both systems use (hours, per cent, mPa·s) is not here. */
 const siOf: Partial<Record<Unit, Unit>> = {
-  mil: 'µm', in: 'mm', ft: 'm', 'ft²': 'm²', gal: 'L', 'in³': 'mL', lb: 'kg', oz: 'g', 'lb/gal': 'kg/L', 'lb/ft³': 'kg/L', 'ft²/gal': 'm²/L', 'lb/ft²': 'kg/m²',
-  '°F': '°C', 'Δ°F': 'Δ°C', psi: 'MPa', lbf: 'N', 'lb/1000 ft²·24 h': 'g/m²·24 h',
+  mil: 'µm',
+  in: 'mm',
+  ft: 'm',
+  'ft²': 'm²',
+  gal: 'L',
+  'in³': 'mL',
+  lb: 'kg',
+  oz: 'g',
+  'lb/gal': 'kg/L',
+  'lb/ft³': 'kg/L',
+  'ft²/gal': 'm²/L',
+  'lb/ft²': 'kg/m²',
+  '°F': '°C',
+  'Δ°F': 'Δ°C',
+  psi: 'MPa',
+  lbf: 'N',
+  'lb/1000 ft²·24 h': 'g/m²·24 h',
 }
 const usOf: Partial<Record<Unit, Unit>> = {
-  µm: 'mil', mm: 'in', m: 'ft', 'm²': 'ft²', L: 'gal', mL: 'in³', 'm³': 'gal', kg: 'lb', g: 'oz', 'kg/L': 'lb/gal', 'g/cm³': 'lb/gal', 'g/L': 'lb/gal', 'm²/L': 'ft²/gal',
-  'kg/m²': 'lb/ft²', 'g/m²': 'lb/ft²', '°C': '°F', 'Δ°C': 'Δ°F', MPa: 'psi', N: 'lbf', kN: 'lbf', 'g/m²·24 h': 'lb/1000 ft²·24 h',
+  µm: 'mil',
+  mm: 'in',
+  m: 'ft',
+  'm²': 'ft²',
+  L: 'gal',
+  mL: 'in³',
+  'm³': 'gal',
+  kg: 'lb',
+  g: 'oz',
+  'kg/L': 'lb/gal',
+  'g/cm³': 'lb/gal',
+  'g/L': 'lb/gal',
+  'm²/L': 'ft²/gal',
+  'kg/m²': 'lb/ft²',
+  'g/m²': 'lb/ft²',
+  '°C': '°F',
+  'Δ°C': 'Δ°F',
+  MPa: 'psi',
+  N: 'lbf',
+  kN: 'lbf',
+  'g/m²·24 h': 'lb/1000 ft²·24 h',
 }
 
 /** The unit's counterpart in the other system, or undefined where both systems share it. A VOC content is told in g/L, a density in kg/L. */
@@ -98,7 +132,7 @@ export function formatWindow(range: Range, system: ShownSystem = 'stated'): stri
 }
 
 /** "2 : 1 by volume"; a ratio without basis says so. */
-export function formatRatio({ parts, basis }: Ratio): string {
+function formatRatio({ parts, basis }: Ratio): string {
   return `${parts.map((part) => formatNumber(part, 3)).join(' : ')} ${basis ? `by ${basis}` : '(basis not stated)'}`
 }
 

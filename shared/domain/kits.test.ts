@@ -5,10 +5,22 @@ import { type Unit, quantity, valueIn } from './units.ts'
 
 const pack = (size: number, { price = null, unit = 'gal' }: { price?: number | null; unit?: Unit } = {}): Pack => ({
   size: quantity<Unit>(size, unit),
-  items: [{ kind: 'mix', id: 'm', name: 'Ostrel Body 20', maker: 'Ostrel', size: quantity<Unit>(size, unit), count: 1, factId: `f${size}`, price }],
+  items: [
+    {
+      kind: 'mix',
+      id: 'm',
+      name: 'Ostrel Body 20',
+      maker: 'Ostrel',
+      size: quantity<Unit>(size, unit),
+      count: 1,
+      factId: `f${size}`,
+      price,
+    },
+  ],
 })
 const gallons = (value: number) => quantity(value, 'gal')
-const counts = (need: number, packs: Pack[]) => Object.fromEntries(chooseKits(gallons(need), packs)?.lines.map((line) => [line.pack.size.value, line.count]) ?? [])
+const counts = (need: number, packs: Pack[]) =>
+  Object.fromEntries(chooseKits(gallons(need), packs)?.lines.map((line) => [line.pack.size.value, line.count]) ?? [])
 
 describe('whole kits for a need', () => {
   it('59.94 gal are 20 kits of 3 gal; exactly 60.000 gal too', () => {
@@ -51,7 +63,12 @@ describe('whole kits for a need', () => {
   it('adds up over bays that share no kit', () => {
     const three = pack(3)
     const bays = [4, 4, 4].flatMap((need) => chooseKits(gallons(need), [three]) ?? [])
-    expect(joinPlans(bays, 'gal')).toMatchObject({ lines: [{ count: 6 }], need: { value: 12 }, held: { value: 18 }, leftover: { value: 6 } })
+    expect(joinPlans(bays, 'gal')).toMatchObject({
+      lines: [{ count: 6 }],
+      need: { value: 12 },
+      held: { value: 18 },
+      leftover: { value: 6 },
+    })
     expect(counts(12, [three]), 'in one go it would be four').toEqual({ 3: 4 })
   })
 })
@@ -63,7 +80,10 @@ describe('whatever is needed', () => {
   it('kits hold at least what is needed, and the leftover is less than the smallest kit when nothing is priced', () => {
     fc.assert(
       fc.property(need, sizes, (amount, given) => {
-        const plan = chooseKits(gallons(amount), given.map((size) => pack(size)))
+        const plan = chooseKits(
+          gallons(amount),
+          given.map((size) => pack(size)),
+        )
         const held = plan?.lines.reduce((sum, line) => sum + line.count * line.pack.size.value, 0) ?? 0
         expect(held).toBeGreaterThanOrEqual(amount - 1e-6)
         expect(plan?.held.value).toBeCloseTo(held, 6)

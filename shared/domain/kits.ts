@@ -73,7 +73,11 @@ export function chooseKits(need: Quantity, packs: readonly Pack[]): KitPlan | nu
       tryAll(at + 1, next, rest - count * size)
     }
   }
-  tryAll(0, packs.map(() => 0), need.value)
+  tryAll(
+    0,
+    packs.map(() => 0),
+    need.value,
+  )
   return planOf(best?.counts ?? [], { packs, sizes, need, by })
 }
 
@@ -87,7 +91,8 @@ interface Choice {
   by: KitPlan['by']
 }
 
-const heldBy = (counts: readonly number[], sizes: readonly number[]) => counts.reduce((sum, count, index) => sum + count * (sizes[index] ?? 0), 0)
+const heldBy = (counts: readonly number[], sizes: readonly number[]) =>
+  counts.reduce((sum, count, index) => sum + count * (sizes[index] ?? 0), 0)
 
 /** Cost or leftover, then the number of packs. */
 function scoreOf(counts: readonly number[], { packs, sizes, need, by }: Choice & { need: number }): [number, number] {
@@ -110,7 +115,7 @@ function planOf(counts: readonly number[], { packs, sizes, need, by }: Choice & 
 }
 
 /** USD of some packs; null when one has no price. */
-export function costOf(lines: readonly { pack: Pack; count: number }[]): number | null {
+function costOf(lines: readonly { pack: Pack; count: number }[]): number | null {
   return lines.reduce<number | null>((sum, { pack, count }) => {
     const price = priceOf(pack)
     return sum === null || price === null ? null : sum + price * count

@@ -9,15 +9,35 @@ import { inDimension } from './volume-or-mass.ts'
 
 let count = 0
 const fact = (property: Fact['property'], value: Fact['value']): Fact => ({
-  id: `d${++count}`, property, part: 'mixed', value, origin: { kind: 'entered', reason: 'label', by: 'test', at: '2026-01-01' },
+  id: `d${++count}`,
+  property,
+  part: 'mixed',
+  value,
+  origin: { kind: 'entered', reason: 'label', by: 'test', at: '2026-01-01' },
 })
 const density = (value: number, unit: Range['unit'] = 'kg/L') => fact('density', { min: value, max: value, unit })
 const letters = ['A', 'B', 'C'] as const
 const mix = (facts: Fact[], ...parts: Fact[][]): MixFacts => ({
-  id: 'm', name: 'Ostrel Body 20', maker: 'Ostrel', chemistry: 'epoxy', color: '#a8571a', status: 'active', facts, sheets: [],
+  id: 'm',
+  name: 'Ostrel Body 20',
+  maker: 'Ostrel',
+  chemistry: 'epoxy',
+  color: '#a8571a',
+  status: 'active',
+  facts,
+  sheets: [],
   parts: parts.map((own, index) => ({
     part: letters[index] ?? 'A',
-    product: { id: `p${index}`, name: `Ostrel ${letters[index] ?? 'A'}`, maker: 'Ostrel', kind: 'resin' as const, chemistry: 'epoxy' as const, status: 'active' as const, facts: own, sheets: [] },
+    product: {
+      id: `p${index}`,
+      name: `Ostrel ${letters[index] ?? 'A'}`,
+      maker: 'Ostrel',
+      kind: 'resin' as const,
+      chemistry: 'epoxy' as const,
+      status: 'active' as const,
+      facts: own,
+      sheets: [],
+    },
   })),
 })
 const twoToOne = fact('mixRatio', { parts: [2, 1], basis: 'volume' })
@@ -30,13 +50,25 @@ describe('density of a mix', () => {
   })
 
   it('is what its own sheet states, where it does', () => {
-    expect(mixedDensityFigure(mix([twoToOne, density(1.1)], [density(1.13)], [density(0.98)]))).toMatchObject({ kind: 'fact', value: { min: 1.1 } })
+    expect(mixedDensityFigure(mix([twoToOne, density(1.1)], [density(1.13)], [density(0.98)]))).toMatchObject({
+      kind: 'fact',
+      value: { min: 1.1 },
+    })
   })
 
   it('names the part whose density nobody states, and does not take a bound for a value', () => {
-    expect(mixedDensityFigure(mix([twoToOne], [density(1.13)], []))).toMatchObject({ kind: 'not-stated', missing: { property: 'density', part: 'B', of: 'Ostrel B' } })
-    expect(mixedDensityFigure(mix([twoToOne], [fact('density', { min: 1.1, unit: 'kg/L' })], [density(0.98)]))).toMatchObject({ kind: 'not-stated', missing: { part: 'A' } })
-    expect(mixedDensityFigure(mix([], [density(1.13)], [density(0.98)]))).toMatchObject({ kind: 'not-stated', missing: { property: 'mixRatio' } })
+    expect(mixedDensityFigure(mix([twoToOne], [density(1.13)], []))).toMatchObject({
+      kind: 'not-stated',
+      missing: { property: 'density', part: 'B', of: 'Ostrel B' },
+    })
+    expect(mixedDensityFigure(mix([twoToOne], [fact('density', { min: 1.1, unit: 'kg/L' })], [density(0.98)]))).toMatchObject({
+      kind: 'not-stated',
+      missing: { part: 'A' },
+    })
+    expect(mixedDensityFigure(mix([], [density(1.13)], [density(0.98)]))).toMatchObject({
+      kind: 'not-stated',
+      missing: { property: 'mixRatio' },
+    })
   })
 
   it('turns gallons into pounds for kits sold by weight, and is not made up where it is not known', () => {

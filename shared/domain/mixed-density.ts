@@ -28,7 +28,12 @@ export function mixedDensityFigure(mix: MixFacts): Figure {
   const { volume } = ratiosOf(mix)
   if (lacking || !volume) {
     return lacking
-      ? notStated('density', { of: lacking.product.name, part: lacking.part, subject: { kind: 'product', id: lacking.product.id }, ask: 'the maker, in writing' })
+      ? notStated('density', {
+          of: lacking.product.name,
+          part: lacking.part,
+          subject: { kind: 'product', id: lacking.product.id },
+          ask: 'the maker, in writing',
+        })
       : notStated('mixRatio', { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing' })
   }
   const unit = rangeOf(facts[0])?.unit === 'lb/gal' ? 'lb/gal' : 'kg/L'

@@ -5,7 +5,10 @@ import { wholeUp } from './rounding.ts'
  * Moisture emission rate: mass gained ÷ (area × time); 52.911 × g ÷ (ft² × h) in lb/1000 ft²·24 h. The area is the one under the dome.
  * Source: ASTM F1869, formula from memory.
  */
-export function moistureEmissionRate<U extends 'lb/1000 ft²·24 h' | 'g/m²·24 h'>({ gain, area, time }: { gain: Quantity; area: Quantity; time: Quantity }, unit: U): Quantity<U> {
+export function moistureEmissionRate<U extends 'lb/1000 ft²·24 h' | 'g/m²·24 h'>(
+  { gain, area, time }: { gain: Quantity; area: Quantity; time: Quantity },
+  unit: U,
+): Quantity<U> {
   const perDay = valueIn(gain, 'g') / (valueIn(area, 'm²') * valueIn(time, 'd'))
   return convert(quantity(perDay, 'g/m²·24 h'), unit)
 }

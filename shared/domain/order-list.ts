@@ -3,7 +3,7 @@ import type { CourseQuantity } from './quantities.ts'
 import type { Quantity } from './units.ts'
 
 /** One line of an order: whole packs of one size of one thing. */
-export interface OrderLine {
+interface OrderLine {
   item: Omit<PackItem, 'count' | 'factId' | 'price'>
   count: number
   /** USD each, and for all; null when no price is entered. */
@@ -52,7 +52,8 @@ export function orderList(courses: readonly CourseQuantity[]): OrderList {
   }
   for (const { title, name, maker, plan } of needs) {
     if (!plan) continue
-    for (const { pack, count } of plan.lines) for (const item of pack.items) addItem(orderOf(item.maker), item, { count: count * item.count, title })
+    for (const { pack, count } of plan.lines)
+      for (const item of pack.items) addItem(orderOf(item.maker), item, { count: count * item.count, title })
     if (plan.leftover.value > 0) addLeftover(orderOf(maker), name, plan.leftover)
   }
   const open = [...new Set(needs.filter(({ plan }) => !plan).map(({ name }) => name))]
@@ -61,7 +62,11 @@ export function orderList(courses: readonly CourseQuantity[]): OrderList {
   return { makers: [...makers.values()].sort((a, b) => a.maker.localeCompare(b.maker, 'en')), cost, open }
 }
 
-function addItem(order: MakerOrder, { kind, id, name, maker, size, price }: PackItem, { count, title }: { count: number; title: string }): void {
+function addItem(
+  order: MakerOrder,
+  { kind, id, name, maker, size, price }: PackItem,
+  { count, title }: { count: number; title: string },
+): void {
   const same = order.lines.find(({ item }) => item.id === id && item.size.unit === size.unit && item.size.value === size.value)
   const line: OrderLine = same ?? { item: { kind, id, name, maker, size }, count: 0, price, cost: null, courses: [] }
   if (!same) order.lines.push(line)

@@ -8,26 +8,60 @@ import { quantity } from './units.ts'
 
 let count = 0
 const fact = (property: Fact['property'], value: Fact['value'], others: Partial<Fact> = {}): Fact => ({
-  id: `p${++count}`, property, part: 'mixed', value, origin: { kind: 'entered', reason: 'price list', by: 'test', at: '2026-01-01' }, ...others,
+  id: `p${++count}`,
+  property,
+  part: 'mixed',
+  value,
+  origin: { kind: 'entered', reason: 'price list', by: 'test', at: '2026-01-01' },
+  ...others,
 })
 const exactly = (value: number, unit: Range['unit']): Range => ({ min: value, max: value, unit })
-const product = (id: string, facts: Fact[]): ProductFacts => ({ id, name: `Ostrel ${id}`, maker: 'Ostrel', kind: 'resin', chemistry: 'epoxy', status: 'active', facts, sheets: [] })
+const product = (id: string, facts: Fact[]): ProductFacts => ({
+  id,
+  name: `Ostrel ${id}`,
+  maker: 'Ostrel',
+  kind: 'resin',
+  chemistry: 'epoxy',
+  status: 'active',
+  facts,
+  sheets: [],
+})
 const mix = (facts: Fact[], parts: ProductFacts[]): MixFacts => ({
-  id: 'mix', name: 'Ostrel Body 20', maker: 'Ostrel', chemistry: 'epoxy', color: '#a8571a', status: 'active', facts, sheets: [],
+  id: 'mix',
+  name: 'Ostrel Body 20',
+  maker: 'Ostrel',
+  chemistry: 'epoxy',
+  color: '#a8571a',
+  status: 'active',
+  facts,
+  sheets: [],
   parts: parts.map((one, index) => ({ part: (['A', 'B', 'C'] as const)[index] ?? 'A', product: one })),
 })
 const twoToOne = fact('mixRatio', { parts: [2, 1], basis: 'volume' })
 
 describe('kits of a mix', () => {
   it('are the mixed packs that its sheet states', () => {
-    const packs = packsOfMix(mix([twoToOne, fact('packSize', exactly(3, 'gal')), fact('packSize', exactly(15, 'gal'))], [product('A', []), product('B', [])]))
+    const packs = packsOfMix(
+      mix([twoToOne, fact('packSize', exactly(3, 'gal')), fact('packSize', exactly(15, 'gal'))], [product('A', []), product('B', [])]),
+    )
     expect(packs.map(({ size }) => size)).toEqual([quantity(3, 'gal'), quantity(15, 'gal')])
     expect(packs[0]?.items).toMatchObject([{ kind: 'mix', id: 'mix', count: 1 }])
   })
 
   it('are put together from packs of A and B in ratio, and from no others', () => {
-    const packs = packsOfMix(mix([twoToOne], [product('A', [fact('packSize', exactly(2, 'gal')), fact('packSize', exactly(5, 'gal'))]), product('B', [fact('packSize', exactly(1, 'gal')), fact('packSize', exactly(5, 'gal'))])]))
-    expect(packs.map(({ size, items }) => [size.value, ...items.map((item) => `${item.count} × ${item.size.value}`)])).toEqual([[3, '1 × 2', '1 × 1'], [15, '2 × 5', '1 × 5']])
+    const packs = packsOfMix(
+      mix(
+        [twoToOne],
+        [
+          product('A', [fact('packSize', exactly(2, 'gal')), fact('packSize', exactly(5, 'gal'))]),
+          product('B', [fact('packSize', exactly(1, 'gal')), fact('packSize', exactly(5, 'gal'))]),
+        ],
+      ),
+    )
+    expect(packs.map(({ size, items }) => [size.value, ...items.map((item) => `${item.count} × ${item.size.value}`)])).toEqual([
+      [3, '1 × 2', '1 × 1'],
+      [15, '2 × 5', '1 × 5'],
+    ])
   })
 
   it('are packs by weight through the densities, where the ratio is by volume', () => {
@@ -51,15 +85,26 @@ describe('kits of a mix', () => {
 describe('prices', () => {
   it('belong to the pack they are entered for', () => {
     const sand = product('sand', [
-      fact('packSize', exactly(50, 'lb')), fact('packSize', exactly(100, 'lb')), fact('packPrice', exactly(14, 'USD'), { at: { mass: quantity(50, 'lb') } }),
+      fact('packSize', exactly(50, 'lb')),
+      fact('packSize', exactly(100, 'lb')),
+      fact('packPrice', exactly(14, 'USD'), { at: { mass: quantity(50, 'lb') } }),
     ])
     expect(packsOfProduct(sand).map(({ items }) => items[0]?.price)).toEqual([14, null])
   })
 
   it('need no size where there is one pack only', () => {
-    expect(packsOfProduct(product('sand', [fact('packSize', exactly(50, 'lb')), fact('packPrice', exactly(14, 'USD'))]))[0]?.items[0]?.price).toBe(14)
-    const two = product('sand', [fact('packSize', exactly(50, 'lb')), fact('packSize', exactly(100, 'lb')), fact('packPrice', exactly(14, 'USD'))])
-    expect(packsOfProduct(two).map(({ items }) => items[0]?.price), 'nobody says which').toEqual([null, null])
+    expect(
+      packsOfProduct(product('sand', [fact('packSize', exactly(50, 'lb')), fact('packPrice', exactly(14, 'USD'))]))[0]?.items[0]?.price,
+    ).toBe(14)
+    const two = product('sand', [
+      fact('packSize', exactly(50, 'lb')),
+      fact('packSize', exactly(100, 'lb')),
+      fact('packPrice', exactly(14, 'USD')),
+    ])
+    expect(
+      packsOfProduct(two).map(({ items }) => items[0]?.price),
+      'nobody says which',
+    ).toEqual([null, null])
   })
 })
 

@@ -47,7 +47,10 @@ const productOwner = ({ id, name, maker }: ProductFacts): Owner => ({ kind: 'pro
 
 /** Bags or pails of one product, as its sheet states them. */
 export function packsOfProduct(product: ProductFacts): Pack[] {
-  return itemsOf(productOwner(product), factsOf(product.facts, 'packSize'), factsOf(product.facts, 'packPrice')).map((item) => ({ size: item.size, items: [item] }))
+  return itemsOf(productOwner(product), factsOf(product.facts, 'packSize'), factsOf(product.facts, 'packPrice')).map((item) => ({
+    size: item.size,
+    items: [item],
+  }))
 }
 
 /** Packs of one part: as the mix's sheet states them for the part, else as the product's own does. */
@@ -84,17 +87,27 @@ function kitsInRatio(parts: readonly PackItem[][], ratio: readonly number[] | nu
     const items = fewestInRatio(set, shares, unit)
     if (!items) return []
     const shown = items[0]?.size.unit ?? unit
-    return [{ size: quantity(items.reduce((sum, { size, count }) => sum + valueIn(size, shown) * count, 0), shown), items }]
+    return [
+      {
+        size: quantity(
+          items.reduce((sum, { size, count }) => sum + valueIn(size, shown) * count, 0),
+          shown,
+        ),
+        items,
+      },
+    ]
   })
 }
 
 function fewestInRatio(set: readonly PackItem[], shares: readonly number[], unit: 'L' | 'kg'): PackItem[] | undefined {
   const counted = set.reduce<number[][]>((all) => all.flatMap((counts) => [1, 2, 3, 4].map((count) => [...counts, count])), [[]])
   const pieces = (counts: readonly number[]) => counts.reduce((sum, count) => sum + count, 0)
-  const counts = counted.sort((a, b) => pieces(a) - pieces(b)).find((some) => {
-    const amounts = set.map(({ size }, index) => valueIn(size, unit) * (some[index] ?? 1))
-    const total = amounts.reduce((sum, amount) => sum + amount, 0)
-    return amounts.every((amount, index) => Math.abs(amount / total / (shares[index] ?? Number.NaN) - 1) <= roundedPack)
-  })
+  const counts = counted
+    .sort((a, b) => pieces(a) - pieces(b))
+    .find((some) => {
+      const amounts = set.map(({ size }, index) => valueIn(size, unit) * (some[index] ?? 1))
+      const total = amounts.reduce((sum, amount) => sum + amount, 0)
+      return amounts.every((amount, index) => Math.abs(amount / total / (shares[index] ?? Number.NaN) - 1) <= roundedPack)
+    })
   return counts && set.map((item, index) => ({ ...item, count: counts[index] ?? 1 }))
 }

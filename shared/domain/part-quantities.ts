@@ -19,7 +19,10 @@ export interface PartQuantity {
  * What a volume of mixed resin takes of each part: volume × share of the volume, and that × the part's density. Not stated where the ratio by volume,
  * or the density, cannot be known.
  */
-export function partQuantities(mix: MixFacts, { total, proportions }: { total: Figure; proportions: CourseResult['proportions'] }): PartQuantity[] {
+export function partQuantities(
+  mix: MixFacts,
+  { total, proportions }: { total: Figure; proportions: CourseResult['proportions'] },
+): PartQuantity[] {
   return proportions.map((proportion) => {
     const volume = volumeOfPart(mix, total, proportion)
     return { part: proportion.part, productId: proportion.productId, name: proportion.name, volume, mass: massOfPart(volume, proportion) }
@@ -29,11 +32,20 @@ export function partQuantities(mix: MixFacts, { total, proportions }: { total: F
 function volumeOfPart(mix: MixFacts, total: Figure, { part, volumeShare }: Proportion): Figure {
   if (total.kind === 'not-stated') return total
   if (volumeShare === null) {
-    return notStated('mixRatio', { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing', because: 'no ratio by volume is stated or can be worked out' })
+    return notStated('mixRatio', {
+      of: mix.name,
+      subject: { kind: 'mix', id: mix.id },
+      ask: 'the maker, in writing',
+      because: 'no ratio by volume is stated or can be worked out',
+    })
   }
   const value = mapRange(total.value, total.value.unit, (amount) => amount * volumeShare)
   const sum = `${formatRange(total.value)} × ${formatNumber(volumeShare * 100, 2)} % = ${formatRange(value)}`
-  return computed(value, { formula: `part ${part} = mixed volume × its share`, sum, source: 'the ratio by volume' }, sourcesOf('mixed volume', total))
+  return computed(
+    value,
+    { formula: `part ${part} = mixed volume × its share`, sum, source: 'the ratio by volume' },
+    sourcesOf('mixed volume', total),
+  )
 }
 
 function massOfPart(volume: Figure, { part, density }: Proportion): Figure {
@@ -41,14 +53,23 @@ function massOfPart(volume: Figure, { part, density }: Proportion): Figure {
   if (density.kind === 'not-stated') return density
   const { min, max, unit } = density.value
   if (min === undefined || max === undefined) {
-    return notStated('density', { of: `part ${part}`, part, subject: null, ask: 'the maker, in writing', because: 'only a bound is stated' })
+    return notStated('density', {
+      of: `part ${part}`,
+      part,
+      subject: null,
+      ask: 'the maker, in writing',
+      because: 'only a bound is stated',
+    })
   }
   const middle = quantity((min + max) / 2, unit)
   const mass = massUnit(volume)
-  const value = mapRange(volume.value, mass, (amount) => valueIn(quantity(valueIn(quantity(amount, volume.value.unit), 'L') * valueIn(middle, 'kg/L'), 'kg'), mass))
+  const value = mapRange(volume.value, mass, (amount) =>
+    valueIn(quantity(valueIn(quantity(amount, volume.value.unit), 'L') * valueIn(middle, 'kg/L'), 'kg'), mass),
+  )
   const sum = `${formatRange(volume.value)} × ${formatRange({ min: middle.value, max: middle.value, unit })} = ${formatRange(value)}`
   return computed(value, { formula: 'mass = volume × density', sum, source: 'definition of density' }, [
-    ...sourcesOf(`volume of part ${part}`, volume), ...sourcesOf(`density of part ${part}`, density),
+    ...sourcesOf(`volume of part ${part}`, volume),
+    ...sourcesOf(`density of part ${part}`, density),
   ])
 }
 

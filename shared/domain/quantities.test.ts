@@ -16,27 +16,60 @@ import { greatestOf } from './working.ts'
 
 let count = 0
 const fact = (property: Fact['property'], value: Fact['value'], others: Partial<Fact> = {}): Fact => ({
-  id: `q${++count}`, property, part: 'mixed', value, origin: { kind: 'entered', reason: 'price list', by: 'test', at: '2026-01-01' }, ...others,
+  id: `q${++count}`,
+  property,
+  part: 'mixed',
+  value,
+  origin: { kind: 'entered', reason: 'price list', by: 'test', at: '2026-01-01' },
+  ...others,
 })
 const exactly = (value: number, unit: Range['unit']): Range => ({ min: value, max: value, unit })
 const product = (id: string, facts: Fact[], others: Partial<ProductFacts> = {}): ProductFacts => ({
-  id, name: `Ostrel ${id}`, maker: 'Ostrel', kind: 'resin', chemistry: 'epoxy', status: 'active', facts, sheets: [], ...others,
+  id,
+  name: `Ostrel ${id}`,
+  maker: 'Ostrel',
+  kind: 'resin',
+  chemistry: 'epoxy',
+  status: 'active',
+  facts,
+  sheets: [],
+  ...others,
 })
 const density = (value: number) => fact('density', exactly(value, 'lb/gal'))
 const mixOf = (id: string, facts: Fact[]): MixFacts => ({
-  id, name: `Ostrel ${id}`, maker: 'Ostrel', chemistry: 'epoxy', color: '#a8571a', status: 'active', sheets: [],
+  id,
+  name: `Ostrel ${id}`,
+  maker: 'Ostrel',
+  chemistry: 'epoxy',
+  color: '#a8571a',
+  status: 'active',
+  sheets: [],
   facts: [fact('mixRatio', { parts: [2, 1], basis: 'volume' }), fact('volumeSolids', exactly(100, '%')), ...facts],
-  parts: [{ part: 'A', product: product('A', [density(9.6)]) }, { part: 'B', product: product('B', [density(8.3)]) }],
+  parts: [
+    { part: 'A', product: product('A', [density(9.6)]) },
+    { part: 'B', product: product('B', [density(8.3)]) },
+  ],
 })
 const kit = fact('packSize', exactly(3, 'gal'))
 const body = mixOf('Body', [kit, fact('splitKit', { is: false }), fact('packPrice', exactly(210, 'USD'))])
 const prime = mixOf('Prime', [kit, fact('splitKit', { is: true }), fact('packPrice', exactly(180, 'USD'))])
 const patch = mixOf('Patch', [])
-const quartz = product('quartz', [fact('density', exactly(2.65, 'g/cm³')), fact('packSize', exactly(50, 'lb')), fact('packPrice', exactly(14, 'USD'))], { name: 'Teasel quartz', maker: 'Teasel', kind: 'aggregate', chemistry: 'silica' })
+const quartz = product(
+  'quartz',
+  [fact('density', exactly(2.65, 'g/cm³')), fact('packSize', exactly(50, 'lb')), fact('packPrice', exactly(14, 'USD'))],
+  { name: 'Teasel quartz', maker: 'Teasel', kind: 'aggregate', chemistry: 'silica' },
+)
 
 const course = (stage: Course['stage'], id: string, given: Partial<Course>): Course => ({ ...newCourse(stage, id), ...given })
 const spread = { value: 150, unit: 'ft²/gal' as const }
-const bay = (id: string, area: number, others: Partial<Bay> = {}): Bay => ({ id, name: `Bay ${id}`, area: { value: area, unit: 'ft²' }, joints: [], spalls: null, ...others })
+const bay = (id: string, area: number, others: Partial<Bay> = {}): Bay => ({
+  id,
+  name: `Bay ${id}`,
+  area: { value: area, unit: 'ft²' },
+  joints: [],
+  spalls: null,
+  ...others,
+})
 const noLoss: Loss = { percent: 0, convention: 'lost' }
 
 interface Given {
@@ -48,15 +81,31 @@ interface Given {
 }
 function quantitiesOf({ courses, bays = [bay('1', 5000)], texture = null, loss = noLoss, products = { quartz } }: Given): CourseQuantity[] {
   const input: EvaluationInput = {
-    courses, mixes: { Body: body, Prime: prime, Patch: patch }, products, onDate: '2026-12-01', sheetAgeLimitYears: 3,
-    conditions: { slabTemperature: quantity(68, '°F'), airTemperature: quantity(68, '°F'), relativeHumidity: 45, substrateRelativeHumidity: null, moistureEmission: null, vocPlace: null },
+    courses,
+    mixes: { Body: body, Prime: prime, Patch: patch },
+    products,
+    onDate: '2026-12-01',
+    sheetAgeLimitYears: 3,
+    conditions: {
+      slabTemperature: quantity(68, '°F'),
+      airTemperature: quantity(68, '°F'),
+      relativeHumidity: 45,
+      substrateRelativeHumidity: null,
+      moistureEmission: null,
+      vocPlace: null,
+    },
   }
   return jobQuantities({ floor: input, results: evaluate(input).courses, bays, texture, loss })
 }
-const gallons = (one: CourseQuantity | undefined) => (one && one.total.kind !== 'not-stated' ? greatestOf(one.total.value).value : Number.NaN)
+const gallons = (one: CourseQuantity | undefined) =>
+  one && one.total.kind !== 'not-stated' ? greatestOf(one.total.value).value : Number.NaN
 
 describe('quantities of a job', () => {
-  const two = [course('prep', 'prep', {}), course('body', 'first', { mixId: 'Body', spreadRate: spread }), course('body', 'second', { mixId: 'Body', spreadRate: spread })]
+  const two = [
+    course('prep', 'prep', {}),
+    course('body', 'first', { mixId: 'Body', spreadRate: spread }),
+    course('body', 'second', { mixId: 'Body', spreadRate: spread }),
+  ]
 
   it('two coats at 150 ft²/gal on 5,000 ft² take 33.3 gal each before loss (common practice)', () => {
     const [first, second] = quantitiesOf({ courses: two })
@@ -87,7 +136,10 @@ describe('quantities of a job', () => {
   it('fills joints and spalls in the fill course, and lays no film there', () => {
     const joints = [{ length: quantity(320, 'ft'), width: quantity(0.25, 'in'), depth: quantity(1.5, 'in') }]
     const spalls = { area: quantity(120, 'ft²'), meanDepth: quantity(0.35, 'in') }
-    const [fill] = quantitiesOf({ courses: [course('fill', 'fill', { mixId: 'Patch' }), ...two], bays: [bay('1', 5000, { joints, spalls })] })
+    const [fill] = quantitiesOf({
+      courses: [course('fill', 'fill', { mixId: 'Patch' }), ...two],
+      bays: [bay('1', 5000, { joints, spalls })],
+    })
     expect(fill?.bays[0]).toMatchObject({ film: null, texture: null })
     expect(gallons(fill)).toBeCloseTo(6.234 + 26.18, 1)
   })
@@ -95,7 +147,10 @@ describe('quantities of a job', () => {
   it('leaves joints to the course that is named after them, spalls to the other', () => {
     const joints = [{ length: quantity(320, 'ft'), width: quantity(0.25, 'in'), depth: quantity(1.5, 'in') }]
     const spalls = { area: quantity(120, 'ft²'), meanDepth: quantity(0.35, 'in') }
-    const fills = [course('fill', 'j', { mixId: 'Body', title: 'Joint filler' }), course('fill', 's', { mixId: 'Patch', title: 'Spall repair' })]
+    const fills = [
+      course('fill', 'j', { mixId: 'Body', title: 'Joint filler' }),
+      course('fill', 's', { mixId: 'Patch', title: 'Spall repair' }),
+    ]
     const [jointFill, patchFill] = quantitiesOf({ courses: fills, bays: [bay('1', 5000, { joints, spalls })] })
     expect(gallons(jointFill)).toBeCloseTo(6.234, 2)
     expect(gallons(patchFill)).toBeCloseTo(26.18, 1)
@@ -108,16 +163,26 @@ describe('quantities of a job', () => {
   })
 
   it('takes no density of sand for granted', () => {
-    const slurry = course('slurry', 's', { mixId: 'Body', thickness: { value: 125, unit: 'mil', film: 'wet' }, filler: { productId: 'quartz', loading: quantity(13.8, 'lb/gal') } })
+    const slurry = course('slurry', 's', {
+      mixId: 'Body',
+      thickness: { value: 125, unit: 'mil', film: 'wet' },
+      filler: { productId: 'quartz', loading: quantity(13.8, 'lb/gal') },
+    })
     const without = quantitiesOf({ courses: [slurry], products: { quartz: { ...quartz, facts: [] } } })
     expect(without[0]?.total).toMatchObject({ kind: 'not-stated', missing: { property: 'density', of: 'Teasel quartz' } })
     const heap = quantitiesOf({ courses: [slurry], products: { quartz: { ...quartz, facts: [fact('density', exactly(100, 'lb/ft³'))] } } })
-    expect(heap[0]?.total).toMatchObject({ kind: 'not-stated', missing: { because: '100 lb/ft³ is the density of the heap, not of the grain' } })
+    expect(heap[0]?.total).toMatchObject({
+      kind: 'not-stated',
+      missing: { because: '100 lb/ft³ is the density of the heap, not of the grain' },
+    })
   })
 
   it('gives each part by volume and on the scale: 2:1 of 33.3 gal is 22.2 gal of A, 213 lb, and 11.1 gal of B, 92.2 lb', () => {
     const [first] = quantitiesOf({ courses: two })
-    expect(first?.parts.map((part) => [part.part, formatFigure(part.volume), formatFigure(part.mass)])).toEqual([['A', '22.2 gal', '213 lb'], ['B', '11.1 gal', '92.2 lb']])
+    expect(first?.parts.map((part) => [part.part, formatFigure(part.volume), formatFigure(part.mass)])).toEqual([
+      ['A', '22.2 gal', '213 lb'],
+      ['B', '11.1 gal', '92.2 lb'],
+    ])
   })
 })
 
@@ -137,12 +202,20 @@ describe('kits of a job', () => {
   it('come on one order by maker, with what is left over and what it costs', () => {
     const courses = [
       course('prime', 'p', { mixId: 'Prime', title: 'Prime coat', spreadRate: spread }),
-      course('body', 'b', { mixId: 'Body', title: 'Body coat', spreadRate: spread, broadcast: { productId: 'quartz', rate: quantity(0.5, 'lb/ft²'), toRefusal: true } }),
+      course('body', 'b', {
+        mixId: 'Body',
+        title: 'Body coat',
+        spreadRate: spread,
+        broadcast: { productId: 'quartz', rate: quantity(0.5, 'lb/ft²'), toRefusal: true },
+      }),
       course('seal', 's', { mixId: 'Body', title: 'Seal coat', spreadRate: spread }),
     ]
     const order = orderList(quantitiesOf({ courses, bays }))
-    expect(order.makers.map(({ maker, lines }) => [maker, ...lines.map((line) => `${line.count} × ${line.item.name}: ${line.cost}`)])).toEqual([
-      ['Ostrel', '5 × Ostrel Prime: 900', '12 × Ostrel Body: 2520'], ['Teasel', '21 × Teasel quartz: 294'],
+    expect(
+      order.makers.map(({ maker, lines }) => [maker, ...lines.map((line) => `${line.count} × ${line.item.name}: ${line.cost}`)]),
+    ).toEqual([
+      ['Ostrel', '5 × Ostrel Prime: 900', '12 × Ostrel Body: 2520'],
+      ['Teasel', '21 × Teasel quartz: 294'],
     ])
     expect(order).toMatchObject({ cost: 3714, open: [] })
     expect(order.makers[0]?.lines[1]?.courses).toEqual(['Body coat', 'Seal coat'])
@@ -179,7 +252,15 @@ describe('whatever the job', () => {
     fc.assert(
       fc.property(fc.array(area, { minLength: 1, maxLength: 6 }), (areas) => {
         const cut = quantitiesOf({ courses, bays: areas.map((size, index) => bay(String(index), size)) })[0]
-        const whole = quantitiesOf({ courses, bays: [bay('all', areas.reduce((sum, size) => sum + size, 0))] })[0]
+        const whole = quantitiesOf({
+          courses,
+          bays: [
+            bay(
+              'all',
+              areas.reduce((sum, size) => sum + size, 0),
+            ),
+          ],
+        })[0]
         expect(gallons(cut) / gallons(whole)).toBeCloseTo(1, 9)
       }),
       { numRuns: 40 },

@@ -22,19 +22,19 @@ export interface QuantitiesInput {
   loss: Loss
 }
 
-export interface BayQuantity extends BayTerms {
+interface BayQuantity extends BayTerms {
   bayId: string
   name: string
 }
 
 /** Whole packs for a need, or why there are none. `perBay`: kits are not carried from one bay to the next, since the sheet gives no leave to split them. */
-export interface Packing {
+interface Packing {
   plan: KitPlan | null
   partKits: PartKits
   perBay: boolean
 }
 
-export interface AggregateQuantity {
+interface AggregateQuantity {
   use: 'filler' | 'broadcast'
   product: Pick<ProductFacts, 'id' | 'name' | 'maker'>
   mass: Figure
@@ -65,10 +65,20 @@ export function jobQuantities(given: QuantitiesInput): CourseQuantity[] {
   })
 }
 
-function courseQuantity({ course, mix, result }: { course: Course; mix: MixFacts; result: CourseResult }, given: QuantitiesInput): CourseQuantity {
+function courseQuantity(
+  { course, mix, result }: { course: Course; mix: MixFacts; result: CourseResult },
+  given: QuantitiesInput,
+): CourseQuantity {
   const fills = fillsOf(course, given.floor.courses)
-  const bays = given.bays.map((bay): BayQuantity => ({ bayId: bay.id, name: bay.name, ...bayTerms(bay, { course, result, fills, ...given }) }))
-  const total = sumFigures(bays.map((bay) => bay.total), 'sum of the bays')
+  const bays = given.bays.map((bay): BayQuantity => ({
+    bayId: bay.id,
+    name: bay.name,
+    ...bayTerms(bay, { course, result, fills, ...given }),
+  }))
+  const total = sumFigures(
+    bays.map((bay) => bay.total),
+    'sum of the bays',
+  )
   return {
     courseId: course.id,
     title: course.title,
@@ -95,7 +105,10 @@ function packingOf(mix: MixFacts, { total, bays }: { total: Figure; bays: readon
   return { plan: known.length === plans.length ? joinPlans(known, first.size.unit) : null, partKits, perBay }
 }
 
-function aggregatesOf(course: Course, { total, bays, products }: { total: Figure; bays: readonly Bay[]; products: EvaluationInput['products'] }): AggregateQuantity[] {
+function aggregatesOf(
+  course: Course,
+  { total, bays, products }: { total: Figure; bays: readonly Bay[]; products: EvaluationInput['products'] },
+): AggregateQuantity[] {
   const line = (use: AggregateQuantity['use'], productId: string, mass: Figure): AggregateQuantity[] => {
     const product = products[productId]
     if (!product) return []

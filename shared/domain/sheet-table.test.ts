@@ -7,7 +7,12 @@ import { type Quantity, quantity } from './units.ts'
 const citation = { sheetId: 's1', revisionId: 'r1', sheetTitle: 'Ostrel Body 20', revisionDate: '2026-01', page: 2, box: null, quote: null }
 let count = 0
 const fact = (given: Partial<Fact>): Fact => ({
-  id: `f${++count}`, property: 'potLife', part: 'mixed', value: { min: 30, max: 30, unit: 'min' }, origin: { kind: 'stated', citation, by: 'P. Ware', at: '2026-01-10' }, ...given,
+  id: `f${++count}`,
+  property: 'potLife',
+  part: 'mixed',
+  value: { min: 30, max: 30, unit: 'min' },
+  origin: { kind: 'stated', citation, by: 'P. Ware', at: '2026-01-10' },
+  ...given,
 })
 const minutes = (value: number, temperature?: Quantity, others: Fact['at'] = {}) =>
   fact({ value: { min: value, max: value, unit: 'min' }, at: { ...(temperature ? { temperature } : {}), ...others } })
@@ -38,7 +43,10 @@ describe('a value at a temperature, from the sheet’s own table', () => {
   })
 
   it('stops where the sheet stops, at both ends', () => {
-    expect(ask(table, f(45))).toMatchObject({ kind: 'not-stated', missing: { because: 'the sheet stops at 50 °F', of: 'Ostrel Body 20', property: 'potLife' } })
+    expect(ask(table, f(45))).toMatchObject({
+      kind: 'not-stated',
+      missing: { because: 'the sheet stops at 50 °F', of: 'Ostrel Body 20', property: 'potLife' },
+    })
     expect(ask(table, f(95))).toMatchObject({ kind: 'not-stated', missing: { because: 'the sheet stops at 90 °F' } })
   })
 
@@ -51,7 +59,9 @@ describe('a value at a temperature, from the sheet’s own table', () => {
 
   it('is given with that said, when the sheet states no temperature', () => {
     expect(ask([minutes(30)], f(60))).toMatchObject({ kind: 'fact', condition: 'no temperature stated' })
-    expect(ask([minutes(30, undefined, { mass: quantity(150, 'g') })], f(60))).toMatchObject({ condition: 'no temperature stated, at 150 g' })
+    expect(ask([minutes(30, undefined, { mass: quantity(150, 'g') })], f(60))).toMatchObject({
+      condition: 'no temperature stated, at 150 g',
+    })
   })
 
   it('does not fall back on a value without temperature outside a table', () => {
@@ -59,7 +69,10 @@ describe('a value at a temperature, from the sheet’s own table', () => {
   })
 
   it('is not stated when no sheet says anything, and names who could', () => {
-    expect(ask([], f(70))).toMatchObject({ kind: 'not-stated', missing: { ask: 'the maker, in writing', subject: { kind: 'mix', id: 'm1' } } })
+    expect(ask([], f(70))).toMatchObject({
+      kind: 'not-stated',
+      missing: { ask: 'the maker, in writing', subject: { kind: 'mix', id: 'm1' } },
+    })
     expect(formatFigure(ask([], f(70)))).toBe('not stated')
   })
 
@@ -67,7 +80,10 @@ describe('a value at a temperature, from the sheet’s own table', () => {
     const small = [minutes(60, f(50), { mass: quantity(150, 'g') }), minutes(30, f(70), { mass: quantity(150, 'g') })]
     const gallon = [minutes(20, f(70), { volume: quantity(1, 'gal') })]
     expect(tablesOf([...gallon, ...small], 'potLife').map(({ cells }) => cells.length)).toEqual([2, 1])
-    expect(ask([...gallon, ...small], f(70)), 'the fuller table answers').toMatchObject({ value: { min: 30 }, condition: 'at 70 °F, 150 g' })
+    expect(ask([...gallon, ...small], f(70)), 'the fuller table answers').toMatchObject({
+      value: { min: 30 },
+      condition: 'at 70 °F, 150 g',
+    })
     const between = ask([...gallon, ...small], f(60))
     expect(between.kind === 'computed' && between.working.sum).toBe('between 60 min at 50 °F and 30 min at 70 °F: 42.1 min at 60 °F, 150 g')
   })
@@ -79,18 +95,29 @@ describe('a value at a temperature, from the sheet’s own table', () => {
   })
 
   it('prefers what a sheet states to what is typical', () => {
-    const typical = [f(50), f(70), f(90)].map((at) => ({ ...minutes(40, at), origin: { kind: 'typical' as const, source: 'common practice', dated: '2026' } }))
+    const typical = [f(50), f(70), f(90)].map((at) => ({
+      ...minutes(40, at),
+      origin: { kind: 'typical' as const, source: 'common practice', dated: '2026' },
+    }))
     expect(ask([...typical, minutes(30, f(70))], f(70))).toMatchObject({ value: { min: 30 }, origin: { kind: 'stated' } })
   })
 
   it('interpolates a range end by end, and leaves an end open that a column leaves open', () => {
     const range = (min: number | undefined, max: number | undefined, at: Quantity) =>
-      fact({ property: 'recoatWindow', value: { ...(min === undefined ? {} : { min }), ...(max === undefined ? {} : { max }), unit: 'h' }, at: { temperature: at } })
+      fact({
+        property: 'recoatWindow',
+        value: { ...(min === undefined ? {} : { min }), ...(max === undefined ? {} : { max }), unit: 'h' },
+        at: { temperature: at },
+      })
     const both = valueAt([range(16, 48, f(50)), range(8, 24, f(70))], { property: 'recoatWindow', temperature: f(60), mix })
     expect(both.kind === 'computed' && [both.value.min, both.value.max].map((hours) => Number(hours?.toFixed(2)))).toEqual([11.24, 33.72])
     const open = valueAt([range(16, undefined, f(50)), range(8, 24, f(70))], { property: 'recoatWindow', temperature: f(60), mix })
     expect(open.kind === 'computed' && open.value).not.toHaveProperty('max')
-    const neither = valueAt([range(16, undefined, f(50)), range(undefined, 24, f(70))], { property: 'recoatWindow', temperature: f(60), mix })
+    const neither = valueAt([range(16, undefined, f(50)), range(undefined, 24, f(70))], {
+      property: 'recoatWindow',
+      temperature: f(60),
+      mix,
+    })
     expect(neither).toMatchObject({ kind: 'not-stated', missing: { because: 'the columns on either side state different ends' } })
   })
 

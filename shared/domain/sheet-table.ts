@@ -27,8 +27,15 @@ export interface SheetTable {
 function tableKey({ at, film, of, origin }: Fact): string {
   const amount = (one: Quantity | undefined, unit: Unit) => (one ? Number(valueIn(one, unit).toPrecision(4)) : null)
   return JSON.stringify([
-    origin.kind === 'typical', at?.temperature === undefined, amount(at?.mass, 'g'), amount(at?.volume, 'mL'), amount(at?.relativeHumidity, '%'),
-    amount(at?.film, 'µm'), at?.next?.toLowerCase(), film, of,
+    origin.kind === 'typical',
+    at?.temperature === undefined,
+    amount(at?.mass, 'g'),
+    amount(at?.volume, 'mL'),
+    amount(at?.relativeHumidity, '%'),
+    amount(at?.film, 'µm'),
+    at?.next?.toLowerCase(),
+    film,
+    of,
   ])
 }
 
@@ -48,7 +55,8 @@ export function tablesOf(facts: readonly Fact[], property: Property): SheetTable
     condition: withoutTemperature(cells[0]),
     temperatureStated: cells[0]?.fact.at?.temperature !== undefined,
   }))
-  const rank = ({ cells, temperatureStated }: SheetTable) => (cells[0]?.fact.origin.kind === 'typical' ? 1e6 : 0) + (temperatureStated ? 0 : 1e3) - cells.length
+  const rank = ({ cells, temperatureStated }: SheetTable) =>
+    (cells[0]?.fact.origin.kind === 'typical' ? 1e6 : 0) + (temperatureStated ? 0 : 1e3) - cells.length
   return tables.sort((a, b) => rank(a) - rank(b))
 }
 
@@ -93,7 +101,12 @@ export interface TableQuestion {
 
 /** Why a table has no answer. */
 function absent({ property, mix }: TableQuestion, because?: string): Figure {
-  const of: Omit<Missing, 'property' | 'part'> = { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing', ...(because ? { because } : {}) }
+  const of: Omit<Missing, 'property' | 'part'> = {
+    of: mix.name,
+    subject: { kind: 'mix', id: mix.id },
+    ask: 'the maker, in writing',
+    ...(because ? { because } : {}),
+  }
   return notStated(property, of)
 }
 
@@ -121,7 +134,9 @@ function answerOf({ cells, condition, temperatureStated }: SheetTable, question:
   const [low, high] = [cells[above - 1], cells[above]]
   if (!low || !high) return absent(question, beyond(celsius < first.celsius ? first : last, cells))
   const value = interpolated(low, high, celsius)
-  return value ? interpolatedFigure([low, high], { value, question, condition }) : absent(question, 'the columns on either side state different ends')
+  return value
+    ? interpolatedFigure([low, high], { value, question, condition })
+    : absent(question, 'the columns on either side state different ends')
 }
 
 /** The column of a temperature: the nearest within half a kelvin, the first stated among equals. */
@@ -134,14 +149,19 @@ function nearest(cells: readonly Cell[], celsius: number): Cell | undefined {
 function beyond({ fact, celsius }: Cell, cells: readonly Cell[]): string {
   const at = fact.at?.temperature
   const edge = at ? formatRange({ min: at.value, max: at.value, unit: at.unit }) : ''
-  return cells.every((cell) => Math.abs(cell.celsius - celsius) <= sameColumn) ? `the sheet states it at ${edge} only` : `the sheet stops at ${edge}`
+  return cells.every((cell) => Math.abs(cell.celsius - celsius) <= sameColumn)
+    ? `the sheet states it at ${edge} only`
+    : `the sheet stops at ${edge}`
 }
 
 function asFigure({ fact, range }: Cell, condition: string): Figure {
   return { kind: 'fact', value: range, factId: fact.id, origin: fact.origin, ...(condition ? { condition } : {}) }
 }
 
-function interpolatedFigure([low, high]: [Cell, Cell], { value, question, condition }: { value: Range; question: TableQuestion; condition: string }): Figure {
+function interpolatedFigure(
+  [low, high]: [Cell, Cell],
+  { value, question, condition }: { value: Range; question: TableQuestion; condition: string },
+): Figure {
   const unit: Unit = low.fact.at?.temperature?.unit ?? '°C'
   const degrees = (at: number) => `${formatNumber(convert(quantity(at, '°C'), unit).value, 1)} ${unitText(unit)}`
   const cell = ({ range, celsius }: Cell) => `${formatRange(range)} at ${degrees(celsius)}`

@@ -9,6 +9,18 @@ export function spallVolume({ area, meanDepth }: { area: Quantity; meanDepth: Qu
  * Volume of holes measured one by one: count × length × width × depth × shape. `shape` is 1 for square sides and a true mean depth;
  * about 0.7 for a dish with feathered edges (common practice).
  */
-export function holesVolume({ count, length, width, depth, shape }: { count: number; length: Quantity; width: Quantity; depth: Quantity; shape: number }): Quantity<'m³'> {
+export function holesVolume({
+  count,
+  length,
+  width,
+  depth,
+  shape,
+}: {
+  count: number
+  length: Quantity
+  width: Quantity
+  depth: Quantity
+  shape: number
+}): Quantity<'m³'> {
   return quantity(count * valueIn(length, 'm') * valueIn(width, 'm') * valueIn(depth, 'm') * shape, 'm³')
 }

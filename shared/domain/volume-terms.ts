@@ -65,17 +65,39 @@ export function bayTerms(bay: Bay, { course, result, fills, floor, texture, loss
   const unit = bay.area.unit === 'ft²' ? 'gal' : 'L'
   const placed = (volume: Quantity, working: PlacedWorking) => liquidOf(volume, { unit, working, course, products: floor.products })
   const film = fills.film ? filmTerm(bay, { result, unit }) : course.stage === 'cove' ? coveTerm(course) : null
-  const textured = fills.texture && texture ? placed(volumeOfFilm({ area: bay.area, film: texture }), { formula: 'texture = area × mean texture depth', sum: `${shown(bay.area)} × ${shown(texture)}` }) : null
-  const joints = fills.joints && bay.joints.length > 0 ? placed(jointsVolume(bay), { formula: 'joints = Σ length × width × depth', sum: bay.joints.map(jointText).join(' + ') }) : null
-  const spalls = fills.spalls && bay.spalls ? placed(spallVolume(bay.spalls), { formula: 'spalls = area × mean depth', sum: `${shown(bay.spalls.area)} × ${shown(bay.spalls.meanDepth)}` }) : null
+  const textured =
+    fills.texture && texture
+      ? placed(volumeOfFilm({ area: bay.area, film: texture }), {
+          formula: 'texture = area × mean texture depth',
+          sum: `${shown(bay.area)} × ${shown(texture)}`,
+        })
+      : null
+  const joints =
+    fills.joints && bay.joints.length > 0
+      ? placed(jointsVolume(bay), { formula: 'joints = Σ length × width × depth', sum: bay.joints.map(jointText).join(' + ') })
+      : null
+  const spalls =
+    fills.spalls && bay.spalls
+      ? placed(spallVolume(bay.spalls), {
+          formula: 'spalls = area × mean depth',
+          sum: `${shown(bay.spalls.area)} × ${shown(bay.spalls.meanDepth)}`,
+        })
+      : null
   const terms = [film, textured, joints, spalls].filter((term) => term !== null)
-  const net = terms.length > 0 ? sumFigures(terms, 'sum of the terms') : computed(quantity(0, unit), { formula: 'nothing to fill', sum: `no joints or spalls in ${bay.name}`, source: 'the survey' })
+  const net =
+    terms.length > 0
+      ? sumFigures(terms, 'sum of the terms')
+      : computed(quantity(0, unit), { formula: 'nothing to fill', sum: `no joints or spalls in ${bay.name}`, source: 'the survey' })
   return { area: bay.area, film, texture: textured, joints, spalls, loss: lossTerm(net, loss), total: totalTerm(net, loss) }
 }
 
 const shown = (amount: Quantity) => formatRange(point(amount))
 const jointText = ({ length, width, depth }: Bay['joints'][number]) => `${shown(length)} × ${shown(width)} × ${shown(depth)}`
-const jointsVolume = ({ joints }: Bay) => quantity(joints.reduce((sum, joint) => sum + jointVolume(joint).value, 0), 'm³')
+const jointsVolume = ({ joints }: Bay) =>
+  quantity(
+    joints.reduce((sum, joint) => sum + jointVolume(joint).value, 0),
+    'm³',
+  )
 
 /** Area × liquid resin per area. Resin per area is gallons for 1,000 ft² or litres for 100 m² (`CourseResult.resinPerArea`). */
 function filmTerm({ area }: Bay, { result: { resinPerArea }, unit }: { result: CourseResult; unit: 'gal' | 'L' }): Figure {
@@ -85,11 +107,20 @@ function filmTerm({ area }: Bay, { result: { resinPerArea }, unit }: { result: C
   const times = valueIn(area, 'm²') / valueIn(per, 'm²')
   const value = mapRange(resinPerArea.value, unit, (amount) => valueIn({ value: amount * times, unit: resinPerArea.value.unit }, unit))
   const sum = `${shown(area)} × ${formatRange(resinPerArea.value)} per ${us ? '1,000 ft²' : '100 m²'} = ${formatRange(value)}`
-  return computed(value, { formula: 'film = area × liquid resin per area', sum, source: 'the build-up and the survey' }, sourcesOf('resin per area', resinPerArea))
+  return computed(
+    value,
+    { formula: 'film = area × liquid resin per area', sum, source: 'the build-up and the survey' },
+    sourcesOf('resin per area', resinPerArea),
+  )
 }
 
 function coveTerm({ title }: Course): Figure {
-  return notStated('consumption', { of: title, subject: null, ask: 'whoever surveys the floor', because: 'the length of the cove is not measured' })
+  return notStated('consumption', {
+    of: title,
+    subject: null,
+    ask: 'whoever surveys the floor',
+    because: 'the length of the cove is not measured',
+  })
 }
 
 interface PlacedWorking {
@@ -98,7 +129,10 @@ interface PlacedWorking {
 }
 
 /** Liquid resin in a volume filled with the mix as placed: volume ÷ what a litre of liquid yields with its sand. */
-function liquidOf(volume: Quantity, { unit, working, course, products }: { unit: 'gal' | 'L'; working: PlacedWorking; course: Course; products: EvaluationInput['products'] }): Figure {
+function liquidOf(
+  volume: Quantity,
+  { unit, working, course, products }: { unit: 'gal' | 'L'; working: PlacedWorking; course: Course; products: EvaluationInput['products'] },
+): Figure {
   const filled = filledYield(course, products)
   if ('missing' in filled) return filled.missing
   const liquid = quantity(valueIn(volume, unit) / filled.perLiquid, unit)
@@ -114,7 +148,10 @@ export function sumFigures(figures: readonly Figure[], formula: string): Figure 
   const known = figures.filter((figure) => figure.kind !== 'not-stated')
   const [only] = known
   if (only && known.length === 1) return only
-  const value = sumOf(known.map((figure) => figure.value), only?.value.unit ?? 'gal')
+  const value = sumOf(
+    known.map((figure) => figure.value),
+    only?.value.unit ?? 'gal',
+  )
   const sum = `${known.map((figure) => formatRange(figure.value)).join(' + ')} = ${formatRange(value)}`
   return computed(value, { formula, sum, source: 'the terms' }, uniqueSources(known.flatMap((figure) => sourcesOf(formula, figure))))
 }
@@ -123,8 +160,10 @@ function uniqueSources(sources: readonly Source[]): Source[] {
   return [...new Map(sources.map((source) => [source.factId ?? source.label, source])).values()]
 }
 
-const lossText = ({ percent, convention }: Loss) => (convention === 'lost' ? `÷ (1 − ${formatNumber(percent)} %)` : `× (1 + ${formatNumber(percent)} %)`)
-const lossFormula = ({ convention }: Loss) => (convention === 'lost' ? 'a share of what is ordered is lost: net ÷ (1 − loss)' : 'an addition on top: net × (1 + loss)')
+const lossText = ({ percent, convention }: Loss) =>
+  convention === 'lost' ? `÷ (1 − ${formatNumber(percent)} %)` : `× (1 + ${formatNumber(percent)} %)`
+const lossFormula = ({ convention }: Loss) =>
+  convention === 'lost' ? 'a share of what is ordered is lost: net ÷ (1 − loss)' : 'an addition on top: net × (1 + loss)'
 
 function totalTerm(net: Figure, loss: Loss): Figure {
   if (net.kind === 'not-stated' || loss.percent === 0) return net

@@ -5,7 +5,9 @@ import { quantity } from './units.ts'
 
 let count = 0
 const window = (min: number | undefined, max: number | undefined, { next, at = 70 }: { next?: string; at?: number } = {}): Fact => ({
-  id: `w${++count}`, property: 'recoatWindow', part: 'mixed',
+  id: `w${++count}`,
+  property: 'recoatWindow',
+  part: 'mixed',
   value: { ...(min === undefined ? {} : { min }), ...(max === undefined ? {} : { max }), unit: 'h' },
   at: { temperature: quantity(at, '°F'), ...(next ? { next } : {}) },
   origin: { kind: 'entered', reason: 'maker’s letter', by: 'P. Ware', at: '2026-01-10' },
@@ -17,19 +19,27 @@ const at = quantity(70, '°F')
 describe('which window holds under the next coat', () => {
   it('is the one stated for that coat by name, before the one for any', () => {
     const mix = prime([window(8, 24), window(6, 12, { next: 'Corbel Seal 20' })])
-    expect(windowAt(mix, { temperature: at, next: top })).toMatchObject({ value: { min: 6, max: 12 }, condition: 'at 70 °F, before Corbel Seal 20' })
+    expect(windowAt(mix, { temperature: at, next: top })).toMatchObject({
+      value: { min: 6, max: 12 },
+      condition: 'at 70 °F, before Corbel Seal 20',
+    })
     expect(windowAt(mix, { temperature: at, next: undefined })).toMatchObject({ value: { min: 8, max: 24 } })
   })
 
   it('is the one for the next coat’s chemistry, where the sheet speaks of that', () => {
     const mix = prime([window(8, 24), window(6, 16, { next: 'any polyurethane top coat' })])
     expect(windowAt(mix, { temperature: at, next: top })).toMatchObject({ value: { max: 16 } })
-    expect(windowAt(mix, { temperature: at, next: { ...top, chemistry: 'polyurea' } }), 'polyurea is not polyurethane').toMatchObject({ value: { max: 24 } })
+    expect(windowAt(mix, { temperature: at, next: { ...top, chemistry: 'polyurea' } }), 'polyurea is not polyurethane').toMatchObject({
+      value: { max: 24 },
+    })
   })
 
   it('is not stated when the sheet names other coats only', () => {
     const mix = prime([window(8, 24, { next: 'Teasel Body 5' })])
-    expect(windowAt(mix, { temperature: at, next: top })).toMatchObject({ kind: 'not-stated', missing: { because: 'the sheet states it before Teasel Body 5 only' } })
+    expect(windowAt(mix, { temperature: at, next: top })).toMatchObject({
+      kind: 'not-stated',
+      missing: { because: 'the sheet states it before Teasel Body 5 only' },
+    })
   })
 
   it('knows a window with itself', () => {
@@ -51,7 +61,10 @@ describe('a window as clock times', () => {
 
   it('runs across midnight', () => {
     expect(clockTime(start, chicago)).toBe('Tue 16:30')
-    expect(clockWindow({ min: 9, max: 24, unit: 'h' }, { start, zone: chicago })).toMatchObject({ opens: { text: 'Wed 01:30' }, closes: { text: 'Wed 16:30' } })
+    expect(clockWindow({ min: 9, max: 24, unit: 'h' }, { start, zone: chicago })).toMatchObject({
+      opens: { text: 'Wed 01:30' },
+      closes: { text: 'Wed 16:30' },
+    })
   })
 
   it('leaves an end that no sheet states unstated', () => {

@@ -7,7 +7,11 @@ import { type Quantity, valueIn } from './units.ts'
 
 type NextCoat = Pick<MixFacts, 'id' | 'name' | 'chemistry'>
 
-const words = (text: string) => ` ${text.toLowerCase().replace(/[^\p{L}\p{N}]+/gu, ' ').trim()} `
+const words = (text: string) =>
+  ` ${text
+    .toLowerCase()
+    .replace(/[^\p{L}\p{N}]+/gu, ' ')
+    .trim()} `
 
 /** True when a sheet's words for the next coat mean this mix: its name, its chemistry ("any epoxy coat"), or the mix itself ("with itself"). */
 function means(next: string, { mix, of }: { mix: NextCoat; of: { id: string } }): boolean {
@@ -31,7 +35,10 @@ export function windowFacts(of: Pick<MixFacts, 'id' | 'facts'>, next: NextCoat |
  * Recoat window of a mix at a temperature, beneath a given next coat, from its sheet's own table. Either end may be missing: then nobody has said
  * how early, or how late. A window stated only for other coats is not one for this.
  */
-export function windowAt(mix: Pick<MixFacts, 'id' | 'name' | 'facts'>, { temperature, next }: { temperature: Quantity; next: NextCoat | undefined }): Figure {
+export function windowAt(
+  mix: Pick<MixFacts, 'id' | 'name' | 'facts'>,
+  { temperature, next }: { temperature: Quantity; next: NextCoat | undefined },
+): Figure {
   const others = [...new Set(factsOf(mix.facts, 'recoatWindow').flatMap(({ at }) => at?.next ?? []))]
   const because = others.length > 0 ? `the sheet states it before ${others.join(', ')} only` : undefined
   return valueAt(windowFacts(mix, next), { property: 'recoatWindow', temperature, mix, ...(because ? { because } : {}) })
@@ -53,7 +60,9 @@ export function clockTime(instant: number, zone: string): string {
 
 /** The same with the date: "Tue 3 Mar 04:00". */
 function datedTime(instant: number, zone: string): string {
-  return new Intl.DateTimeFormat('en-GB', { weekday: 'short', day: 'numeric', month: 'short', ...clock, timeZone: zone }).format(instant).replaceAll(',', '')
+  return new Intl.DateTimeFormat('en-GB', { weekday: 'short', day: 'numeric', month: 'short', ...clock, timeZone: zone })
+    .format(instant)
+    .replaceAll(',', '')
 }
 
 /** The zone's short name at an instant, where the wall shows the same time twice because clocks are put back; else nothing. */

@@ -21,7 +21,7 @@ export function mapRange(range: Range, unit: Unit, rising: (value: number) => nu
 }
 
 /** A range in another unit of its dimension. */
-export function rangeIn(range: Range, unit: Unit): Range {
+function rangeIn(range: Range, unit: Unit): Range {
   return mapRange(range, unit, (value) => convert({ value, unit: range.unit }, unit).value)
 }
 

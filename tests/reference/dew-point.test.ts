@@ -1,7 +1,15 @@
 import psychrolib from 'psychrolib'
 import fc from 'fast-check'
 import { beforeAll, describe, expect, it } from 'vitest'
-import { condensationPoint, dewPoint, dewPointMargin, frostPoint, greyBand, highestHumidity, marginBounds } from '../../shared/domain/dew-point.ts'
+import {
+  condensationPoint,
+  dewPoint,
+  dewPointMargin,
+  frostPoint,
+  greyBand,
+  highestHumidity,
+  marginBounds,
+} from '../../shared/domain/dew-point.ts'
 import { quantity, valueIn } from '../../shared/domain/units.ts'
 
 /** psychrolib 1.1.1 holds the ASHRAE Handbook 2017 equations. Below 0 °C it answers with the frost point. */
@@ -11,8 +19,20 @@ const air = (t: number, relativeHumidity: number, unit: '°C' | '°F' = '°C') =
 
 describe('dew point, against psychrolib', () => {
   it.each([
-    [5, 85, 2.691], [10, 50, 0.063], [10, 80, 6.713], [15, 60, 7.307], [20, 50, 9.272], [20, 65, 13.227], [20, 85, 17.403], [2, 95, 1.284],
-    [25, 60, 16.701], [25, 75, 20.261], [30, 50, 18.447], [30, 85, 27.199], [35, 40, 19.385], [40, 70, 33.469],
+    [5, 85, 2.691],
+    [10, 50, 0.063],
+    [10, 80, 6.713],
+    [15, 60, 7.307],
+    [20, 50, 9.272],
+    [20, 65, 13.227],
+    [20, 85, 17.403],
+    [2, 95, 1.284],
+    [25, 60, 16.701],
+    [25, 75, 20.261],
+    [30, 50, 18.447],
+    [30, 85, 27.199],
+    [35, 40, 19.385],
+    [40, 70, 33.469],
   ])('air %d °C, %d %% RH: %d °C', (t, rh, expected) => {
     expect(psychro(t, rh), 'the reference itself').toBeCloseTo(expected, 2)
     expect(Math.abs(dewPoint(air(t, rh)).value - expected)).toBeLessThan(0.04)
@@ -32,18 +52,45 @@ describe('dew point, against psychrolib', () => {
 
   it('in °F: 70 °F and 65 % is 57.7 °F, 90 °F and 50 % is 68.9 °F (psychrolib, ± 0.1)', () => {
     const fahrenheit = (t: number, rh: number) => valueIn(dewPoint(air(t, rh, '°F')), '°F')
-    const table = [[50, 50, 32.1], [60, 50, 41.3], [70, 50, 50.5], [70, 65, 57.7], [70, 80, 63.6], [75, 65, 62.5], [80, 60, 64.9], [85, 70, 74.1], [90, 50, 68.9]] as const
+    const table = [
+      [50, 50, 32.1],
+      [60, 50, 41.3],
+      [70, 50, 50.5],
+      [70, 65, 57.7],
+      [70, 80, 63.6],
+      [75, 65, 62.5],
+      [80, 60, 64.9],
+      [85, 70, 74.1],
+      [90, 50, 68.9],
+    ] as const
     for (const [t, rh, expected] of table) expect(Math.abs(fahrenheit(t, rh) - expected), `${t} °F, ${rh} %`).toBeLessThan(0.1)
   })
 })
 
 describe('dew point, against a published table (industry data sheet of 2013, 0.1 °C, within 0.15 °C)', () => {
   it.each([
-    [10, 50, 0.1], [15, 50, 4.7], [20, 50, 9.3], [25, 50, 13.8], [30, 50, 18.4], [20, 55, 10.7], [20, 60, 12], [25, 60, 16.7], [30, 60, 21.4], [20, 65, 13.3],
-    [10, 75, 5.7], [10, 80, 6.7], [15, 80, 11.5], [10, 85, 7.6], [15, 85, 12.5], [10, 90, 8.4],
+    [10, 50, 0.1],
+    [15, 50, 4.7],
+    [20, 50, 9.3],
+    [25, 50, 13.8],
+    [30, 50, 18.4],
+    [20, 55, 10.7],
+    [20, 60, 12],
+    [25, 60, 16.7],
+    [30, 60, 21.4],
+    [20, 65, 13.3],
+    [10, 75, 5.7],
+    [10, 80, 6.7],
+    [15, 80, 11.5],
+    [10, 85, 7.6],
+    [15, 85, 12.5],
+    [10, 90, 8.4],
   ])('air %d °C, %d %% RH: %d °C', (t, rh, printed) => expect(Math.abs(dewPoint(air(t, rh)).value - printed)).toBeLessThan(0.15))
 
-  it.each([[5, 50, -4.1], [8, 50, -1.6]])('prints the frost point below freezing: air %d °C, %d %% RH: %d °C', (t, rh, printed) => {
+  it.each([
+    [5, 50, -4.1],
+    [8, 50, -1.6],
+  ])('prints the frost point below freezing: air %d °C, %d %% RH: %d °C', (t, rh, printed) => {
     expect(Math.abs(frostPoint(air(t, rh)).value - printed)).toBeLessThan(0.15)
     expect(Math.abs(dewPoint(air(t, rh)).value - printed), 'the dew point is another thing').toBeGreaterThan(0.15)
   })
@@ -68,7 +115,10 @@ describe('the frost-point trap', () => {
 
 describe('slab above the dew point', () => {
   it.each([
-    ['a', 20, 65, 17, 3.8], ['b', 20, 65, 16, 2.8], ['c', 25, 75, 22, 1.7], ['e', 10, 88, 14, 5.9],
+    ['a', 20, 65, 17, 3.8],
+    ['b', 20, 65, 16, 2.8],
+    ['c', 25, 75, 22, 1.7],
+    ['e', 10, 88, 14, 5.9],
   ])('%s: air %d °C, %d %% RH, slab %d °C is %d °C above', (...[, t, rh, slab, margin]) => {
     expect(dewPointMargin(quantity(slab, '°C'), air(t, rh), 'Δ°C').value).toBeCloseTo(margin, 1)
   })
@@ -89,11 +139,15 @@ describe('slab above the dew point', () => {
     expect(Math.abs(own - 5)).toBeLessThan(valueIn(greyBand, 'Δ°F'))
   })
 
-  it.each([[20, 17, 68.35], [20, 20, 82.86], [25, 22, 69.35], [10, 8, 71.05], [30, 24, 58.59]])(
-    'air %d °C, slab %d °C: up to %d %% RH leaves 3 °C (psychrolib)', (t, slab, rh) => {
-      expect(highestHumidity({ slab: quantity(slab, '°C'), air: quantity(t, '°C'), margin: quantity(3, 'Δ°C') })).toBeCloseTo(rh, 0)
-    },
-  )
+  it.each([
+    [20, 17, 68.35],
+    [20, 20, 82.86],
+    [25, 22, 69.35],
+    [10, 8, 71.05],
+    [30, 24, 58.59],
+  ])('air %d °C, slab %d °C: up to %d %% RH leaves 3 °C (psychrolib)', (t, slab, rh) => {
+    expect(highestHumidity({ slab: quantity(slab, '°C'), air: quantity(t, '°C'), margin: quantity(3, 'Δ°C') })).toBeCloseTo(rh, 0)
+  })
 
   it('±0.5 °C and ±3 % RH move the dew point by about 2.2 °F at 70 °F and 50 % (common practice): a margin of 6 °F may be under 4 °F', () => {
     const room = air(70, 50, '°F')

@@ -1,13 +1,24 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { dryFilmOfWet, dryFilmUsed, practicalSpread, spreadOfDryFilm, spreadOfWetFilm, volumeOfFilm, wetFilmOfDry, wetFilmOfSpread, withLoss } from '../../shared/domain/film.ts'
+import {
+  dryFilmOfWet,
+  dryFilmUsed,
+  practicalSpread,
+  spreadOfDryFilm,
+  spreadOfWetFilm,
+  volumeOfFilm,
+  wetFilmOfDry,
+  wetFilmOfSpread,
+  withLoss,
+} from '../../shared/domain/film.ts'
 import { wholeUp } from '../../shared/domain/rounding.ts'
 import { type Quantity, convert, quantity, valueIn } from '../../shared/domain/units.ts'
 
 /**
  * Held against the definitions of gallon (231 in³), foot and mil, exact since 1959, and against values computed from them to 0.01 %.
  */
-const near = (value: number, expected: number, relative = 1e-4) => expect(Math.abs(value / expected - 1), `${value} against ${expected}`).toBeLessThan(relative)
+const near = (value: number, expected: number, relative = 1e-4) =>
+  expect(Math.abs(value / expected - 1), `${value} against ${expected}`).toBeLessThan(relative)
 const percent = (value: number) => quantity(value, '%')
 const rate = (value: number) => quantity(value, 'ft²/gal')
 
@@ -43,8 +54,16 @@ describe('two resin coats at 150 ft²/gal (common practice, no source)', () => {
 
 describe('spread of 100 % solids resin (table computed from the definitions)', () => {
   const table = [
-    [5, 127, 320.83, 7.874], [8, 203.2, 200.52, 4.921], [10, 254, 160.42, 3.937], [12, 304.8, 133.68, 3.281], [16, 406.4, 100.26, 2.461],
-    [20, 508, 80.21, 1.9685], [40, 1016, 40.1, 0.9843], [62.5, 1587.5, 25.667, 0.6299], [125, 3175, 12.833, 0.315], [250, 6350, 6.417, 0.1575],
+    [5, 127, 320.83, 7.874],
+    [8, 203.2, 200.52, 4.921],
+    [10, 254, 160.42, 3.937],
+    [12, 304.8, 133.68, 3.281],
+    [16, 406.4, 100.26, 2.461],
+    [20, 508, 80.21, 1.9685],
+    [40, 1016, 40.1, 0.9843],
+    [62.5, 1587.5, 25.667, 0.6299],
+    [125, 3175, 12.833, 0.315],
+    [250, 6350, 6.417, 0.1575],
   ] as const
   it.each(table)('%d mil is %d µm, %d ft²/gal, %d m²/L', (...[mil, micron, us, si]) => {
     near(valueIn(quantity(mil, 'mil'), 'µm'), micron, 1e-9)
@@ -134,7 +153,9 @@ describe('whatever the film', () => {
   it('a share lost always asks for at least as much as the same share added', () => {
     fc.assert(
       fc.property(fc.double({ min: 0, max: 60, noNaN: true }), (share) => {
-        expect(withLoss(100, { percent: share, convention: 'lost' })).toBeGreaterThanOrEqual(withLoss(100, { percent: share, convention: 'added' }) - 1e-9)
+        expect(withLoss(100, { percent: share, convention: 'lost' })).toBeGreaterThanOrEqual(
+          withLoss(100, { percent: share, convention: 'added' }) - 1e-9,
+        )
       }),
     )
   })

@@ -10,14 +10,27 @@ const feetPerGallon = (volume: Quantity) => 1 / valueIn(volume, 'gal')
 
 describe('joint filler, ft/gal = 231 ÷ (12 w d), from the definition of the gallon', () => {
   it.each([
-    [1 / 8, 1, 154, 0.649], [1 / 4, 1, 77, 1.299], [1 / 4, 1.5, 51.33, 1.948], [1 / 4, 2, 38.5, 2.597], [3 / 8, 1, 51.33, 1.948], [3 / 8, 1.5, 34.22, 2.922],
-    [3 / 8, 2, 25.67, 3.896], [1 / 2, 1, 38.5, 2.597], [1 / 2, 2, 19.25, 5.195], [3 / 4, 2, 12.83, 7.792],
+    [1 / 8, 1, 154, 0.649],
+    [1 / 4, 1, 77, 1.299],
+    [1 / 4, 1.5, 51.33, 1.948],
+    [1 / 4, 2, 38.5, 2.597],
+    [3 / 8, 1, 51.33, 1.948],
+    [3 / 8, 1.5, 34.22, 2.922],
+    [3 / 8, 2, 25.67, 3.896],
+    [1 / 2, 1, 38.5, 2.597],
+    [1 / 2, 2, 19.25, 5.195],
+    [3 / 4, 2, 12.83, 7.792],
   ])('%d × %d in: %d ft/gal, %d gal for 100 ft', (...[width, depth, perGallon, per100]) => {
     expect(feetPerGallon(jointVolume({ length: feet(1), width: inch(width), depth: inch(depth) }))).toBeCloseTo(perGallon, 1)
     expect(valueIn(jointVolume({ length: feet(100), width: inch(width), depth: inch(depth) }), 'gal')).toBeCloseTo(per100, 3)
   })
 
-  it.each([[1, 1 / 4, 77], [2, 1 / 4, 39], [2, 1 / 2, 19], [4, 1 / 2, 9]])('published fill chart, whole feet: %d deep × %d wide in, %d ft/gal', (depth, width, chart) => {
+  it.each([
+    [1, 1 / 4, 77],
+    [2, 1 / 4, 39],
+    [2, 1 / 2, 19],
+    [4, 1 / 2, 9],
+  ])('published fill chart, whole feet: %d deep × %d wide in, %d ft/gal', (depth, width, chart) => {
     const exact = feetPerGallon(jointVolume({ length: feet(1), width: inch(width), depth: inch(depth) }))
     expect(Math.abs(exact - chart)).toBeLessThan(1)
   })

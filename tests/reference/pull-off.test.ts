@@ -21,7 +21,13 @@ describe('pull-off stress, F ÷ A', () => {
     expect(force(20)).toBeCloseTo(97.4, 1)
   })
 
-  it.each([[100, 0.689], [200, 1.379], [250, 1.724], [300, 2.068], [400, 2.758]])('%d psi is %d MPa', (psi, megapascal) => {
+  it.each([
+    [100, 0.689],
+    [200, 1.379],
+    [250, 1.724],
+    [300, 2.068],
+    [400, 2.758],
+  ])('%d psi is %d MPa', (psi, megapascal) => {
     expect(valueIn(quantity(psi, 'psi'), 'MPa')).toBeCloseTo(megapascal, 3)
   })
 })

@@ -20,32 +20,74 @@ import { quantity, valueIn } from '../../shared/domain/units.ts'
  */
 let count = 0
 const fact = (property: Fact['property'], value: PropertyValue): Fact => ({
-  id: `t${++count}`, property, part: 'mixed', value, origin: { kind: 'entered', reason: 'take-off', by: 'test', at: '2026-01-01' },
+  id: `t${++count}`,
+  property,
+  part: 'mixed',
+  value,
+  origin: { kind: 'entered', reason: 'take-off', by: 'test', at: '2026-01-01' },
 })
 const exactly = (value: number, unit: 'gal' | '%' | 'g/cm³' | 'lb') => ({ min: value, max: value, unit })
-const pail = { id: 'p', name: 'Ostrel', maker: 'Ostrel', kind: 'resin' as const, chemistry: 'epoxy' as const, status: 'active' as const, facts: [], sheets: [] }
+const pail = {
+  id: 'p',
+  name: 'Ostrel',
+  maker: 'Ostrel',
+  kind: 'resin' as const,
+  chemistry: 'epoxy' as const,
+  status: 'active' as const,
+  facts: [],
+  sheets: [],
+}
 const mixOf = (id: string, facts: Fact[]): MixFacts => ({
-  id, name: id, maker: 'Ostrel', chemistry: 'epoxy', color: '#a8571a', status: 'active', parts: [{ part: 'A', product: pail }], facts, sheets: [],
+  id,
+  name: id,
+  maker: 'Ostrel',
+  chemistry: 'epoxy',
+  color: '#a8571a',
+  status: 'active',
+  parts: [{ part: 'A', product: pail }],
+  facts,
+  sheets: [],
 })
 const resin = mixOf('resin', [fact('volumeSolids', exactly(100, '%')), fact('packSize', exactly(3, 'gal'))])
 const topResin = mixOf('top resin', [fact('volumeSolids', exactly(70, '%'))])
-const sand = { ...pail, id: 'sand', name: 'Teasel quartz', maker: 'Teasel', kind: 'aggregate' as const, chemistry: 'silica' as const, facts: [fact('density', exactly(2.65, 'g/cm³')), fact('packSize', exactly(50, 'lb'))] }
+const sand = {
+  ...pail,
+  id: 'sand',
+  name: 'Teasel quartz',
+  maker: 'Teasel',
+  kind: 'aggregate' as const,
+  chemistry: 'silica' as const,
+  facts: [fact('density', exactly(2.65, 'g/cm³')), fact('packSize', exactly(50, 'lb'))],
+}
 
-const course = (stage: Course['stage'], id: string, given: Partial<Course>): Course => ({ ...newCourse(stage, id), mixId: 'resin', ...given })
+const course = (stage: Course['stage'], id: string, given: Partial<Course>): Course => ({
+  ...newCourse(stage, id),
+  mixId: 'resin',
+  ...given,
+})
 const mil = (value: number, film: 'wet' | 'dry' = 'wet') => ({ value, unit: 'mil' as const, film })
 const loading = { productId: 'sand', loading: quantity(13.8, 'lb/gal') }
 const input: EvaluationInput = {
   courses: [
     course('fill', 'fill', {}),
     course('prime', 'prime', { thickness: mil(10) }),
-    course('slurry', 'slurry', { thickness: mil(125), filler: loading, broadcast: { productId: 'sand', rate: quantity(0.5, 'lb/ft²'), toRefusal: true } }),
+    course('slurry', 'slurry', {
+      thickness: mil(125),
+      filler: loading,
+      broadcast: { productId: 'sand', rate: quantity(0.5, 'lb/ft²'), toRefusal: true },
+    }),
     course('seal', 'grout', { thickness: mil(12) }),
     course('top', 'top', { mixId: 'top resin', thickness: mil(3, 'dry') }),
   ],
   mixes: { resin, 'top resin': topResin },
   products: { sand },
   conditions: {
-    slabTemperature: quantity(68, '°F'), airTemperature: quantity(68, '°F'), relativeHumidity: 45, substrateRelativeHumidity: null, moistureEmission: null, vocPlace: null,
+    slabTemperature: quantity(68, '°F'),
+    airTemperature: quantity(68, '°F'),
+    relativeHumidity: 45,
+    substrateRelativeHumidity: null,
+    moistureEmission: null,
+    vocPlace: null,
   },
   onDate: '2026-12-01',
   sheetAgeLimitYears: 3,
@@ -66,7 +108,8 @@ const takeOff = (percent: number, convention?: Loss['convention']) => {
     return found
   }
 }
-const amount = (figure: Figure | undefined | null) => (figure && figure.kind !== 'not-stated' ? (figure.value.max ?? Number.NaN) : Number.NaN)
+const amount = (figure: Figure | undefined | null) =>
+  figure && figure.kind !== 'not-stated' ? (figure.value.max ?? Number.NaN) : Number.NaN
 const kits = ({ packing }: CourseQuantity) => packing.plan?.lines.map((line) => line.count)
 
 describe('a floor of 2,400 ft² taken off', () => {

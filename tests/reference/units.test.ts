@@ -8,16 +8,59 @@ import { type Unit, add, convert, dimensionOf, quantity, units, unitsOf, valueIn
  * `psi` by its definition, pound-force per square inch.
  */
 const inMath: Partial<Record<Unit, string>> = {
-  µm: 'um', mm: 'mm', m: 'm', mil: 'mil', in: 'inch', ft: 'ft', 'm²': 'm^2', 'ft²': 'ft^2', mL: 'mL', L: 'L', 'm³': 'm^3', gal: 'gallon', 'in³': 'inch^3',
-  g: 'g', kg: 'kg', lb: 'lbm', oz: 'oz', 'g/L': 'g/L', 'kg/L': 'kg/L', 'g/cm³': 'g/cm^3', 'lb/gal': 'lbm/gallon', 'lb/ft³': 'lbm/ft^3',
-  'm²/L': 'm^2/L', 'ft²/gal': 'ft^2/gallon', 'kg/m²': 'kg/m^2', 'g/m²': 'g/m^2', 'lb/ft²': 'lbm/ft^2', s: 's', min: 'minute', h: 'hour', d: 'day', week: 'week',
-  '°C': 'degC', '°F': 'degF', 'Δ°C': 'K', 'Δ°F': 'degR', MPa: 'MPa', psi: 'lbf/inch^2', N: 'N', kN: 'kN', lbf: 'lbf', 'mPa·s': 'mPa s',
-  'lb/1000 ft²·24 h': 'lbm/(ft^2 day)', 'g/m²·24 h': 'g/(m^2 day)',
+  µm: 'um',
+  mm: 'mm',
+  m: 'm',
+  mil: 'mil',
+  in: 'inch',
+  ft: 'ft',
+  'm²': 'm^2',
+  'ft²': 'ft^2',
+  mL: 'mL',
+  L: 'L',
+  'm³': 'm^3',
+  gal: 'gallon',
+  'in³': 'inch^3',
+  g: 'g',
+  kg: 'kg',
+  lb: 'lbm',
+  oz: 'oz',
+  'g/L': 'g/L',
+  'kg/L': 'kg/L',
+  'g/cm³': 'g/cm^3',
+  'lb/gal': 'lbm/gallon',
+  'lb/ft³': 'lbm/ft^3',
+  'm²/L': 'm^2/L',
+  'ft²/gal': 'ft^2/gallon',
+  'kg/m²': 'kg/m^2',
+  'g/m²': 'g/m^2',
+  'lb/ft²': 'lbm/ft^2',
+  s: 's',
+  min: 'minute',
+  h: 'hour',
+  d: 'day',
+  week: 'week',
+  '°C': 'degC',
+  '°F': 'degF',
+  'Δ°C': 'K',
+  'Δ°F': 'degR',
+  MPa: 'MPa',
+  psi: 'lbf/inch^2',
+  N: 'N',
+  kN: 'kN',
+  lbf: 'lbf',
+  'mPa·s': 'mPa s',
+  'lb/1000 ft²·24 h': 'lbm/(ft^2 day)',
+  'g/m²·24 h': 'g/(m^2 day)',
 }
 /** What mathjs' unit is worth of ours: it has no name for a thousand square feet. */
 const times: Partial<Record<Unit, number>> = { 'lb/1000 ft²·24 h': 1e-3 }
 
-const pairs = units.flatMap((from) => unitsOf(dimensionOf(from)).filter((to) => to !== from).map((to) => [from, to] as [Unit, Unit]))
+const pairs = units.flatMap((from) =>
+  unitsOf(dimensionOf(from))
+    .filter((to) => to !== from)
+    .map((to) => [from, to] as [Unit, Unit]),
+)
 
 describe('conversions, against mathjs', () => {
   it('covers every unit that has another of its dimension', () => {
@@ -38,17 +81,40 @@ describe('conversions, against mathjs', () => {
 
 describe('figures of the trade, from the exact definitions', () => {
   it.each([
-    [1, 'gal', 3.785411784, 'L'], [1, 'lb', 453.59237, 'g'], [1, 'ft²', 0.09290304, 'm²'], [1, 'mil', 25.4, 'µm'], [1, 'lb/gal', 119.826427, 'g/L'],
-    [1, 'g/cm³', 8.3454045, 'lb/gal'], [1, 'g/cm³', 62.42796, 'lb/ft³'], [1, 'MPa', 145.03774, 'psi'], [1, 'lb/1000 ft²·24 h', 4.8824276, 'g/m²·24 h'],
-    [1, 'lb/ft²', 4.8824276, 'kg/m²'], [5, 'Δ°F', 2.7777778, 'Δ°C'], [3, 'Δ°C', 5.4, 'Δ°F'], [50, '°F', 10, '°C'], [-40, '°F', -40, '°C'],
-    [0.016, 'in', 0.4064, 'mm'], [0.5, 'lb/ft²', 2.44121, 'kg/m²'], [9.2, 'lb/gal', 1.1024, 'kg/L'],
+    [1, 'gal', 3.785411784, 'L'],
+    [1, 'lb', 453.59237, 'g'],
+    [1, 'ft²', 0.09290304, 'm²'],
+    [1, 'mil', 25.4, 'µm'],
+    [1, 'lb/gal', 119.826427, 'g/L'],
+    [1, 'g/cm³', 8.3454045, 'lb/gal'],
+    [1, 'g/cm³', 62.42796, 'lb/ft³'],
+    [1, 'MPa', 145.03774, 'psi'],
+    [1, 'lb/1000 ft²·24 h', 4.8824276, 'g/m²·24 h'],
+    [1, 'lb/ft²', 4.8824276, 'kg/m²'],
+    [5, 'Δ°F', 2.7777778, 'Δ°C'],
+    [3, 'Δ°C', 5.4, 'Δ°F'],
+    [50, '°F', 10, '°C'],
+    [-40, '°F', -40, '°C'],
+    [0.016, 'in', 0.4064, 'mm'],
+    [0.5, 'lb/ft²', 2.44121, 'kg/m²'],
+    [9.2, 'lb/gal', 1.1024, 'kg/L'],
   ] as const)('%d %s is %d %s', (...[value, from, expected, to]) => {
     expect(Math.abs(valueIn(quantity<Unit>(value, from), to) / expected - 1)).toBeLessThan(1e-5)
   })
 
-  it.each([[50, 0.417], [100, 0.835], [150, 1.252], [250, 2.086], [275, 2.295], [340, 2.837], [350, 2.921], [400, 3.338], [450, 3.755], [600, 5.007], [700, 5.842]])(
-    'a VOC content of %d g/L is %d lb/gal', (grams, pounds) => expect(valueIn(quantity(grams, 'g/L'), 'lb/gal')).toBeCloseTo(pounds, 3),
-  )
+  it.each([
+    [50, 0.417],
+    [100, 0.835],
+    [150, 1.252],
+    [250, 2.086],
+    [275, 2.295],
+    [340, 2.837],
+    [350, 2.921],
+    [400, 3.338],
+    [450, 3.755],
+    [600, 5.007],
+    [700, 5.842],
+  ])('a VOC content of %d g/L is %d lb/gal', (grams, pounds) => expect(valueIn(quantity(grams, 'g/L'), 'lb/gal')).toBeCloseTo(pounds, 3))
 
   it('5 °F above the dew point is 2.78 °C above it, not −15 °C', () => {
     expect(valueIn(quantity(5, 'Δ°F'), 'Δ°C')).toBeCloseTo(2.7778, 4)

@@ -7,7 +7,10 @@ import type { Property } from '../property.ts'
 import { type Quantity, quantity, valueIn } from '../units.ts'
 import { type Check, type Laid, type Verdict, notMeasured, resinCourses, unknown } from './check.ts'
 
-const tests = { substrateRelativeHumidity: 'humidity in the slab (ASTM F2170)', moistureEmission: 'moisture emission rate (ASTM F1869)' } as const
+const tests = {
+  substrateRelativeHumidity: 'humidity in the slab (ASTM F2170)',
+  moistureEmission: 'moisture emission rate (ASTM F1869)',
+} as const
 
 /** The limit that holds at the film laid: one that asks for a thicker film does not hold. Undefined film: only unconditional limits hold. */
 function limitsAt(facts: readonly Fact[], { result }: Laid): { holding: Fact[]; conditional: Fact[] } {
@@ -34,11 +37,26 @@ function verdictOf(laid: Laid & { mix: MixFacts }, property: Property & keyof ty
   const missing = { of: mix.name, subject: { kind: 'mix' as const, id: mix.id }, ask: 'the maker, in writing' }
   if (!limit) {
     const condition = conditional[0]?.at?.film
-    const because = condition ? `a limit is stated only from a film of ${formatRange({ min: condition.value, max: condition.value, unit: condition.unit })}` : undefined
-    return unknown(course.id, `No sheet of ${mix.name} states a limit for the ${tests[property]}${because ? ` at this film: ${because}` : ''}.`, [notStated(property, { ...missing, ...(because ? { because } : {}) })])
+    const because = condition
+      ? `a limit is stated only from a film of ${formatRange({ min: condition.value, max: condition.value, unit: condition.unit })}`
+      : undefined
+    return unknown(
+      course.id,
+      `No sheet of ${mix.name} states a limit for the ${tests[property]}${because ? ` at this film: ${because}` : ''}.`,
+      [notStated(property, { ...missing, ...(because ? { because } : {}) })],
+    )
   }
   const figures = [{ label: `limit of ${mix.name}`, figure: figureOfFact(limit.fact) }]
-  if (!measured) return { ...unknown(course.id, `The ${tests[property]} has not been measured; the sheet allows ${formatRange({ max: limit.max.value, unit: limit.max.unit })}.`, [notMeasured(property, tests[property])]), todo: 'Measure it before this floor is priced or laid. A result speaks only for that place and day.', figures }
+  if (!measured)
+    return {
+      ...unknown(
+        course.id,
+        `The ${tests[property]} has not been measured; the sheet allows ${formatRange({ max: limit.max.value, unit: limit.max.unit })}.`,
+        [notMeasured(property, tests[property])],
+      ),
+      todo: 'Measure it before this floor is priced or laid. A result speaks only for that place and day.',
+      figures,
+    }
   const value = valueIn(measured, limit.max.unit)
   const met = value <= limit.max.value
   return {
@@ -61,7 +79,10 @@ export const moistureLimit: Check = {
     const laid = { ...first, mix: first.mix }
     const { substrateRelativeHumidity, moistureEmission } = floor.input.conditions
     const humidity = substrateRelativeHumidity === null ? null : quantity(substrateRelativeHumidity, '%')
-    const wanted: [Property & keyof typeof tests, Quantity | null][] = [['substrateRelativeHumidity', humidity], ['moistureEmission', moistureEmission]]
+    const wanted: [Property & keyof typeof tests, Quantity | null][] = [
+      ['substrateRelativeHumidity', humidity],
+      ['moistureEmission', moistureEmission],
+    ]
     const stated = wanted.filter(([property, measured]) => measured !== null || factsOf(laid.mix.facts, property).length > 0)
     const asked = stated.length > 0 ? stated : wanted.slice(0, 1)
     return asked.map(([property, measured]) => verdictOf(laid, property, measured))

@@ -31,15 +31,34 @@ function endOf(window: Figure, side: 'min' | 'max'): number | undefined {
 /** An end that no sheet states, as a missing figure. */
 function openEnd({ laid, beneath, window }: Gap, which: 'earliest' | 'latest'): Verdict {
   const name = beneath.mix?.name ?? beneath.course.title
-  if (window.kind === 'not-stated') return unknown(laid.course.id, `No recoat window of ${name} is stated at this temperature${window.missing.because ? `: ${window.missing.because}` : ''}.`, [window])
+  if (window.kind === 'not-stated')
+    return unknown(
+      laid.course.id,
+      `No recoat window of ${name} is stated at this temperature${window.missing.because ? `: ${window.missing.because}` : ''}.`,
+      [window],
+    )
   const subject = beneath.mix ? { kind: 'mix' as const, id: beneath.mix.id } : null
-  const missing = { property: 'recoatWindow' as const, part: 'mixed' as const, of: name, subject, ask: 'the maker, in writing', because: `the ${which} time is not stated` }
-  return { ...unknown(laid.course.id, `The sheet of ${name} states no ${which} time for the next coat.`, [missing]), figures: [{ label: 'window beneath', figure: window }] }
+  const missing = {
+    property: 'recoatWindow' as const,
+    part: 'mixed' as const,
+    of: name,
+    subject,
+    ask: 'the maker, in writing',
+    because: `the ${which} time is not stated`,
+  }
+  return {
+    ...unknown(laid.course.id, `The sheet of ${name} states no ${which} time for the next coat.`, [missing]),
+    figures: [{ label: 'window beneath', figure: window }],
+  }
 }
 
 function noStart({ laid, beneath, window }: Gap): Verdict {
   const says = `When this course starts after ${beneath.course.title} is not known.`
-  return { ...unknown(laid.course.id, says, [window]), todo: 'Plan a start for this course, or settle what is missing beneath it.', figures: [{ label: 'window beneath', figure: window }] }
+  return {
+    ...unknown(laid.course.id, says, [window]),
+    todo: 'Plan a start for this course, or settle what is missing beneath it.',
+    figures: [{ label: 'window beneath', figure: window }],
+  }
 }
 
 export const windowOpens: Check = {

@@ -1,6 +1,6 @@
 import type { CourseResult, Proportion } from '../../../shared/domain/evaluation.ts'
 import type { Figure } from '../../../shared/domain/figure.ts'
-import { type ShownSystem, formatNumber, formatRange, shownUnit } from '../../../shared/domain/format.ts'
+import { type ShownSystem, formatNumber, formatRange, formatWindowFigure, shownUnit } from '../../../shared/domain/format.ts'
 import { convert } from '../../../shared/domain/units.ts'
 import { FigureView } from '../../ui/figure-view.tsx'
 import { useUnitSystem } from '../../ui/unit-system.tsx'
@@ -34,7 +34,7 @@ function rowsOf(result: CourseResult, system: ShownSystem): Row[] {
     ...(aggregatePerArea ? [{ label: 'Sand', figure: aggregatePerArea }] : []),
     { label: 'Pot life', figure: potLife },
     { label: 'Working time on the floor', figure: workingTime },
-    { label: 'Window for the next course', figure: window },
+    { label: 'Window for the next course', figure: window, text: formatWindowFigure(window) },
     { label: 'Foot traffic', figure: footTraffic },
     { label: 'Vehicle traffic', figure: vehicleTraffic },
     { label: 'Full cure', figure: fullCure },

@@ -3,6 +3,7 @@ import { dryStages } from '../../../shared/domain/build-up.ts'
 import { stageNames } from '../../../shared/domain/course.ts'
 import type { CourseResult } from '../../../shared/domain/evaluation.ts'
 import type { Finding, FindingStatus } from '../../../shared/domain/finding.ts'
+import { formatWindowFigure } from '../../../shared/domain/format.ts'
 import type { MixFacts } from '../../../shared/domain/mix.ts'
 import { FigureView } from '../../ui/figure-view.tsx'
 import { StatusMark } from '../../ui/status-mark.tsx'
@@ -80,7 +81,7 @@ function RowFigures({ course, result, onChange }: CourseRowProps) {
       <div className="lg:text-right">{onChange ? <CourseInputs course={course} result={result} onChange={onChange} /> : <FixedFilm result={result} />}</div>
       <div className="flex flex-col items-end gap-1 sm:contents">
         <Labelled label="pot life">{result && <FigureView figure={result.potLife} />}</Labelled>
-        <Labelled label="window for the next">{result && <FigureView figure={result.window} />}</Labelled>
+        <Labelled label="window for the next">{result && <FigureView figure={result.window} text={formatWindowFigure(result.window)} />}</Labelled>
       </div>
     </div>
   )
