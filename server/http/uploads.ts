@@ -22,8 +22,9 @@ export function takeFiles({ folder, field, bytes, files }: Accepts): RequestHand
   return (request, response, next) => {
     if (!request.is('multipart/form-data')) throw new AppError('wrong-type')
     response.once('close', () => {
-      const taken = (request.files ?? []) as Express.Multer.File[]
-      for (const file of taken) void rm(file.path, { force: true })
+      // A file that was broken off has no path: multer has removed it.
+      const taken = (request.files ?? []) as { path?: string }[]
+      for (const { path } of taken) if (path) void rm(path, { force: true })
     })
     upload(request, response, (error: unknown) => next(error === undefined || error === null ? undefined : asAppError(error, { bytes, files })))
   }

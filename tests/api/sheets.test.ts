@@ -1,9 +1,13 @@
 import { randomBytes } from 'node:crypto'
 import { mkdtempSync, readFileSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
+import { type AddressInfo, connect } from 'node:net'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { type TestApp, testApp } from '../setup/app.ts'
+import { buildUpVersions, buildUps, courses } from '../../server/db/schema/build-ups.ts'
+import { mixParts, mixes, products, sheetSubjects } from '../../server/db/schema/catalogue.ts'
+import { jobPeople, jobs } from '../../server/db/schema/jobs.ts'
+import { type TestApp, testApp, testPassword } from '../setup/app.ts'
 import { makePdf } from '../setup/pdf.ts'
 
 const sample = (name: string) => join(import.meta.dirname, '../../fixtures/sample-sheets', name)
@@ -12,6 +16,32 @@ const locked = (name: string) => join(import.meta.dirname, '../../fixtures/locke
 const scratch = mkdtempSync(join(tmpdir(), 'wearcourse-pdf-'))
 afterAll(() => rmSync(scratch, { recursive: true, force: true }))
 const onePage = (line: string) => makePdf([{ lines: [line] }])
+
+/** A job of the crew's, laid with a mix of one product, which the sheet speaks of; the same in the sand of another course. */
+async function putOnFloor({ db, ids }: TestApp, { sheetId }: { sheetId: string }): Promise<void> {
+  await db.transaction(async (tx) => {
+    const [product] = await tx.insert(products).values({ name: 'Ostrel Prime A', maker: 'Ostrel', kind: 'resin', chemistry: 'epoxy' }).returning()
+    const [mix] = await tx.insert(mixes).values({ name: 'Ostrel Prime', maker: 'Ostrel', chemistry: 'epoxy', color: '#c08040' }).returning()
+    await tx.insert(mixParts).values({ mixId: mix!.id, part: 'A', productId: product!.id })
+    await tx.insert(sheetSubjects).values({ sheetId, productId: product!.id })
+    const [buildUp] = await tx.insert(buildUps).values({ name: 'Floor of one coat' }).returning()
+    const conditions = {
+      slabTemperature: { value: 70, unit: '°F' as const }, airTemperature: { value: 70, unit: '°F' as const }, relativeHumidity: 50,
+      substrateRelativeHumidity: null, moistureEmission: null, vocPlace: null,
+    }
+    const [version] = await tx.insert(buildUpVersions).values({ buildUpId: buildUp!.id, number: 1, status: 'released', conditions }).returning()
+    const course = {
+      id: 'c1', stage: 'prime' as const, title: 'Primer', mixId: mix!.id, thickness: null, spreadRate: null, filler: null, broadcast: null,
+      preparation: null, startsAfter: null, note: '',
+    }
+    await tx.insert(courses).values({ versionId: version!.id, courseId: 'c1', position: 0, stage: 'prime', mixId: mix!.id, course })
+    const [job] = await tx
+      .insert(jobs)
+      .values({ name: 'Filling hall', buildUpVersionId: version!.id, conditions: conditions as never, loss: {} as never, timeZone: 'UTC' })
+      .returning()
+    await tx.insert(jobPeople).values({ jobId: job!.id, personId: ids.crew })
+  })
+}
 
 describe('sheets', () => {
   let t: TestApp
@@ -90,6 +120,21 @@ describe('sheets', () => {
       const { body } = await upload(path).expect(413)
       expect(body.error).toEqual({ code: 'too-large', message: 'This file is larger than 25 MB.' })
       expect(left()).toEqual([])
+    })
+
+    it('an upload that its sender breaks off', async () => {
+      const server = t.app.listen(0)
+      const { port } = server.address() as AddressInfo
+      const signIn = { method: 'POST', headers: { 'Content-Type': 'application/json' }, body: JSON.stringify({ email: 'lead@brackenholt.example', password: testPassword }) }
+      const [cookie = ''] = (await fetch(`http://127.0.0.1:${port}/api/session`, signIn)).headers.getSetCookie().map((line) => line.split(';')[0])
+      const socket = connect(port, '127.0.0.1')
+      const head = ['POST /api/sheets HTTP/1.1', `Host: 127.0.0.1:${port}`, `Cookie: ${cookie}`, 'Content-Type: multipart/form-data; boundary=b', 'Content-Length: 9000000', '', '']
+      socket.write(`${head.join('\r\n')}--b\r\nContent-Disposition: form-data; name="files"; filename="x.pdf"\r\n\r\n%PDF-1.7\n`)
+      socket.write(Buffer.alloc(500_000, 0x20))
+      await expect.poll(() => left().length).toBe(1)
+      socket.destroy()
+      await expect.poll(left).toEqual([])
+      server.close()
     })
 
     it('what is no upload: JSON, no file, a strange field, a body cut short', async () => {
@@ -218,6 +263,9 @@ describe('sheets', () => {
       await t.as.nobody.get(path).expect(401)
       await t.as.estimator.get(path).expect(200)
     }
+    await putOnFloor(t, { sheetId: sheet.id })
+    await t.as.crew.get(`/api/sheets/${sheet.id}`).expect(200)
+    await t.as.crew.get(`/api/sheet-revisions/${revisionId}/file`).expect(200)
     await t.as.crew.post('/api/sheets').attach('files', onePage('x'), 'x.pdf').expect(403)
     await t.as.estimator.post('/api/sheets').attach('files', onePage('x'), 'x.pdf').expect(403)
   })

@@ -6,9 +6,10 @@ declare module 's3rver' {
     directory: string
     configureBuckets: { name: string }[]
   }
-  export default class S3rver {
+  class S3rver {
     constructor(options: Options)
     run(): Promise<{ port: number }>
     close(): Promise<void>
   }
+  export = S3rver
 }

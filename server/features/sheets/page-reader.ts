@@ -16,7 +16,7 @@ export type ReadProblem = 'encrypted' | 'damaged' | 'too-large'
 /** What came of reading a PDF: its pages, or why there are none. */
 export type ReadResult = { pages: ReadPage[] } | { problem: ReadProblem; detail: string }
 
-export const pageLimit = 1000
+const pageLimit = 1000
 const root = dirname(createRequire(import.meta.url).resolve('pdfjs-dist/package.json'))
 
 /** Reads pages and words of a PDF. Nothing in the file is run; pictures are not decoded. */

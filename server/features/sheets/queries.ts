@@ -68,7 +68,7 @@ export async function addRevision(tx: Transaction, { pages, ...revision }: NewRe
 }
 
 /** Puts a sheet's products and mixes in place of those it had. @throws AppError naming the field of one that does not exist. */
-export async function setSubjects(tx: Transaction, sheetId: string, subjects: readonly SubjectRef[]): Promise<void> {
+async function setSubjects(tx: Transaction, sheetId: string, subjects: readonly SubjectRef[]): Promise<void> {
   const productIds = [...new Set(subjects.flatMap((subject) => ('productId' in subject ? [subject.productId] : [])))]
   const mixIds = [...new Set(subjects.flatMap((subject) => ('mixId' in subject ? [subject.mixId] : [])))]
   await tx.delete(sheetSubjects).where(eq(sheetSubjects.sheetId, sheetId))

@@ -1,7 +1,7 @@
 import { type Sheet, type UploadedFile, sheetEndpoints, uploadLimits } from '../../../shared/api/sheets.ts'
 import { OfflineError, errorOf, sentenceOf } from '../../lib/api.ts'
 
-export type UploadState =
+type UploadState =
   | { step: 'waiting' }
   /** `sent`: 0 to 1. */
   | { step: 'sending'; sent: number }
