@@ -40,7 +40,7 @@ export function priceOf({ items }: Pack): number | null {
 }
 
 /** Combinations looked at before a size is only tried in small numbers. */
-const mostTried = 200_000
+const mostTried = 5000
 
 /**
  * Whole packs that hold at least what is needed: at least cost when every pack has a price, else with the least leftover; among equals the fewest
