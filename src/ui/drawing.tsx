@@ -1,4 +1,5 @@
-import type { Shape } from '../../shared/drawing/shapes.ts'
+import { memo, useMemo } from 'react'
+import { type Shape, ink } from '../../shared/drawing/shapes.ts'
 
 /** One shape of a figure as SVG of the page. */
 function Drawn({ shape }: { shape: Shape }) {
@@ -14,15 +15,36 @@ function Drawn({ shape }: { shape: Shape }) {
   )
 }
 
-/** All shapes of a figure; those of the lit course stand out by weight, the leader in the accent. */
+/** The shapes of one course; drawn anew only when it or its light changes. */
+const Group = memo(function Group({ shapes, lit }: { shapes: readonly Shape[]; lit: boolean }) {
+  return shapes.map((shape, index) => <Drawn key={index} shape={lit ? litShape(shape) : shape} />)
+})
+
+/** Leaders and words of the lit course stand out in the accent. */
+function litShape(shape: Shape): Shape {
+  if (shape.kind === 'text') return { ...shape, weight: 600, fill: ink.resin }
+  return shape.role === 'leader' ? { ...shape, stroke: ink.resin, strokeWidth: 1.6 } : shape
+}
+
+/** Shapes in drawing order, as runs of one course. */
+function runsOf(shapes: readonly Shape[]): Shape[][] {
+  const runs: Shape[][] = []
+  for (const shape of shapes) {
+    const last = runs.at(-1)
+    if (last && last[0]?.course === shape.course) last.push(shape)
+    else runs.push([shape])
+  }
+  return runs
+}
+
+/** All shapes of a figure; the course pointed at is lit. */
 export function Drawing({ shapes, lit }: { shapes: readonly Shape[]; lit?: string | null | undefined }) {
+  const runs = useMemo(() => runsOf(shapes), [shapes])
   return (
     <g aria-hidden="true">
-      {shapes.map((shape, index) => {
-        const shines = lit !== null && lit !== undefined && shape.course === lit
-        const leader = shines && shape.kind === 'path' && shape.fill === undefined && shape.strokeWidth === 0.7
-        return <Drawn key={index} shape={leader ? { ...shape, stroke: '#a8571a', strokeWidth: 1.6 } : shines && shape.kind === 'text' ? { ...shape, weight: 600, fill: '#a8571a' } : shape} />
-      })}
+      {runs.map((run, index) => (
+        <Group key={index} shapes={run} lit={lit !== null && lit !== undefined && run[0]?.course === lit} />
+      ))}
     </g>
   )
 }

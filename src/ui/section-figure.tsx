@@ -1,11 +1,10 @@
 import { memo, useId } from 'react'
-import { type SectionOptions, sectionOf } from '../../shared/drawing/section.ts'
+import { type SectionModel, type SectionOptions, sectionOf } from '../../shared/drawing/section.ts'
 import type { SectionLayer } from '../../shared/drawing/section-layer.ts'
 import { Drawing } from './drawing.tsx'
 
-interface SectionFigureProps extends SectionOptions {
-  /** Bottom up. */
-  layers: readonly SectionLayer[]
+interface SectionDrawingProps {
+  model: SectionModel
   /** The course that is pointed at, here or in its row. */
   lit?: string | null
   onLight?: (courseId: string | null) => void
@@ -15,8 +14,7 @@ interface SectionFigureProps extends SectionOptions {
 }
 
 /** The floor cut through. Each course can be pointed at and reached by keyboard; in words it reads from the top down. */
-export function SectionFigure({ layers, lit = null, onLight, onPick, className, ...options }: SectionFigureProps) {
-  const model = sectionOf(layers, options)
+export function SectionDrawing({ model, lit = null, onLight, onPick, className }: SectionDrawingProps) {
   const about = useId()
   const interactive = onLight !== undefined
   return (
@@ -44,7 +42,18 @@ export function SectionFigure({ layers, lit = null, onLight, onPick, className, 
   )
 }
 
-/** The section small, for lists. */
-export const SmallSection = memo(function SmallSection({ layers }: { layers: readonly SectionLayer[] }) {
-  return <SectionFigure layers={layers} width={132} height={56} unit="mil" compact className="block" />
+interface SectionFigureProps extends SectionOptions {
+  /** Bottom up. */
+  layers: readonly SectionLayer[]
+  className?: string
+}
+
+/** The section of some courses, to look at. */
+export const SectionFigure = memo(function SectionFigure({ layers, className, ...options }: SectionFigureProps) {
+  return <SectionDrawing model={sectionOf(layers, options)} {...(className ? { className } : {})} />
 })
+
+/** The section small, for lists. */
+export function SmallSection({ layers }: { layers: readonly SectionLayer[] }) {
+  return <SectionFigure layers={layers} width={132} height={56} unit="mil" compact className="block" />
+}

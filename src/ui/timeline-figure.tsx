@@ -1,4 +1,4 @@
-import { useId } from 'react'
+import { useId, useMemo } from 'react'
 import { type TimelineOptions, type TimelineRow, timelineOf } from '../../shared/drawing/timeline.ts'
 import { Drawing } from './drawing.tsx'
 
@@ -9,8 +9,8 @@ interface TimelineFigureProps extends TimelineOptions {
 }
 
 /** Hours across, courses down; the course pointed at elsewhere is lit here too. */
-export function TimelineFigure({ rows, lit = null, onLight, ...options }: TimelineFigureProps) {
-  const model = timelineOf(rows, options)
+export function TimelineFigure({ rows, lit = null, onLight, width, narrow, clock }: TimelineFigureProps) {
+  const model = useMemo(() => timelineOf(rows, { width, ...(narrow === undefined ? {} : { narrow }), ...(clock ? { clock } : {}) }), [rows, width, narrow, clock])
   const about = useId()
   return (
     <svg width={model.width} height={model.height} viewBox={`0 0 ${model.width} ${model.height}`} role="img" aria-labelledby={about}>

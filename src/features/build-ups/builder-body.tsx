@@ -1,4 +1,4 @@
-import { useDeferredValue, useMemo, useRef, useState } from 'react'
+import { useCallback, useDeferredValue, useMemo, useRef, useState } from 'react'
 import type { VersionSummary } from '../../../shared/api/build-ups.ts'
 import { sectionLayers } from '../../../shared/drawing/section-layer.ts'
 import { Card } from '../../ui/page.tsx'
@@ -22,29 +22,31 @@ export function BuilderBody({ view, version, reasons }: BuilderBodyProps) {
   const [lit, setLit] = useState<string | null>(null)
   const [open, setOpen] = useState<string | null>(null)
   const list = useRef<HTMLOListElement>(null)
-  const drawn = useDeferredValue(evaluation)
-  const layers = useMemo(() => sectionLayers({ ...input, courses: work.courses }, drawn), [input, work.courses, drawn])
-  const titles = useMemo(() => Object.fromEntries(work.courses.map(({ id, title }) => [id, title])), [work.courses])
-  const pick = (id: string) => {
+  // what is typed shows at once; the figures and the checks follow as soon as there is time
+  const reckoned = useMemo(() => ({ work, input, evaluation }), [work, input, evaluation])
+  const later = useDeferredValue(reckoned)
+  const layers = useMemo(() => sectionLayers({ ...later.input, courses: later.work.courses }, later.evaluation), [later])
+  const titles = useMemo(() => Object.fromEntries(later.work.courses.map(({ id, title }) => [id, title])), [later])
+  const pick = useCallback((id: string) => {
     setOpen(id)
     document.querySelector<HTMLElement>(`#course-${CSS.escape(id)} button`)?.focus()
-  }
+  }, [])
   return (
     <>
       <div className="mt-4 grid border border-rule bg-card md:grid-cols-[270px_minmax(0,1fr)] xl:grid-cols-[340px_minmax(0,1fr)_310px]">
         <SectionColumn layers={layers} rows={list} lit={lit} onLight={setLit} onPick={pick} />
         <CourseList view={view} list={list} lit={lit} onLight={setLit} open={open} onOpen={setOpen} />
         <div className="border-t border-rule px-4 py-3 md:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
-          <FindingsPanel findings={evaluation.findings} titles={titles} lit={lit} onLight={setLit} reasons={reasons} />
-          <TotalsBlock totals={evaluation.totals} version={version} />
+          <FindingsPanel findings={later.evaluation.findings} titles={titles} lit={lit} onLight={setLit} reasons={reasons} />
+          <TotalsBlock totals={later.evaluation.totals} version={version} />
         </div>
       </div>
       {work.courses.length > 0 && (
         <>
-          <TimelineCard work={work} input={input} evaluation={drawn} lit={lit} onLight={setLit} />
+          <TimelineCard {...later} lit={lit} onLight={setLit} />
           <Card title="Hazards of the whole floor" className="mt-4">
             <div className="p-4">
-              <Hazards hazards={evaluation.hazards} title="Taken together" />
+              <Hazards hazards={later.evaluation.hazards} title="Taken together" />
             </div>
           </Card>
         </>

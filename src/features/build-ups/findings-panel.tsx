@@ -1,8 +1,10 @@
+import { memo } from 'react'
 import { Link } from 'react-router'
 import { type Finding, type FindingStatus, findingStatuses } from '../../../shared/domain/finding.ts'
 import type { Missing } from '../../../shared/domain/figure.ts'
 import { paths } from '../../lib/paths.ts'
 import { FigureView } from '../../ui/figure-view.tsx'
+import { Fold } from '../../ui/fold.tsx'
 import { StatusMark } from '../../ui/status-mark.tsx'
 
 interface FindingsPanelProps {
@@ -16,7 +18,7 @@ interface FindingsPanelProps {
 }
 
 /** What the checks say, the worst first; one check that says the same of several courses is one line; what is met is folded to its count. */
-export function FindingsPanel({ findings, ...rest }: FindingsPanelProps) {
+export const FindingsPanel = memo(function FindingsPanel({ findings, ...rest }: FindingsPanelProps) {
   const by = (status: FindingStatus) => findings.filter((finding) => finding.status === status)
   const met = by('met')
   const open = findingStatuses.filter((status) => status !== 'met').flatMap((status) => groupsOf(by(status)))
@@ -30,21 +32,25 @@ export function FindingsPanel({ findings, ...rest }: FindingsPanelProps) {
         ))}
       </ul>
       {met.length > 0 && (
-        <details className="mt-2">
-          <summary className="cursor-pointer">
-            <StatusMark status="met" /> {met.length}
-          </summary>
+        <Fold
+          className="mt-2"
+          summary={
+            <>
+              <StatusMark status="met" /> {met.length} <span className="text-pencil">▾</span>
+            </>
+          }
+        >
           <ul className="mt-2">
             {groupsOf(met).map((group) => (
               <FindingGroup key={group[0]?.checkId} group={group} {...rest} />
             ))}
           </ul>
-        </details>
+        </Fold>
       )}
       <p className="mt-3 text-small text-pencil">Met means met against the sheets loaded here. The sheet, the label, the law and the competent person decide.</p>
     </section>
   )
-}
+})
 
 /** Findings of one status by their check, in order. */
 function groupsOf(findings: readonly Finding[]): Finding[][] {
@@ -62,20 +68,24 @@ function FindingGroup({ group, ...rest }: GroupProps) {
   if (group.length === 1) return <FindingItem finding={first} {...rest} />
   return (
     <li className="-mx-2 mb-1 px-2 py-1">
-      <details>
-        <summary className="grid cursor-pointer grid-cols-[20px_1fr] [&::-webkit-details-marker]:hidden">
-          <StatusMark status={first.status} wordless />
-          <span>
-            <strong className="font-semibold">{first.title}</strong>
-            <span className="block text-pencil">{group.length} courses ▾</span>
-          </span>
-        </summary>
+      <Fold
+        summaryClass="grid grid-cols-[20px_1fr]"
+        summary={
+          <>
+            <StatusMark status={first.status} wordless />
+            <span>
+              <strong className="font-semibold">{first.title}</strong>
+              <span className="block text-pencil">{group.length} courses ▾</span>
+            </span>
+          </>
+        }
+      >
         <ul className="mt-1 ml-5">
           {group.map((finding, index) => (
             <FindingItem key={`${finding.courseId} ${index}`} finding={finding} {...rest} />
           ))}
         </ul>
-      </details>
+      </Fold>
     </li>
   )
 }
@@ -85,21 +95,25 @@ function FindingItem({ finding, titles, lit, onLight, reasons }: { finding: Find
   const reason = reasons[`${finding.checkId}:${courseId ?? 'floor'}`]
   return (
     <li
-      className={`-mx-2 mb-1 px-2 py-1 ${courseId !== null && courseId === lit ? 'bg-resin-wash' : ''}`} onPointerEnter={() => onLight(courseId)} onPointerLeave={() => onLight(null)}
+      className={`-mx-2 mb-1 px-2 py-1 ${courseId !== null && courseId === lit ? 'bg-resin-wash' : ''}`} onPointerEnter={() => onLight(courseId)} onPointerLeave={() => onLight(null)} onFocus={() => onLight(courseId)} onBlur={() => onLight(null)}
     >
-      <details onFocus={() => onLight(courseId)} onBlur={() => onLight(null)}>
-        <summary className="grid cursor-pointer grid-cols-[20px_1fr] [&::-webkit-details-marker]:hidden">
-          <StatusMark status={finding.status} wordless />
-          <span>
-            <strong className="font-semibold">{courseId === null ? finding.title : `${titles[courseId] ?? ''}: ${lowered(finding.title)}`}</strong>
-            <span className="block">{finding.says}</span>
-          </span>
-        </summary>
+      <Fold
+        summaryClass="grid grid-cols-[20px_1fr]"
+        summary={
+          <>
+            <StatusMark status={finding.status} wordless />
+            <span>
+              <strong className="font-semibold">{courseId === null ? finding.title : `${titles[courseId] ?? ''}: ${lowered(finding.title)}`}</strong>
+              <span className="block">{finding.says}</span>
+            </span>
+          </>
+        }
+      >
         <div className="mt-1 ml-5 border-l border-rule pl-3 text-small">
           {finding.todo && <p className="mb-1">{finding.todo}</p>}
           <FindingWorking finding={finding} />
         </div>
-      </details>
+      </Fold>
       {reason && <p className="ml-5 text-small text-pencil">Accepted at release: {reason}</p>}
     </li>
   )

@@ -1,9 +1,8 @@
-import { type RefObject, useLayoutEffect, useState } from 'react'
+import { type RefObject, memo, useLayoutEffect, useMemo, useState } from 'react'
 import type { SectionLayer } from '../../../shared/drawing/section-layer.ts'
 import type { DrawingUnit } from '../../../shared/drawing/section-words.ts'
-import { sectionNotes } from '../../../shared/drawing/section-words.ts'
 import { sectionOf } from '../../../shared/drawing/section.ts'
-import { SectionFigure } from '../../ui/section-figure.tsx'
+import { SectionDrawing } from '../../ui/section-figure.tsx'
 import { useUnitSystem } from '../../ui/unit-system.tsx'
 
 interface SectionColumnProps {
@@ -55,19 +54,20 @@ export function drawingUnit(system: 'stated' | 'us' | 'si', layers: readonly Sec
 }
 
 /** The section beside the rows, with its leaders and its notes. */
-export function SectionColumn({ layers, rows, ...pointing }: SectionColumnProps) {
+export const SectionColumn = memo(function SectionColumn({ layers, rows, ...pointing }: SectionColumnProps) {
   const [column, setColumn] = useState<HTMLElement | null>(null)
   const { system } = useUnitSystem()
   const measures = useMeasures(column, rows, layers)
   const unit = drawingUnit(system, layers)
   const beside = measures !== null && Object.keys(measures.anchors).length > 0
-  const options = measures && { width: measures.width, height: measures.height, unit, ...(beside ? { anchors: measures.anchors } : {}) }
+  const model = useMemo(
+    () => measures && sectionOf(layers, { width: measures.width, height: measures.height, unit, ...(beside ? { anchors: measures.anchors } : {}) }),
+    [layers, measures, unit, beside],
+  )
   return (
     <figure ref={setColumn} className="min-w-0 border-b border-rule md:border-r md:border-b-0">
-      {options && <SectionFigure layers={layers} {...options} {...pointing} className="block" />}
-      {options && (
-        <figcaption className="border-t border-rule px-3 py-2 text-small text-pencil">{sectionNotes(layers, sectionOf(layers, options).scale, unit).join(' ')}</figcaption>
-      )}
+      {model && <SectionDrawing model={model} {...pointing} className="block" />}
+      {model && <figcaption className="border-t border-rule px-3 py-2 text-small text-pencil">{model.notes.join(' ')}</figcaption>}
     </figure>
   )
-}
+})

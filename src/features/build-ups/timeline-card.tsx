@@ -1,4 +1,4 @@
-import { useLayoutEffect, useState } from 'react'
+import { memo, useLayoutEffect, useMemo, useState } from 'react'
 import type { EvaluationInput } from '../../../shared/domain/build-up.ts'
 import type { Evaluation } from '../../../shared/domain/evaluation.ts'
 import type { TimelineRow } from '../../../shared/drawing/timeline.ts'
@@ -15,7 +15,7 @@ interface TimelineCardProps {
 }
 
 /** Hours across, courses down, as wide as the page. */
-export function TimelineCard({ work, input, evaluation, lit, onLight }: TimelineCardProps) {
+export const TimelineCard = memo(function TimelineCard({ work, input, evaluation, lit, onLight }: TimelineCardProps) {
   const [box, setBox] = useState<HTMLElement | null>(null)
   const [width, setWidth] = useState(0)
   useLayoutEffect(() => {
@@ -26,10 +26,14 @@ export function TimelineCard({ work, input, evaluation, lit, onLight }: Timeline
     measure()
     return () => observer.disconnect()
   }, [box])
-  const rows = work.courses.flatMap(({ id, title, mixId }, index): TimelineRow[] => {
-    const entry = evaluation.timeline.find((one) => one.courseId === id)
-    return entry ? [{ id, number: index + 1, title, color: mixId ? (input.mixes[mixId]?.color ?? null) : null, entry }] : []
-  })
+  const rows = useMemo(
+    () =>
+      work.courses.flatMap(({ id, title, mixId }, index): TimelineRow[] => {
+        const entry = evaluation.timeline.find((one) => one.courseId === id)
+        return entry ? [{ id, number: index + 1, title, color: mixId ? (input.mixes[mixId]?.color ?? null) : null, entry }] : []
+      }),
+    [work, input, evaluation],
+  )
   return (
     <Card title="Timeline" className="mt-4">
       <div className="px-3 py-2">
@@ -42,4 +46,4 @@ export function TimelineCard({ work, input, evaluation, lit, onLight }: Timeline
       </div>
     </Card>
   )
-}
+})
