@@ -9,6 +9,18 @@ function page<M>(path: string, load: () => Promise<M>, pick: (module: M) => Reac
 
 const signedIn: RouteObject[] = [
   page('/', () => import('./home.tsx'), (module) => module.Home),
+  page('/products', () => import('../features/catalogue/products-page.tsx'), (module) => module.ProductsPage),
+  page('/products/new', () => import('../features/catalogue/product-form-page.tsx'), (module) => module.NewProductPage),
+  page('/products/:productId', () => import('../features/catalogue/record-page.tsx'), (module) => module.ProductPage),
+  page('/products/:productId/edit', () => import('../features/catalogue/product-form-page.tsx'), (module) => module.EditProductPage),
+  page('/products/:productId/values/new', () => import('../features/catalogue/value-page.tsx'), (module) => module.ProductValuePage),
+  page('/products/:productId/values/:factId', () => import('../features/catalogue/value-page.tsx'), (module) => module.ProductValuePage),
+  page('/mixes', () => import('../features/catalogue/mixes-page.tsx'), (module) => module.MixesPage),
+  page('/mixes/new', () => import('../features/catalogue/mix-form-page.tsx'), (module) => module.NewMixPage),
+  page('/mixes/:mixId', () => import('../features/catalogue/record-page.tsx'), (module) => module.MixPage),
+  page('/mixes/:mixId/edit', () => import('../features/catalogue/mix-form-page.tsx'), (module) => module.EditMixPage),
+  page('/mixes/:mixId/values/new', () => import('../features/catalogue/value-page.tsx'), (module) => module.MixValuePage),
+  page('/mixes/:mixId/values/:factId', () => import('../features/catalogue/value-page.tsx'), (module) => module.MixValuePage),
   page('/jobs', () => import('../features/jobs/jobs-page.tsx'), (module) => module.JobsPage),
   page('/jobs/new', () => import('../features/jobs/job-page.tsx'), (module) => module.NewJobPage),
   page('/jobs/:jobId', () => import('../features/jobs/job-page.tsx'), (module) => module.JobPage),

@@ -1,7 +1,7 @@
 import { sentenceOf } from '../../lib/api.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { Card, Page } from '../../ui/page.tsx'
-import { ChangeList } from './change-list.tsx'
+import { ChangeList } from '../../ui/change-list.tsx'
 import { useChanges } from './queries.ts'
 
 /** The audit trail of everything, newest first. */
