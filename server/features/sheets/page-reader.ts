@@ -1,6 +1,6 @@
 import { createRequire } from 'node:module'
 import { dirname } from 'node:path'
-import { type PDFDocumentProxy, type PDFPageProxy, getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs'
+import { OPS, type PDFDocumentProxy, type PDFPageProxy, getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs'
 import type { PlacedText } from '../../db/schema/sheets.ts'
 import { type GlyphRunFont, placeWords } from './place-words.ts'
 
@@ -15,6 +15,8 @@ export interface ReadPage {
 export type ReadProblem = 'encrypted' | 'damaged' | 'too-large'
 /** What came of reading a PDF: its pages, or why there are none. */
 export type ReadResult = { pages: ReadPage[] } | { problem: ReadProblem; detail: string }
+
+type PDFOperatorList = Awaited<ReturnType<PDFPageProxy['getOperatorList']>>
 
 const pageLimit = 1000
 const root = dirname(createRequire(import.meta.url).resolve('pdfjs-dist/package.json'))
@@ -43,7 +45,8 @@ async function readPage(document: PDFDocumentProxy, number: number): Promise<Rea
   const page = await document.getPage(number)
   const viewport = page.getViewport({ scale: 1 })
   const operators = await page.getOperatorList({ annotationMode: 0 })
-  const lines = placeWords({ operators, fontOf: fontsOf(page), toShown: viewport.transform, size: viewport })
+  const fonts = await fontsOf(page, operators)
+  const lines = placeWords({ operators, fontOf: (name) => fonts.get(name), toShown: viewport.transform, size: viewport })
   page.cleanup()
   return {
     width: round(viewport.width),
@@ -56,7 +59,11 @@ async function readPage(document: PDFDocumentProxy, number: number): Promise<Rea
 
 const round = (points: number) => Math.round(points * 100) / 100
 
-/** Metrics of a page's fonts by the name that its operators use. */
-function fontsOf(page: PDFPageProxy): (name: string) => GlyphRunFont | undefined {
-  return (name) => (page.commonObjs.has(name) ? (page.commonObjs.get(name) as GlyphRunFont) : undefined)
+/** Metrics of a page's fonts by the name that its operators use. They arrive by themselves, some after the operators. */
+async function fontsOf(page: PDFPageProxy, { fnArray, argsArray }: PDFOperatorList): Promise<Map<string, GlyphRunFont>> {
+  const used = fnArray.flatMap((operator, index) => (operator === OPS.setFont ? [(argsArray[index] as [string])[0]] : []))
+  const arrived = [...new Set(used)].map(
+    (name) => new Promise<[string, GlyphRunFont]>((resolve) => void page.commonObjs.get(name, (font: GlyphRunFont) => resolve([name, font]))),
+  )
+  return new Map(await Promise.all(arrived))
 }

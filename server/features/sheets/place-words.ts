@@ -31,99 +31,109 @@ const fontIdentity: Matrix = [0.001, 0, 0, 0.001, 0, 0]
 const usualAscent = 0.8
 const usualDescent = -0.2
 
-/** Text state of ISO 32000-1, 9.3. */
-const freshText = {
-  font: undefined as GlyphRunFont | undefined, size: 0, direction: 1, charSpacing: 0, wordSpacing: 0, scale: 1, leading: 0, rise: 0,
+/** Graphics and text state of ISO 32000-1, 8.4 and 9.3: what `q` keeps and `Q` brings back. */
+interface State {
+  ctm: Matrix
+  font: GlyphRunFont | undefined
+  size: number
+  direction: 1 | -1
+  charSpacing: number
+  wordSpacing: number
+  scale: number
+  leading: number
+  rise: number
 }
-type TextState = typeof freshText & { ctm: Matrix }
+
+/** Follows a page's operators as a viewer does and writes down where glyphs fall. */
+class Pen {
+  readonly writer: LineWriter
+  readonly #fontOf: Input['fontOf']
+  readonly #stack: State[] = []
+  #state: State
+  #matrix: Matrix = identity
+  #at = { x: 0, y: 0, lineX: 0, lineY: 0 }
+
+  constructor({ fontOf, toShown, size }: Input) {
+    this.writer = new LineWriter(size)
+    this.#fontOf = fontOf
+    this.#state = { ctm: toShown, font: undefined, size: 0, direction: 1, charSpacing: 0, wordSpacing: 0, scale: 1, leading: 0, rise: 0 }
+  }
+
+  save(): void {
+    this.#stack.push({ ...this.#state })
+  }
+  restore(): void {
+    this.#state = this.#stack.pop() ?? this.#state
+  }
+  transform(matrix: Matrix): void {
+    this.#state.ctm = times(this.#state.ctm, matrix)
+  }
+  set(change: Partial<State>): void {
+    Object.assign(this.#state, change)
+  }
+  setFont(name: string, size: number): void {
+    this.set({ font: this.#fontOf(name), size: Math.abs(size), direction: size < 0 ? -1 : 1 })
+  }
+  setMatrix(matrix: Matrix): void {
+    this.#matrix = matrix
+    this.#at = { x: 0, y: 0, lineX: 0, lineY: 0 }
+  }
+  move(dx: number, dy: number): void {
+    const { lineX, lineY } = this.#at
+    this.#at = { x: lineX + dx, y: lineY + dy, lineX: lineX + dx, lineY: lineY + dy }
+  }
+  nextLine(): void {
+    this.move(0, this.#state.leading)
+  }
+  show(glyphs: (Glyph | number)[]): void {
+    const [dx, dy] = showGlyphs({ glyphs, state: this.#state, matrix: times(this.#state.ctm, this.#matrix), ...this.#at, writer: this.writer })
+    this.#at = { ...this.#at, x: this.#at.x + dx, y: this.#at.y + dy }
+  }
+}
+
+const numbers = (args: unknown[]) => args as number[]
+const number = (args: unknown[], index = 0) => numbers(args)[index] ?? 0
+
+const operations: Record<number, (pen: Pen, args: unknown[]) => void> = {
+  [OPS.save]: (pen) => pen.save(),
+  [OPS.restore]: (pen) => pen.restore(),
+  [OPS.transform]: (pen, args) => pen.transform(numbers(args)),
+  [OPS.paintFormXObjectBegin]: (pen, [matrix]) => {
+    pen.save()
+    if (matrix) pen.transform(matrix as Matrix)
+  },
+  [OPS.paintFormXObjectEnd]: (pen) => pen.restore(),
+  [OPS.beginText]: (pen) => pen.setMatrix(identity),
+  [OPS.setTextMatrix]: (pen, args) => pen.setMatrix(args.length === 1 ? Array.from(args[0] as ArrayLike<number>) : numbers(args)),
+  [OPS.moveText]: (pen, args) => pen.move(number(args), number(args, 1)),
+  [OPS.setLeadingMoveText]: (pen, args) => {
+    pen.set({ leading: number(args, 1) })
+    pen.move(number(args), number(args, 1))
+  },
+  [OPS.setLeading]: (pen, args) => pen.set({ leading: -number(args) }),
+  [OPS.nextLine]: (pen) => pen.nextLine(),
+  [OPS.setFont]: (pen, args) => pen.setFont(args[0] as string, number(args, 1)),
+  [OPS.setCharSpacing]: (pen, args) => pen.set({ charSpacing: number(args) }),
+  [OPS.setWordSpacing]: (pen, args) => pen.set({ wordSpacing: number(args) }),
+  [OPS.setHScale]: (pen, args) => pen.set({ scale: number(args) / 100 }),
+  [OPS.setTextRise]: (pen, args) => pen.set({ rise: number(args) }),
+  [OPS.showText]: (pen, args) => pen.show(args[0] as (Glyph | number)[]),
+}
 
 /**
  * Words of a page with their boxes, line by line in the order in which the page draws them.
  * Glyph positions follow ISO 32000-1, 9.4.4: advance = (width × size + character spacing + word spacing) × scale.
  */
-export function placeWords({ operators, fontOf, toShown, size }: Input): PlacedText[][] {
-  const writer = new LineWriter(size)
-  let state: TextState = { ...freshText, ctm: toShown }
-  const stack: TextState[] = []
-  let matrix = identity
-  let [x, y, lineX, lineY] = [0, 0, 0, 0]
-  const move = (dx: number, dy: number) => {
-    x = lineX += dx
-    y = lineY += dy
-  }
-  const restore = () => {
-    state = stack.pop() ?? state
-  }
-  operators.fnArray.forEach((operator, index) => {
-    const args = (operators.argsArray[index] ?? []) as unknown[]
-    const [first = 0, second = 0] = args as number[]
-    switch (operator) {
-      case OPS.save:
-        stack.push({ ...state })
-        break
-      case OPS.restore:
-      case OPS.paintFormXObjectEnd:
-        restore()
-        break
-      case OPS.paintFormXObjectBegin:
-        stack.push({ ...state })
-        if (args[0]) state.ctm = times(state.ctm, args[0] as Matrix)
-        break
-      case OPS.transform:
-        state.ctm = times(state.ctm, args as number[])
-        break
-      case OPS.beginText:
-        matrix = identity
-        x = y = lineX = lineY = 0
-        break
-      case OPS.setTextMatrix:
-        matrix = (args.length === 1 ? Array.from(args[0] as ArrayLike<number>) : args) as Matrix
-        x = y = lineX = lineY = 0
-        break
-      case OPS.moveText:
-        move(first, second)
-        break
-      case OPS.setLeadingMoveText:
-        state.leading = second
-        move(first, second)
-        break
-      case OPS.setLeading:
-        state.leading = -first
-        break
-      case OPS.nextLine:
-        move(0, state.leading)
-        break
-      case OPS.setFont:
-        state.font = fontOf(args[0] as string)
-        state.size = Math.abs(second)
-        state.direction = second < 0 ? -1 : 1
-        break
-      case OPS.setCharSpacing:
-        state.charSpacing = first
-        break
-      case OPS.setWordSpacing:
-        state.wordSpacing = first
-        break
-      case OPS.setHScale:
-        state.scale = first / 100
-        break
-      case OPS.setTextRise:
-        state.rise = first
-        break
-      case OPS.showText: {
-        const [dx, dy] = showGlyphs({ glyphs: args[0] as (Glyph | number)[], state, matrix: times(state.ctm, matrix), x, y, writer })
-        x += dx
-        y += dy
-        break
-      }
-    }
-  })
-  return writer.lines()
+export function placeWords(input: Input): PlacedText[][] {
+  const pen = new Pen(input)
+  const { fnArray, argsArray } = input.operators
+  fnArray.forEach((operator, index) => operations[operator]?.(pen, (argsArray[index] ?? []) as unknown[]))
+  return pen.writer.lines()
 }
 
 interface Run {
   glyphs: (Glyph | number)[]
-  state: TextState
+  state: State
   matrix: Matrix
   x: number
   y: number

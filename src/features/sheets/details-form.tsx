@@ -11,8 +11,8 @@ import { SubjectPicker, refOf } from './subject-picker.tsx'
 
 interface DetailsFormProps {
   sheet: Sheet
-  /** The revision whose date is asked for. */
-  revisionId: string
+  /** Revisions whose dates are asked for; the first is the one uploaded. */
+  revisionIds: [string, ...string[]]
   /** What the text suggests; shown in fields that nobody has filled. */
   suggestion?: Suggestion
   /** Sheets of a like title that this may be a new revision of. */
@@ -22,10 +22,11 @@ interface DetailsFormProps {
   onSaved: (sheet: Sheet) => void
 }
 
+const textOf = (value: FormDataEntryValue | null) => (typeof value === 'string' ? value.trim() : '')
 const kindNames = { data: 'Data sheet', safety: 'Safety sheet' } as const
 
 /** Kind, title, maker, date and subjects of a sheet, for a person to put right. */
-export function DetailsForm({ sheet, revisionId, suggestion, alike = [], beside, onSaved }: DetailsFormProps) {
+export function DetailsForm({ sheet, revisionIds, suggestion, alike = [], beside, onSaved }: DetailsFormProps) {
   const { change, move } = useSheetChanges()
   const [subjects, setSubjects] = useState<Subject[]>(sheet.subjects)
   const twin = alike.find((other) => other.kind === sheet.kind && other.title.toLowerCase() === sheet.title.toLowerCase())
@@ -33,7 +34,7 @@ export function DetailsForm({ sheet, revisionId, suggestion, alike = [], beside,
   const [maker, setMaker] = useState(sheet.maker)
   const { submit, problems, busy } = useSubmit(sheetEndpoints.changeSheet.body, (body) => change({ sheetId: sheet.id, ...body }))
   const { fields } = problems
-  const date = sheet.revisions.find((revision) => revision.id === revisionId)?.revisionDate ?? suggestion?.revisionDate ?? ''
+  const dated = sheet.revisions.filter((revision) => revisionIds.includes(revision.id))
 
   const choose = (next: Subject[]) => {
     setSubjects(next)
@@ -42,12 +43,11 @@ export function DetailsForm({ sheet, revisionId, suggestion, alike = [], beside,
   const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
-    const typed = values.get('dates.0.revisionDate')
-    const revisionDate = (typeof typed === 'string' && typed.trim()) || null
-    const body = { version: sheet.version, kind: values.get('kind'), title: values.get('title'), maker, subjects: subjects.map(refOf), dates: [{ revisionId, revisionDate }] }
+    const dates = dated.map(({ id }, index) => ({ revisionId: id, revisionDate: textOf(values.get(`dates.${index}.revisionDate`)) || null }))
+    const body = { version: sheet.version, kind: values.get('kind'), title: values.get('title'), maker, subjects: subjects.map(refOf), dates }
     const saved = await submit(body)
     if (!saved) return
-    onSaved(revisionOf ? await move({ revisionId, sheetId: revisionOf }) : saved)
+    onSaved(revisionOf ? await move({ revisionId: revisionIds[0], sheetId: revisionOf }) : saved)
   }
 
   return (
@@ -75,10 +75,13 @@ export function DetailsForm({ sheet, revisionId, suggestion, alike = [], beside,
           </>
         )}
         {revisionOf && <KeptValues sheet={sheet} />}
-        <TextField
-          label="Revision date" name="dates.0.revisionDate" defaultValue={date} placeholder="not stated" error={fields['dates.0.revisionDate']}
-          help={suggestion?.revisionDate ? 'Found in the text. Check it on the sheet.' : 'As 2024-03-18, 2024-03 or 2024.'}
-        />
+        {dated.map(({ id, fileName, revisionDate }, index) => (
+          <TextField
+            key={id} label={dated.length > 1 ? `Revision date of ${fileName}` : 'Revision date'} name={`dates.${index}.revisionDate`}
+            defaultValue={revisionDate ?? suggestion?.revisionDate ?? ''} placeholder="not stated" error={fields[`dates.${index}.revisionDate`]}
+            help={revisionDate === null && suggestion?.revisionDate ? 'Found in the text. Check it on the sheet.' : 'As 2024-03-18, 2024-03 or 2024.'}
+          />
+        ))}
       </div>
       {!revisionOf && <SubjectPicker value={subjects} onChange={choose} error={fields['subjects']} />}
       <div className="flex flex-wrap items-center gap-3">

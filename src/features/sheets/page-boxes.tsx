@@ -1,11 +1,11 @@
 import { type CSSProperties, useEffect, useRef } from 'react'
 import type { Box } from '../../../shared/domain/fact.ts'
 
-/** Room between words and the line around them, in CSS pixels. */
-const air = 2
 
 /** Place of a box of points on a page shown at `scale`. */
 export function placed([left, top, right, bottom]: Box, scale: number): CSSProperties {
+  // Room between the words and the line around them; less where all is small.
+  const air = scale < 1 ? 1 : 2
   return { left: left * scale - air, top: top * scale - air, width: (right - left) * scale + 2 * air, height: (bottom - top) * scale + 2 * air }
 }
 

@@ -26,14 +26,18 @@ import { ViewToolbar } from './view-toolbar.tsx'
 export function PageViewPage() {
   const { revisionId = '' } = useParams()
   const query = useRevision(revisionId)
+  // Fetched side by side with what is said of it.
+  const file = usePdf(revisionId)
   return (
     <Asking query={query} says={sentenceOf}>
-      {({ sheet, revision }) => <PageView key={revision.id} sheet={sheet} revision={revision} />}
+      {({ sheet, revision }) => <PageView key={revision.id} sheet={sheet} revision={revision} file={file} />}
     </Asking>
   )
 }
 
-function PageView({ sheet, revision }: { sheet: Sheet; revision: Revision }) {
+type File = ReturnType<typeof usePdf>
+
+function PageView({ sheet, revision, file }: { sheet: Sheet; revision: Revision; file: File }) {
   const [newest] = sheet.revisions
   const date = revision.revisionDate === null ? 'no date confirmed' : writtenDate(revision.revisionDate)
   return (
@@ -66,13 +70,12 @@ function PageView({ sheet, revision }: { sheet: Sheet; revision: Revision }) {
           <NoText />
         </p>
       )}
-      <Pages revision={revision} />
+      <Pages revision={revision} file={file} />
     </Page>
   )
 }
 
-function Pages({ revision }: { revision: Revision }) {
-  const { pdf, error } = usePdf(revision.id)
+function Pages({ revision, file: { pdf, error } }: { revision: Revision; file: File }) {
   const { page, cited, marking, returnTo, goTo } = useViewAddress(revision.pages)
   const [zoom, setZoom] = useState(1)
   const [mark, setMark] = useState<{ page: number; box: Box }>()

@@ -51,7 +51,10 @@ function SheetRecord({ sheet }: { sheet: Sheet }) {
         {editing && inForce && (
           <Card title="Edit" actions={<Button onClick={() => setEditing(false)}>Cancel</Button>}>
             <div className="p-4">
-              <DetailsForm key={sheet.version} sheet={sheet} revisionId={inForce.id} onSaved={() => setEditing(false)} />
+              <DetailsForm
+                key={sheet.version} sheet={sheet} revisionIds={[inForce.id, ...sheet.revisions.slice(1).map((revision) => revision.id)]}
+                onSaved={() => setEditing(false)}
+              />
             </div>
           </Card>
         )}

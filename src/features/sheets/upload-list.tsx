@@ -122,7 +122,7 @@ function Added({ result, saved, onSaved }: OutcomeProps<Extract<UploadedFile, { 
       <p className="mt-1 mb-2 text-pencil">
         Kept, {revision?.pages} {revision?.pages === 1 ? 'page' : 'pages'}. {revision?.state === 'no-text' ? <NoText /> : 'Check what the text suggests.'}
       </p>
-      <DetailsForm sheet={result.sheet} revisionId={result.revisionId} suggestion={result.suggestion} alike={result.alike} onSaved={onSaved} beside={open} />
+      <DetailsForm sheet={result.sheet} revisionIds={[result.revisionId]} suggestion={result.suggestion} alike={result.alike} onSaved={onSaved} beside={open} />
     </>
   )
 }
