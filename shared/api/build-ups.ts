@@ -15,7 +15,7 @@ const versionPlace = buildUpId.extend({ number: z.coerce.number().int().min(1).m
 const countsSchema = z.object({ stop: z.int(), caution: z.int(), unknown: z.int(), met: z.int() })
 
 /** A build-up in the list: its newest version, drawn and summed up. */
-export const buildUpSummarySchema = z.object({
+const buildUpSummarySchema = z.object({
   id: idSchema,
   /** Shown as BU-014. */
   number: z.int(),
@@ -30,7 +30,7 @@ export const buildUpSummarySchema = z.object({
 })
 export type BuildUpSummary = z.infer<typeof buildUpSummarySchema>
 
-export const versionSummarySchema = z.object({
+const versionSummarySchema = z.object({
   id: idSchema,
   number: z.int(),
   status: buildUpStatusSchema,
@@ -42,7 +42,7 @@ export const versionSummarySchema = z.object({
 export type VersionSummary = z.infer<typeof versionSummarySchema>
 
 /** A build-up opened at one version. Facts are the catalogue's of this moment for a draft, and those of the day of release afterwards. */
-export const buildUpSchema = z.object({
+const buildUpSchema = z.object({
   id: idSchema,
   number: z.int(),
   name: z.string(),

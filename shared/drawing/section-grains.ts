@@ -14,10 +14,10 @@ function radiusOf(grain: number | null, { layer, bottom, top }: PlacedLayer, sca
 }
 
 /** Paths of stones, one a colour. */
-function sand(places: readonly Point[], radius: number, { id, random }: { id: string; random: () => number }): Shape[] {
+function sand(places: readonly Point[], radius: number, { id, random, least = 0.62 }: { id: string; random: () => number; least?: number }): Shape[] {
   const edge = radius > 2.2 ? { stroke: '#6f5d3c', strokeWidth: 0.5 } : {}
   const byColor = sands.map((): string[] => [])
-  for (const at of places) byColor[Math.floor(random() * sands.length)]?.push(stone(at, radius * (0.62 + random() * 0.46), random))
+  for (const at of places) byColor[Math.floor(random() * sands.length)]?.push(stone(at, radius * (least + random() * (1.08 - least)), random))
   return byColor.flatMap((d, index): Shape[] => (d.length > 0 ? [{ kind: 'path', d: d.join(''), fill: sands[index] ?? sands[0] ?? '', course: id, ...edge }] : []))
 }
 
@@ -46,11 +46,11 @@ export function broadcastGrains(placed: PlacedLayer, scale: SectionScale): Shape
   const film = bottom - top
   const rests = (x: number) => Math.min(heightAt(lower, x) - radius, heightAt(upper, x) + radius * 0.35)
   const row: Point[] = []
-  const pitch = radius * (layer.broadcast.toRefusal ? 2.02 : 3.6)
-  for (let x = left; x < right && row.length < 400; x += pitch * (0.9 + random() * 0.25)) row.push([x, rests(x) - random() * radius * 0.5])
-  if (!layer.broadcast.toRefusal || film < radius * 3) return sand(row, radius, { id: layer.id, random })
+  const pitch = radius * (layer.broadcast.toRefusal ? 1.9 : 3.6)
+  for (let x = left; x < right && row.length < 400; x += pitch * (0.95 + random() * 0.15)) row.push([x, rests(x) - random() * radius * 0.5])
+  if (!layer.broadcast.toRefusal || film < radius * 3) return sand(row, radius, { id: layer.id, random, least: 0.86 })
   const body = scatter({ left, right, top: top + radius, bottom: bottom + 8, pitch: radius * 2.3 }, random).filter(
     ([x, y]) => y > heightAt(upper, x) + radius && y < heightAt(lower, x) - radius * 0.9,
   )
-  return sand([...body, ...row], radius, { id: layer.id, random })
+  return sand([...body, ...row], radius, { id: layer.id, random, least: 0.8 })
 }

@@ -32,7 +32,7 @@ export type SectionLayer = z.infer<typeof sectionLayerSchema>
 const severity: FindingStatus[] = ['met', 'unknown', 'caution', 'stop']
 
 /** The middle of a length figure in micrometres; null when it is not known. */
-export function micrometresOf(figure: Figure | undefined): number | null {
+function micrometresOf(figure: Figure | undefined): number | null {
   if (!figure || figure.kind === 'not-stated' || dimensionOf(figure.value.unit) !== 'length') return null
   const { min, max, unit } = figure.value
   const middle = min !== undefined && max !== undefined ? (min + max) / 2 : (min ?? max ?? 0)

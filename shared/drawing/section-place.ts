@@ -26,7 +26,7 @@ export interface Ground {
   spalls: readonly Spall[]
   joints: readonly { x: number; width: number; depth: number; layer: SectionLayer }[]
 }
-export interface Spall {
+interface Spall {
   from: number
   to: number
   depth: number

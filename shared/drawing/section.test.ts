@@ -6,22 +6,22 @@ import type { SectionLayer } from './section-layer.ts'
 import { lengthText } from './section-words.ts'
 
 const mil = 25.4
-const layer = (id: string, stage: Stage, thicknessInMil: number | null, more: Partial<SectionLayer> = {}): SectionLayer => ({
+const layer = (id: string, stage: Stage, { thicknessInMil = null, ...more }: Partial<SectionLayer> & { thicknessInMil?: number | null } = {}): SectionLayer => ({
   id, stage, title: `${stage} ${id}`, detail: '', color: '#8f9a98', thickness: thicknessInMil === null ? null : thicknessInMil * mil,
   typical: false, profile: null, filler: null, broadcast: null, status: null, ...more,
 })
 const freight = [
-  layer('1', 'prep', null, { profile: 5 }),
-  layer('2', 'fill', null),
-  layer('3', 'slurry', 125, { filler: { grain: 425 } }),
-  layer('4', 'prime', 10.7),
-  layer('5', 'top', 10.7),
+  layer('1', 'prep', { profile: 5 }),
+  layer('2', 'fill'),
+  layer('3', 'slurry', { thicknessInMil: 125, filler: { grain: 425 } }),
+  layer('4', 'prime', { thicknessInMil: 10.7 }),
+  layer('5', 'top', { thicknessInMil: 10.7 }),
 ]
 const fourteen = [
-  layer('1', 'prep', null, { profile: 6 }), layer('2', 'fill', null), layer('3', 'prime', 6), layer('4', 'slurry', 125, { filler: { grain: null } }),
-  layer('5', 'grind', null), layer('6', 'prime', 6), layer('7', 'broadcast', 20, { broadcast: { grain: 600, toRefusal: true } }),
-  layer('8', 'broadcast', 20, { broadcast: { grain: 600, toRefusal: false } }), layer('9', 'body', 40), layer('10', 'body', null), layer('11', 'seal', 10),
-  layer('12', 'top', 5), layer('13', 'top', 3, { status: 'stop' }), layer('14', 'cove', null),
+  layer('1', 'prep', { profile: 6 }), layer('2', 'fill'), layer('3', 'prime', { thicknessInMil: 6 }), layer('4', 'slurry', { thicknessInMil: 125, filler: { grain: null } }),
+  layer('5', 'grind'), layer('6', 'prime', { thicknessInMil: 6 }), layer('7', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: true } }),
+  layer('8', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: false } }), layer('9', 'body', { thicknessInMil: 40 }), layer('10', 'body'), layer('11', 'seal', { thicknessInMil: 10 }),
+  layer('12', 'top', { thicknessInMil: 5 }), layer('13', 'top', { thicknessInMil: 3, status: 'stop' }), layer('14', 'cove'),
 ]
 const builder: SectionOptions = { width: 330, height: 588, unit: 'mil' }
 const texts = (options: SectionOptions, layers = freight) => sectionOf(layers, options).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))
@@ -71,7 +71,7 @@ describe('sectionOf', () => {
         'Spalls and joints not surveyed: drawn as a stand-in.', 'Grain size not stated: sand drawn as a stand-in.', 'Hatched: a check stops this course.',
       ]),
     )
-    const plain = sectionOf([layer('1', 'prep', null, { profile: 2 }), layer('2', 'top', 10)], builder)
+    const plain = sectionOf([layer('1', 'prep', { profile: 2 }), layer('2', 'top', { thicknessInMil: 10 })], builder)
     expect(plain.notes).toEqual(['Dimensions in mil, wet.', 'Slab and profile not to scale.'])
   })
 
@@ -95,7 +95,7 @@ describe('sectionOf', () => {
     const svg = sectionSvg(sectionOf(fourteen, { width: 640, height: 700, unit: 'mil', standalone: true }))
     expect(svg).toBe(sectionSvg(sectionOf(fourteen, { width: 640, height: 700, unit: 'mil', standalone: true })))
     expect(svg).not.toMatch(/NaN|undefined|Infinity/)
-    expect(sectionSvg(sectionOf([layer('1', 'top', 5, { title: 'A & <B>' })], { ...builder, standalone: true }))).toContain('A &amp; &lt;B&gt;')
+    expect(sectionSvg(sectionOf([layer('1', 'top', { thicknessInMil: 5, title: 'A & <B>' })], { ...builder, standalone: true }))).toContain('A &amp; &lt;B&gt;')
     const small = sectionOf(fourteen, { width: 132, height: 56, unit: 'mil', compact: true })
     expect(small.shapes.filter((shape) => shape.kind === 'text')).toEqual([])
     expect(sectionSvg(small).length).toBeLessThan(40_000)

@@ -21,7 +21,7 @@ export interface SectionOptions {
 }
 
 /** A course as the figure shows it. */
-export interface DrawnLayer {
+interface DrawnLayer {
   id: string
   number: number
   /** In words, for those who do not see it. */

@@ -1,5 +1,5 @@
 /** What a figure is made of: plain geometry in pixels, so that a browser, a PDF and a document draw the same. */
-export interface PathShape {
+interface PathShape {
   kind: 'path'
   d: string
   fill?: string
@@ -13,7 +13,7 @@ export interface PathShape {
   role?: 'leader'
 }
 
-export interface TextShape {
+interface TextShape {
   kind: 'text'
   x: number
   y: number
@@ -67,7 +67,7 @@ export function svgOf(model: { width: number; height: number; shapes: readonly S
 
 /** Width of a line of Source Sans 3 in pixels, near enough to place and break text where nothing can measure it. */
 export function textWidth(text: string, size: number): number {
-  return [...text].reduce((sum, sign) => sum + (/[ilj.,:;'|!()[\]]/.test(sign) ? 0.27 : /[mwMW@%—]/.test(sign) ? 0.78 : /[A-Z×²³µ]/.test(sign) ? 0.57 : 0.495), 0) * size
+  return Array.from(text).reduce((sum, sign) => sum + (/[ilj.,:;'|!()[\]]/.test(sign) ? 0.27 : /[mwMW@%—]/.test(sign) ? 0.78 : /[A-Z×²³µ]/.test(sign) ? 0.57 : 0.495), 0) * size
 }
 
 /** Breaks words into lines no wider than `width`. */

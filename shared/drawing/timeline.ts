@@ -18,7 +18,7 @@ export interface TimelineOptions {
   narrow?: boolean
 }
 
-export interface TimelineMark {
+interface TimelineMark {
   id: string
   number: number
   says: string
@@ -141,6 +141,7 @@ function title({ id, number, title: words, color }: TimelineRow, { line, narrow,
 function working({ id, color, entry }: TimelineRow, line: number, { at }: Axis): Shape[] {
   if (entry.start === null) return [{ kind: 'text', x: at(0) + 6, y: line + 4, text: 'start not known', size, fill: ink.pencil, course: id }]
   const x = fixed(at(entry.start))
+  if (color === null && entry.workingUntil === null) return [{ kind: 'path', d: `M${x} ${line - 8}V${line + 8}`, stroke: ink.ink, strokeWidth: 1.6, course: id }]
   const end = entry.workingUntil === null ? x + 3 : Math.max(at(entry.workingUntil), x + 3)
   const known = entry.workingUntil !== null
   return [

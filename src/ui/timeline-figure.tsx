@@ -13,7 +13,7 @@ export function TimelineFigure({ rows, lit = null, onLight, width, narrow, clock
   const model = useMemo(() => timelineOf(rows, { width, ...(narrow === undefined ? {} : { narrow }), ...(clock ? { clock } : {}) }), [rows, width, narrow, clock])
   const about = useId()
   return (
-    <svg width={model.width} height={model.height} viewBox={`0 0 ${model.width} ${model.height}`} role="img" aria-labelledby={about}>
+    <svg width={model.width} height={model.height} viewBox={`0 0 ${model.width} ${model.height}`} className="h-auto max-w-full" role="img" aria-labelledby={about}>
       <title id={about}>{model.alternative}</title>
       {model.rows.map((row) => (
         <rect

@@ -4,7 +4,7 @@ import { evaluate } from '../../../shared/domain/evaluate.ts'
 import type { Evaluation } from '../../../shared/domain/evaluation.ts'
 import type { Finding } from '../../../shared/domain/finding.ts'
 import type { Transaction } from '../../db/open.ts'
-import { keepRelease, takeForRelease } from './queries.ts'
+import { keepRelease, takeForRelease } from './write-queries.ts'
 
 interface ReleaseWanted {
   place: { buildUpId: string; number: number; version: number }

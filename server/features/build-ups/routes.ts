@@ -4,11 +4,11 @@ import { can } from '../../../shared/domain/access.ts'
 import { evaluate } from '../../../shared/domain/evaluate.ts'
 import type { AppContext } from '../../http/context.ts'
 import { serve } from '../../http/serve.ts'
-import {
-  addBuildUp, addDraft, copyBuildUp, listNewest, readBuildUp, readChoices, readFacts, renameBuildUp, saveDraft, withdrawVersion, workOfStages,
-} from './queries.ts'
+import { listNewest, readBuildUp, readChoices, readFacts } from './queries.ts'
 import { release } from './release.ts'
 import { countFindings, summarise } from './summary.ts'
+import { workOfStages } from './work.ts'
+import { addBuildUp, addDraft, copyBuildUp, renameBuildUp, saveDraft, withdrawVersion } from './write-queries.ts'
 
 /** Build-ups: drafted by lead and estimator, released by the lead. */
 export function buildUpRoutes({ db, clock }: AppContext): Router {

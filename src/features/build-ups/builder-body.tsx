@@ -6,7 +6,7 @@ import type { BuilderView } from './builder-view.ts'
 import { CourseList } from './course-list.tsx'
 import { FindingsPanel } from './findings-panel.tsx'
 import { Hazards } from './hazards.tsx'
-import { SectionColumn } from './section-column.tsx'
+import { PrintedSection, SectionColumn } from './section-column.tsx'
 import { TimelineCard } from './timeline-card.tsx'
 import { TotalsBlock } from './totals-block.tsx'
 
@@ -33,7 +33,8 @@ export function BuilderBody({ view, version, reasons }: BuilderBodyProps) {
   }, [])
   return (
     <>
-      <div className="mt-4 grid border border-rule bg-card md:grid-cols-[270px_minmax(0,1fr)] xl:grid-cols-[340px_minmax(0,1fr)_310px]">
+      <PrintedSection layers={layers} />
+      <div className="mt-4 grid border border-rule bg-card md:grid-cols-[270px_minmax(0,1fr)] xl:grid-cols-[340px_minmax(0,1fr)_310px] print:block">
         <SectionColumn layers={layers} rows={list} lit={lit} onLight={setLit} onPick={pick} />
         <CourseList view={view} list={list} lit={lit} onLight={setLit} open={open} onOpen={setOpen} />
         <div className="border-t border-rule px-4 py-3 md:col-span-2 xl:col-span-1 xl:border-t-0 xl:border-l">
@@ -44,7 +45,7 @@ export function BuilderBody({ view, version, reasons }: BuilderBodyProps) {
       {work.courses.length > 0 && (
         <>
           <TimelineCard {...later} lit={lit} onLight={setLit} />
-          <Card title="Hazards of the whole floor" className="mt-4">
+          <Card title="Hazards of the whole floor" className="mt-4 break-inside-avoid">
             <div className="p-4">
               <Hazards hazards={later.evaluation.hazards} title="Taken together" />
             </div>

@@ -33,7 +33,7 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
     <ol ref={list} className="min-w-0 list-none self-start">
       {falling.map(({ course, index }) => (
         <li
-          key={course.id} className={`border-b border-rule ${over === course.id && dragged !== course.id ? 'outline-2 -outline-offset-2 outline-resin' : ''} ${dragged === course.id ? 'opacity-50' : ''}`}
+          key={course.id} className={`break-inside-avoid border-b border-rule ${over === course.id && dragged !== course.id ? 'outline-2 -outline-offset-2 outline-resin' : ''} ${dragged === course.id ? 'opacity-50' : ''}`}
           onDragOver={(event) => {
             if (!dragged) return
             event.preventDefault()

@@ -34,6 +34,7 @@ export function CourseRow(props: CourseRowProps) {
   const { course, number, mix, findings, open, lit, onToggle, onLight, onMove } = props
   const statuses = marked.filter((status) => findings.some((finding) => finding.status === status))
   return (
+    // eslint-disable-next-line jsx-a11y/no-static-element-interactions -- a key more for what the panel's buttons do, from anywhere in the row
     <div
       data-course={course.id} id={`course-${course.id}`}
       className={`grid grid-cols-[34px_minmax(0,1fr)_auto] items-center gap-x-2 gap-y-1 px-2 py-2 sm:px-3 lg:grid-cols-[34px_minmax(0,1fr)_134px_92px_118px_34px] lg:py-3 ${lit ? 'bg-resin-wash' : ''}`}
@@ -90,12 +91,14 @@ function RowFigures({ course, result, onChange }: CourseRowProps) {
 function FixedFilm({ result }: { result: CourseResult | undefined }) {
   if (!result) return null
   return (
-    <>
-      <FigureView figure={result.wetFilm} /> wet
-      <div className="text-small text-pencil">
+    <div className="flex flex-col gap-1.5 lg:items-end">
+      <span>
+        <FigureView figure={result.wetFilm} /> wet
+      </span>
+      <span className="text-small text-pencil">
         <FigureView figure={result.spreadRate} />
-      </div>
-    </>
+      </span>
+    </div>
   )
 }
 

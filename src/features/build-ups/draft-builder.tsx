@@ -55,7 +55,7 @@ function Conflict({ buildUp, draft, open, onClose }: { buildUp: BuildUp; draft: 
     <ConflictDialog
       open={open && state.kind === 'conflict'} onClose={onClose} says={state.kind === 'conflict' ? state.says : ''}
       loadTheirs={async () => {
-        const theirs = await client.fetchQuery({ ...buildUpOptions(buildUp.id, number), staleTime: 0 })
+        const theirs = await client.query({ ...buildUpOptions(buildUp.id, number), staleTime: 0 })
         client.setQueryData(buildUpOptions(buildUp.id, undefined).queryKey, (now) => (now?.opened.number === number ? theirs : now))
         draft.load(theirs)
       }}

@@ -24,7 +24,7 @@ export function NameForm<S extends z.ZodType>({ schema, rest, name, note, send, 
     await send(body)
     return true
   })
-  const onSubmit = async (event: React.FormEvent) => {
+  const onSubmit = async (event: React.SubmitEvent) => {
     event.preventDefault()
     if (await submit({ ...rest, name: values.name, ...(note === undefined ? {} : { note: values.note }) })) onDone()
   }

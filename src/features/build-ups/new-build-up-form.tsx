@@ -24,7 +24,7 @@ export function NewBuildUpForm({ onMade }: { onMade: (buildUp: BuildUp) => void 
   const [name, setName] = useState('')
   const [chosen, setChosen] = useState('slurry')
   const { submit, problems, busy } = useSubmit(buildUpEndpoints.addBuildUp.body, add)
-  const onSubmit = async (event: React.FormEvent) => {
+  const onSubmit = async (event: React.SubmitEvent) => {
     event.preventDefault()
     const made = await submit({ name, stages: skeletons.find(({ id }) => id === chosen)?.stages ?? [] })
     if (made) onMade(made)

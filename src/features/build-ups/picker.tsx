@@ -84,6 +84,7 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
       )}
       <ul id={`${id}-list`} role="listbox" aria-label={label} hidden={!open} className="absolute z-20 mt-1 max-h-72 w-full min-w-64 overflow-y-auto border border-ink bg-card">
         {found.map((choice, index) => (
+          // eslint-disable-next-line jsx-a11y/click-events-have-key-events -- the field above holds the focus and takes the keys
           <li
             key={choice.id} id={`${id}-${index}`} role="option" aria-selected={index === place} className={`flex cursor-pointer items-center gap-2 px-2 py-1.5 ${index === place ? 'bg-resin-wash' : ''}`}
             onPointerDown={(event) => event.preventDefault()} onPointerEnter={() => setPlace(index)} onClick={() => choose(choice)}
@@ -101,7 +102,7 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
 }
 
 /** The colour something cures to. */
-export function Swatch({ color }: { color: string }) {
+function Swatch({ color }: { color: string }) {
   return (
     <svg width="14" height="14" aria-hidden="true" className="shrink-0">
       <rect width="14" height="14" fill={color} stroke="#5c676a" />

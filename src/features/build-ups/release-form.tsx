@@ -22,7 +22,7 @@ export function ReleaseForm({ findings, titles, release }: ReleaseFormProps) {
   const [problems, setProblems] = useState<{ fields: Record<string, string>; summary: string | undefined }>({ fields: {}, summary: undefined })
   const [busy, setBusy] = useState(false)
   const nameOf = (finding: Finding) => (finding.courseId ? (titles[finding.courseId] ?? '') : 'the whole floor')
-  const submit = async (event: React.FormEvent) => {
+  const submit = async (event: React.SubmitEvent) => {
     event.preventDefault()
     const { unreasoned } = releaseObstacles(findings, reasons)
     if (unreasoned.length > 0) return setProblems({ fields: Object.fromEntries(unreasoned.map((finding) => [reasonKey(finding), `A reason is needed: ${finding.title}, ${nameOf(finding)}.`])), summary: undefined })

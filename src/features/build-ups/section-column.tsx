@@ -1,8 +1,8 @@
 import { type RefObject, memo, useLayoutEffect, useMemo, useState } from 'react'
 import type { SectionLayer } from '../../../shared/drawing/section-layer.ts'
 import type { DrawingUnit } from '../../../shared/drawing/section-words.ts'
-import { sectionOf } from '../../../shared/drawing/section.ts'
-import { SectionDrawing } from '../../ui/section-figure.tsx'
+import { sectionOf, standaloneHeight } from '../../../shared/drawing/section.ts'
+import { SectionDrawing, SectionFigure } from '../../ui/section-figure.tsx'
 import { useUnitSystem } from '../../ui/unit-system.tsx'
 
 interface SectionColumnProps {
@@ -48,7 +48,7 @@ function useMeasures(column: HTMLElement | null, rows: RefObject<HTMLElement | n
 }
 
 /** Unit of the dimension lines for the units that a person wants to see. */
-export function drawingUnit(system: 'stated' | 'us' | 'si', layers: readonly SectionLayer[]): DrawingUnit {
+function drawingUnit(system: 'stated' | 'us' | 'si', layers: readonly SectionLayer[]): DrawingUnit {
   if (system !== 'si') return 'mil'
   return Math.max(0, ...layers.map((layer) => layer.thickness ?? 0)) >= 3000 ? 'mm' : 'µm'
 }
@@ -65,9 +65,19 @@ export const SectionColumn = memo(function SectionColumn({ layers, rows, ...poin
     [layers, measures, unit, beside],
   )
   return (
-    <figure ref={setColumn} className="min-w-0 border-b border-rule md:border-r md:border-b-0">
+    <figure ref={setColumn} className="min-w-0 border-b border-rule md:border-r md:border-b-0 print:hidden">
       {model && <SectionDrawing model={model} {...pointing} className="block" />}
       {model && <figcaption className="border-t border-rule px-3 py-2 text-small text-pencil">{model.notes.join(' ')}</figcaption>}
     </figure>
+  )
+})
+
+/** On paper the section stands by itself, with its titles, whatever the window's width was. */
+export const PrintedSection = memo(function PrintedSection({ layers }: { layers: readonly SectionLayer[] }) {
+  const { system } = useUnitSystem()
+  return (
+    <div className="mt-4 hidden break-inside-avoid print:block">
+      <SectionFigure layers={layers} width={680} height={standaloneHeight(layers.length)} unit={drawingUnit(system, layers)} standalone className="h-auto max-w-full" />
+    </div>
   )
 })

@@ -35,7 +35,7 @@ export const TimelineCard = memo(function TimelineCard({ work, input, evaluation
     [work, input, evaluation],
   )
   return (
-    <Card title="Timeline" className="mt-4">
+    <Card title="Timeline" className="mt-4 break-inside-avoid">
       <div className="px-3 py-2">
         <div ref={setBox} className="min-h-24 overflow-hidden">
           {width > 0 && <TimelineFigure rows={rows} width={width} narrow={width < 620} lit={lit} onLight={onLight} />}

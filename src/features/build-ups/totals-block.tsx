@@ -15,7 +15,7 @@ export function TotalsBlock({ totals, version }: { totals: Evaluation['totals'];
     ['Released on', version.releasedAt ? new Date(version.releasedAt).toLocaleDateString('en-US', { day: 'numeric', month: 'short', year: 'numeric' }) : 'not released'],
   ]
   return (
-    <dl className="mt-4 grid grid-cols-2 border-t border-ink">
+    <dl className="mt-4 grid break-inside-avoid grid-cols-2 border-t border-ink">
       {cells.map(([label, value]) => (
         <div key={label} className="border-b border-rule px-1.5 py-1 odd:border-r">
           <dt className="text-[12px]/[16px] text-pencil">{label}</dt>
