@@ -168,6 +168,18 @@ export async function addFact(tx: Transaction, subject: Subject, body: FactBody,
   return readFact(tx, subject, row.id)
 }
 
+/**
+ * Adds many values of one record at once, those of its sheets when they are first read in. The pages are taken to be right: they come from the
+ * reader, not from a person. One row of the trail for all.
+ */
+export async function addFactsAtOnce(tx: Transaction, subject: Subject, bodies: readonly FactBody[], by: Writer): Promise<void> {
+  if (bodies.length === 0) return
+  const rows = bodies.map((body, position) => ({ ...columnsOf(body, by), position, productId: subject.productId, mixId: subject.mixId }))
+  await tx.insert(propertyValues).values(rows)
+  await keepSearchText(tx, subject)
+  await recordChange(tx, { personId: by.id, action: 'values-set', subject: { kind: kindOf(subject), id: idOf(subject) }, to: { values: bodies.length } })
+}
+
 async function liveFact(tx: Transaction, factId: string) {
   const [row] = await tx.select().from(propertyValues).where(and(eq(propertyValues.id, factId), isNull(propertyValues.endedAt))).for('update')
   if (!row) throw new AppError('not-found')
