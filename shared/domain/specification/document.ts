@@ -105,7 +105,7 @@ export type SpecDocument = z.infer<typeof specDocumentSchema>
 /** Headings of the front matter, in its order. */
 export const frontTitles = {
   unknowns: 'Not stated, not known',
-  overrides: 'Accepted at release, with the reason',
+  overrides: 'Checks not met, and what was accepted with a reason',
   typical: 'Typical values, to be verified',
   assumptions: 'Assumptions',
 } as const satisfies Record<keyof SpecDocument['front'], string>

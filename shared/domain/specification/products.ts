@@ -1,0 +1,100 @@
+import { type Fact, factOf, factsOf } from '../fact.ts'
+import type { MixFacts } from '../mix.ts'
+import { type Property, properties } from '../property.ts'
+import type { ProductFacts } from '../product.ts'
+import type { Article, Item, Runs } from './document.ts'
+import type { Floor, SpecCourse } from './floor.ts'
+import { item, joined, line, notStatedRun, plain, quoted } from './runs.ts'
+
+/** "Solids by volume: 100 % [S1]." or "…: not stated." */
+function propertyLine({ register }: Floor, facts: readonly Fact[], property: Property): Item {
+  const found = factsOf(facts, property)
+  return item(line`${quoted(properties[property].label)}: ${found.length > 0 ? joined(found.map((fact) => register.factAt(fact)), '; ') : notStatedRun()}.`)
+}
+
+function manufacturers({ mixes, products }: Floor): Item[] {
+  const makers = [...new Set([...mixes, ...products].map(({ maker }) => maker))].sort()
+  return makers.length === 0 ? [] : [
+    item(line`Makers of the materials specified: ${joined(makers.map((maker) => [quoted(maker)]), ', ')}.`),
+    ...plain('Do not substitute, thin or combine materials unless the maker’s sheet states it or the maker agrees in writing.'),
+  ]
+}
+
+function system(floor: Floor): Item[] {
+  const { totals } = floor.evaluation
+  return [
+    item(line`Courses from the slab upward: see the section drawing and the system schedule.`),
+    item(line`Dry thickness of all courses over the field: ${floor.register.figure(totals.thickness)}. Stones that stand out of a broadcast are not counted.`),
+  ]
+}
+
+function performance(floor: Floor): Item[] {
+  const { register, courses, evaluation } = floor
+  const laid = courses.filter(({ mix }) => mix)
+  return [
+    item(line`VOC content as mixed:`, [
+      ...laid.map(({ course, mix, result }) => item(line`${quoted(course.title)}, ${quoted(mix?.name ?? '')}: ${register.figure(result.voc)}.`)),
+      item(line`Greatest of all courses: ${register.figure(evaluation.totals.vocWorst)}. Comply with the air district’s rule; the strictest category named on label or sheet applies.`),
+    ]),
+    item(line`Pull-off strength of the slab asked for:`, floor.mixes.map((mix) => item(line`${quoted(mix.name)}: ${oneOf(floor, mix, 'pullOffStrength')}.`))),
+    ...plain('Slip resistance, chemical and fire performance: as the contract states and the approved mock-up shows. Ask the maker in writing for what no sheet states.'),
+  ]
+}
+
+function oneOf({ register }: Floor, { facts }: Pick<MixFacts, 'facts'>, property: Property): Runs {
+  const fact = factOf(facts, property)
+  return fact ? register.factAt(fact) : notStatedRun()
+}
+
+const mixProperties = ['volumeSolids', 'density', 'viscosity', 'filmThickness', 'surfaceProfile', 'substrateRelativeHumidity', 'moistureEmission', 'shelfLife'] as const satisfies readonly Property[]
+
+function materials(floor: Floor): Item[] {
+  return floor.mixes.map((mix) =>
+    item(line`${quoted(mix.name)}: ${quoted(mix.chemistry)}, by ${quoted(mix.maker)}.`, [
+      item(line`Components: ${joined(mix.parts.map(({ part, product }) => line`${quoted(part)}, ${quoted(product.name)}`), '; ')}.`),
+      ...mixProperties.map((property) => propertyLine(floor, mix.facts, property)),
+    ]),
+  )
+}
+
+function aggregateItem(floor: Floor, product: ProductFacts): Item {
+  const uses = floor.courses.flatMap(({ course, filler, broadcast }) => [
+    ...(filler?.id === product.id ? [line`in the mix of ${quoted(course.title)}`] : []),
+    ...(broadcast?.id === product.id ? [line`broadcast on ${quoted(course.title)}`] : []),
+  ])
+  return item(line`${quoted(product.name)}: ${quoted(product.chemistry)}, by ${quoted(product.maker)}; ${joined(uses, ', ')}.`, [propertyLine(floor, product.facts, 'density')])
+}
+
+function ratios(floor: Floor, mix: MixFacts): Item {
+  const stated = factsOf(mix.facts, 'mixRatio')
+  const single = mix.parts.length === 1
+  return item(line`Ratio: ${stated.length > 0 ? joined(stated.map((fact) => [floor.register.fact(fact)]), '; ') : single ? line`one component, nothing to proportion` : notStatedRun()}.`)
+}
+
+function mixItem(floor: Floor, { mix, result, course, filler }: SpecCourse & { mix: MixFacts }): Item {
+  const split = factOf(mix.facts, 'splitKit')
+  const induction = factsOf(mix.facts, 'inductionTime')
+  return item(line`${quoted(course.title)}, ${quoted(mix.name)}:`, [
+    ratios(floor, mix),
+    filler && course.filler ? item(line`Aggregate in the mix: ${quoted(filler.name)}, loading in the system schedule.`) : null,
+    item(line`Pot life at the slab temperature of this section: ${floor.register.figure(result.potLife)}. Other temperatures: schedule of pot life.`),
+    induction.length > 0 ? item(line`Induction time: ${joined(induction.map((fact) => floor.register.factAt(fact)), '; ')}.`) : null,
+    item(line`Part kits allowed: ${split ? [floor.register.fact(split)] : notStatedRun()}.`),
+    split ? null : item(line`Mix whole kits only.`),
+  ])
+}
+
+const mixesOf = (floor: Floor): Item[] => floor.courses.flatMap((one) => (one.mix ? [mixItem(floor, { ...one, mix: one.mix })] : []))
+
+/** PART 2 PRODUCTS. Articles without anything to say are left out. */
+export function productArticles(floor: Floor): Article[] {
+  const articles: Article[] = [
+    { id: 'manufacturers', title: 'Manufacturers', items: manufacturers(floor) },
+    { id: 'system', title: 'System description', items: floor.mixes.length > 0 ? system(floor) : [] },
+    { id: 'performance', title: 'Performance', items: floor.mixes.length > 0 ? performance(floor) : [] },
+    { id: 'materials', title: 'Materials', items: materials(floor) },
+    { id: 'aggregates', title: 'Aggregates', items: floor.aggregates.map((product) => aggregateItem(floor, product)) },
+    { id: 'mixes', title: 'Mixes', items: mixesOf(floor) },
+  ]
+  return articles.filter(({ items }) => items.length > 0)
+}

@@ -1,0 +1,147 @@
+import { formatNumber, formatQuantity } from '../format.ts'
+import { pictograms } from '../../reference/ghs.ts'
+import { unionOfHazards } from '../hazard.ts'
+import { writtenDate } from '../sheet-age.ts'
+import { valueAt } from '../sheet-table.ts'
+import type { SheetSummary } from '../sheet.ts'
+import { windowAt } from '../window.ts'
+import type { Runs, SpecTable } from './document.ts'
+import { type Floor, type SpecCourse, threeTemperatures } from './floor.ts'
+import { chosen, joined, line, measured, notStatedRun, plainFigure, quoted } from './runs.ts'
+
+/** Titles of the schedules, in their order. */
+export const scheduleTitles = {
+  system: 'System schedule',
+  windows: 'Recoat windows by temperature',
+  'pot-life': 'Pot life by temperature',
+  areas: 'Areas and quantities',
+  sheets: 'Products and sheets',
+  hazards: 'Hazards and protective equipment by course',
+  checks: 'Checks against the sheets loaded',
+} as const
+type ScheduleId = keyof typeof scheduleTitles
+
+function table(id: ScheduleId, { columns, rows, note = '' }: { columns: [string, number][]; rows: Runs[][]; note?: string }): SpecTable {
+  return { id, title: scheduleTitles[id], columns: columns.map(([label, width]) => ({ label, width })), rows, note }
+}
+
+const nothing: Runs = [quoted('none')]
+const numbered = ({ number, course }: SpecCourse): Runs => line`${chosen(String(number))}  ${quoted(course.title)}`
+
+function aggregateCell({ course, filler, broadcast }: SpecCourse): Runs {
+  const lines = [
+    ...(filler && course.filler ? [line`${quoted(filler.name)}, ${chosen(formatQuantity(course.filler.loading))} of liquid, in the mix`] : []),
+    ...(broadcast && course.broadcast ? [line`${quoted(broadcast.name)}, ${chosen(formatQuantity(course.broadcast.rate))}${course.broadcast.toRefusal ? line`, to refusal` : []}`] : []),
+  ]
+  return lines.length > 0 ? joined(lines, '; ') : nothing
+}
+
+function systemSchedule({ courses, register }: Floor): SpecTable {
+  const rows = courses.map((one): Runs[] => {
+    const { course, mix, result } = one
+    if (!mix) {
+      const { method, profile } = course.preparation ?? {}
+      const work = method ? line`${quoted(method)}${profile === undefined ? [] : line`, ${chosen(`CSP ${profile}`)}`}` : notStatedRun()
+      return [numbered(one), work, [quoted('–')], [quoted('–')], [quoted('–')], nothing]
+    }
+    return [numbered(one), [quoted(mix.name)], register.figure(result.spreadRate), register.figure(result.wetFilm), register.figure(result.dryFilm), aggregateCell(one)]
+  })
+  return table('system', {
+    columns: [['Course', 22], ['Mix or work', 18], ['Spread rate', 15], ['Wet film', 13], ['Dry film', 13], ['Aggregate', 19]], rows,
+    note: 'From the slab upward.',
+  })
+}
+
+type Question = (one: SpecCourse & { mix: NonNullable<SpecCourse['mix']> }, temperature: ReturnType<typeof threeTemperatures>[number]) => Runs
+
+/** A schedule by temperature; outside a sheet's table a cell says so. */
+function byTemperature(floor: Floor, id: ScheduleId, { ask, atSite, note }: { ask: Question; atSite: (one: SpecCourse) => Runs; note: string }): SpecTable {
+  const temperatures = threeTemperatures(floor)
+  const laid = floor.courses.flatMap((one) => (one.mix ? [{ ...one, mix: one.mix }] : []))
+  const { slabTemperature } = floor.given.input.conditions
+  return table(id, {
+    columns: [['Course', 24], ...temperatures.map((one): [string, number] => [formatQuantity(one), 19]), [`Slab of this job, ${formatQuantity(slabTemperature)}`, 19]],
+    rows: laid.map((one) => [line`${numbered(one)}, ${quoted(one.mix.name)}`, ...temperatures.map((temperature) => ask(one, temperature)), atSite(one)]),
+    note,
+  })
+}
+
+const windows = (floor: Floor): SpecTable => byTemperature(floor, 'windows', {
+  ask: ({ mix, next }, temperature) => floor.register.figure(windowAt(mix, { temperature, next }), { window: true }),
+  atSite: ({ result }) => floor.register.figure(result.window, { window: true }),
+  note: 'Counted from the start of the course. Values between two columns of a sheet are interpolated in its own table and never run beyond it.',
+})
+
+const potLives = (floor: Floor): SpecTable => byTemperature(floor, 'pot-life', {
+  ask: ({ mix }, temperature) => floor.register.figure(valueAt(mix.facts, { property: 'potLife', temperature, mix })),
+  atSite: ({ result }) => floor.register.figure(result.potLife),
+  note: 'Of the amount that the sheet states it for. A larger mass in the pail lives shorter.',
+})
+
+function areas({ given, quantities, register }: Floor): SpecTable {
+  const bays = given.bays.map((bay): Runs[] => [[quoted(bay.name)], [measured(formatQuantity(bay.area))], [quoted('bay')]])
+  const needs = quantities.flatMap(({ title, mix, total, packing, aggregates }): Runs[][] => {
+    const packs = packing.plan ? packing.plan.lines.map(({ pack, count: many }) => `${many} × ${formatQuantity(pack.size)}`).join(', ') : undefined
+    return [
+      [line`${quoted(title)}: ${quoted(mix.name)}`, register.figure(total), packs ? line`whole kits: ${plainFigure(packs, 'computed')}` : line`kits: ${notStatedRun()}`],
+      ...aggregates.map(({ product, mass, use }): Runs[] => [line`${quoted(title)}: ${quoted(product.name)}`, register.figure(mass), [quoted(use === 'filler' ? 'in the mix' : 'broadcast')]]),
+    ]
+  })
+  const { percent, convention } = given.loss
+  return table('areas', {
+    columns: [['Bay, or material by course', 46], ['Area or amount', 27], ['Remark', 27]], rows: [...bays, ...needs],
+    note: `Liquid resin with loss of ${formatNumber(percent)} % ${convention === 'lost' ? 'of what is mixed' : 'added to what is needed'}.`,
+  })
+}
+
+function sheetCell(sheets: readonly SheetSummary[], kind: SheetSummary['kind']): Runs {
+  const found = sheets.filter((sheet) => sheet.kind === kind)
+  if (found.length === 0) return [plainFigure('no sheet loaded', 'not-stated')]
+  return joined(found.map((sheet) => line`${quoted(sheet.title)}, ${measured(writtenDate(sheet.revisionDate))}${sheet.superseded ? line` (superseded)` : []}`), '; ')
+}
+
+const sheetSchedule = ({ mixes, products }: Floor): SpecTable => table('sheets', {
+  columns: [['Product or mix', 24], ['Maker', 12], ['Data sheet, revision', 32], ['Safety sheet, revision', 32]],
+  rows: [...mixes, ...products].map(({ name, maker, sheets }) => [[quoted(name)], [quoted(maker)], sheetCell(sheets, 'data'), sheetCell(sheets, 'safety')]),
+  note: 'Sheets at the revision that this section rests on.',
+})
+
+const wordsOr = (lines: readonly { text: string; from: string }[]): Runs =>
+  lines.length > 0 ? joined(lines.map(({ text, from }) => line`${quoted(text)} (${quoted(from)})`), '; ') : notStatedRun()
+
+const shows = (code: string) => (code in pictograms ? pictograms[code as keyof typeof pictograms].shows : code)
+
+function hazardSchedule({ courses }: Floor): SpecTable {
+  const rows = courses.map((one): Runs[] => {
+    if (!one.mix) return [numbered(one), line`No material sheet. Dust and noise of the work: Part one, Hazards and cautions.`, notStatedRun(), notStatedRun(), notStatedRun()]
+    const sum = one.result.hazards ?? unionOfHazards(one.products)
+    const said = [
+      ...(sum.signalWord ? [line`${quoted(sum.signalWord)}`] : []),
+      ...sum.pictograms.map((code) => line`${quoted(`${code} ${shows(code)}`)}`),
+      ...sum.statements.map(({ code, text }) => line`${quoted(code)} ${quoted(text)}`),
+      ...(sum.notStated.length > 0 ? [line`not stated for ${quoted(sum.notStated.join(', '))}`] : []),
+    ]
+    return [numbered(one), said.length > 0 ? joined(said, '; ') : notStatedRun(), wordsOr(sum.gloves), wordsOr(sum.eyes), wordsOr(sum.breathing)]
+  })
+  return table('hazards', {
+    columns: [['Course', 16], ['Hazards', 36], ['Gloves', 16], ['Eyes', 16], ['Breathing', 16]], rows,
+    note: 'As the safety sheets state them. What arises in mixing, curing and grinding is on no sheet. The competent person decides on equipment.',
+  })
+}
+
+const statusWords = { stop: 'not met', caution: 'caution', unknown: 'unknown', met: 'met' } as const
+
+function checkSchedule({ evaluation, courses }: Floor): SpecTable {
+  const titleOf = (id: string | null) => courses.find(({ course }) => course.id === id)?.course.title ?? 'the floor'
+  return table('checks', {
+    columns: [['Check', 22], ['Of', 17], ['Result', 10], ['What it says', 35], ['Compared with', 16]],
+    rows: evaluation.findings.map((finding) => [[quoted(finding.title)], [quoted(titleOf(finding.courseId))], [quoted(statusWords[finding.status])], [quoted(finding.says)], [quoted(finding.source)]]),
+    note: 'Worked out at the conditions of this section. “Met” means met against the sheets loaded, and no more.',
+  })
+}
+
+/** The schedules that follow the parts. */
+export function schedules(floor: Floor): SpecTable[] {
+  const all = [systemSchedule(floor), windows(floor), potLives(floor), areas(floor), sheetSchedule(floor), hazardSchedule(floor), checkSchedule(floor)]
+  return all.filter(({ rows }) => rows.length > 0)
+}

@@ -1,0 +1,87 @@
+import type { Fact, Origin } from '../fact.ts'
+import { type Figure, type KnownFigure, isTypical } from '../figure.ts'
+import { formatConditions, formatRange, formatValue, formatWindow } from '../format.ts'
+import type { Known, Run, Runs, SpecDocument, SpecSource } from './document.ts'
+import { line, notStatedRun, quoted } from './runs.ts'
+
+type Lists = Pick<SpecDocument, 'sources' | 'workings' | 'entered' | 'typicals'>
+
+/** Hands out the tags of a document: each page of a sheet, each entered value, typical value and working once, in the order of first use. */
+export interface Register {
+  /** A fact of the catalogue: its value with its tag. */
+  fact(fact: Fact): Run
+  /** The same with the conditions that it holds at. */
+  factAt(fact: Fact): Runs
+  /** A figure in words, "not stated" with its reason where it is. */
+  figure(figure: Figure, options?: { window?: boolean }): Runs
+  /** A number worked out for the document itself. */
+  working(text: string, working: { formula: string; sum: string; source: string }): Run
+  lists(): Lists
+}
+
+const knownOf: Record<Origin['kind'], Known> = { stated: 'stated', entered: 'entered', typical: 'typical' }
+/** The words with which `evaluate` marks what a person chose for a course. */
+const chosenFormula = 'chosen for this course'
+
+export function createRegister(): Register {
+  const lists: Lists = { sources: [], workings: [], entered: [], typicals: [] }
+
+  const tagOf = (origin: Origin): string => {
+    if (origin.kind === 'stated') return sheetTag(lists.sources, origin.citation)
+    if (origin.kind === 'entered') {
+      const { reason, by, at } = origin
+      return once(lists.entered, 'E', { reason, by, at }, (one) => one.reason === reason && one.by === by)
+    }
+    const { source, dated } = origin
+    return once(lists.typicals, 'T', { source, dated }, (one) => one.source === source && one.dated === dated)
+  }
+  const cited = (text: string, origin: Origin): Run => ({
+    kind: 'figure', text, known: knownOf[origin.kind], tags: [tagOf(origin)], citation: origin.kind === 'stated' ? origin.citation : null,
+  })
+  const working: Register['working'] = (text, { formula, sum, source }) => ({
+    kind: 'figure', text, known: 'computed', citation: null,
+    tags: [once(lists.workings, 'W', { formula, sum, source, from: [] as string[] }, (one) => one.formula === formula && one.sum === sum)],
+  })
+  const computedRun = (figure: Extract<KnownFigure, { kind: 'computed' }>, text: string): Run => {
+    if (figure.working.formula === chosenFormula) return { kind: 'figure', text, known: 'chosen', tags: [], citation: null }
+    const from = [...new Set(figure.from.flatMap(({ origin }) => (origin ? [tagOf(origin)] : [])))]
+    const { formula, sum, source } = figure.working
+    const tag = once(lists.workings, 'W', { formula, sum, source, from }, (one) => one.formula === formula && one.sum === sum)
+    return { kind: 'figure', text, known: isTypical(figure) ? 'typical' : 'computed', tags: [tag], citation: null }
+  }
+  const fact: Register['fact'] = (one) => cited(formatValue(one), one.origin)
+  return {
+    fact,
+    factAt: (one) => {
+      const conditions = formatConditions(one.at)
+      return conditions ? line`${fact(one)} ${quoted(conditions)}` : [fact(one)]
+    },
+    figure: (figure, { window = false } = {}) => {
+      if (figure.kind === 'not-stated') return notStatedRun(figure.missing.because)
+      const text = window ? formatWindow(figure.value) : formatRange(figure.value)
+      if (figure.kind === 'computed') return [computedRun(figure, text)]
+      const run = cited(text, figure.origin)
+      return figure.condition === 'no temperature stated' ? line`${run} (no temperature stated)` : [run]
+    },
+    working,
+    lists: () => lists,
+  }
+}
+
+/** Finds the same entry or adds it under the next tag of its letter. */
+function once<T extends object>(list: ({ tag: string } & T)[], letter: string, entry: T, same: (one: T) => boolean): string {
+  const found = list.find(same)
+  if (found) return found.tag
+  const tag = `${letter}${list.length + 1}`
+  list.push({ tag, ...entry })
+  return tag
+}
+
+function sheetTag(sources: SpecSource[], citation: Extract<Origin, { kind: 'stated' }>['citation']): string {
+  const { sheetTitle: title, revisionDate, revisionId, page, quote } = citation
+  const same = sources.find((one) => one.revisionId === revisionId && one.page === page)
+  const source = same ?? { tag: `S${sources.length + 1}`, title, revisionDate, revisionId, page, quotes: [] }
+  if (!same) sources.push(source)
+  if (quote && !source.quotes.includes(quote)) source.quotes.push(quote)
+  return source.tag
+}
