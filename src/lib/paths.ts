@@ -14,8 +14,6 @@ export const paths = {
   /** The viewer: a page of a revision, with a box drawn (`left,top,right,bottom` in points). */
   sheetPage: (revisionId: string, page = 1, box?: readonly number[] | null) =>
     `/sheets/pages/${revisionId}?page=${page}${box ? `&box=${box.map((edge) => Math.round(edge * 10) / 10).join(',')}` : ''}`,
-  /** The viewer in marking mode: `returnTo` is gone back to with `revision`, `page`, `box` and `quote` added to its query. */
-  markOnSheet: (revisionId: string, returnTo: string, page = 1) => `/sheets/pages/${revisionId}?page=${page}&mark=1&return=${encodeURIComponent(returnTo)}`,
   buildUps: '/build-ups',
   /** The builder on one version; without a version the newest. */
   buildUp: (id: string, version?: number) => `/build-ups/${id}${version === undefined ? '' : `?version=${version}`}`,

@@ -16,7 +16,7 @@ export const demoJobs: { buildUp: string; body: Omit<JobBody, 'buildUpVersionId'
       bays: areas.map((area, index) => ({
         id: `bay-${index + 1}`, name: `${'ABC'[Math.floor(index / 3)] ?? ''}${(index % 3) + 1}`, area: { value: area, unit: 'ft²' as const },
         joints: [{ length: { value: Math.round(area / 6.5), unit: 'ft' as const }, width: { value: 0.1875, unit: 'in' as const }, depth: { value: 2, unit: 'in' as const } }],
-        spalls: index % 2 === 0 ? { area: { value: Math.round(area * 0.04), unit: 'ft²' as const }, meanDepth: { value: 0.31, unit: 'in' as const } } : null,
+        spalls: null,
       })),
     },
   },

@@ -86,7 +86,7 @@ export const demoMixes: DemoMix[] = [
     table: us([pot([120, 90, 45]), recoat([[12, 48], [6, 24], [4, 12]]), foot([16, 8, 5])]),
   },
   {
-    name: 'Teasel J8 Joint', maker: 'Teasel', chemistry: 'polyurea', color: '#5d6b6e', parts: ['Teasel J8 Joint, Part A', 'Teasel J8 Joint, Part B'], use: 'Semi-rigid filler for joints and cracks', dated: '2025-01-27', price: 96,
+    name: 'Teasel J8 Joint', maker: 'Teasel', chemistry: 'polyurea', color: '#5d6b6e', parts: ['Teasel J8 Joint, Part A', 'Teasel J8 Joint, Part B'], use: 'Semi-rigid filler for joints and cracks', dated: '2025-01-27', price: 24,
     values: [ratio('Mixing ratio A : B', [1, 1], 'volume'), solids(100), voc(5), range('density', 'Density, mixed', [1.07, 1.07, 'kg/L']), ...climateC(-5, 40, 90), range('packSize', 'Cartridge', [0.6, 0.6, 'L']), shelf(12)],
     table: si([pot([7, 4, 2], {}), recoat([[2, 48], [1, 24], [0.5, 12]]), foot([2, 1, 0.5])]),
   },

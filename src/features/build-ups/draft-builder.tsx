@@ -8,6 +8,7 @@ import { Dialog } from '../../ui/dialog.tsx'
 import { BuilderBody } from './builder-body.tsx'
 import { BuilderFrame } from './builder-frame.tsx'
 import { ConditionsBar } from './conditions-bar.tsx'
+import { ConditionsSummary } from './conditions-summary.tsx'
 import { ConflictDialog } from './conflict-dialog.tsx'
 import { buildUpOptions, useBuildUpChanges } from './queries.ts'
 import { SaveMark } from './save-mark.tsx'
@@ -37,7 +38,12 @@ export function DraftBuilder({ buildUp }: { buildUp: BuildUp }) {
         </>
       }
     >
-      <ConditionsBar conditions={work.conditions} onChange={(change) => dispatch({ kind: 'conditions', change })} />
+      <div className="print:hidden">
+        <ConditionsBar conditions={work.conditions} onChange={(change) => dispatch({ kind: 'conditions', change })} />
+      </div>
+      <div className="hidden print:block">
+        <ConditionsSummary conditions={work.conditions} />
+      </div>
       <BuilderBody view={{ work, input, evaluation, dispatch, fields }} version={buildUp.opened} reasons={buildUp.opened.releaseReasons} />
       <Conflict buildUp={buildUp} draft={draft} open={deciding} onClose={() => setDeciding(false)} />
       <LeavingPrompt dirty={autosave.dirty} flush={autosave.flush} />

@@ -3,6 +3,7 @@ import type { BuildUp } from '../../../shared/api/build-ups.ts'
 import { evaluate } from '../../../shared/domain/evaluate.ts'
 import { BuilderBody } from './builder-body.tsx'
 import { BuilderFrame } from './builder-frame.tsx'
+import { ConditionsSummary } from './conditions-summary.tsx'
 
 const saved = () => Promise.resolve(true)
 
@@ -17,6 +18,7 @@ export function FixedBuilder({ buildUp }: { buildUp: BuildUp }) {
       buildUp={buildUp} evaluation={evaluation} conditions={input.conditions} titles={Object.fromEntries(work.courses.map(({ id, title }) => [id, title]))}
       beforeLeaving={saved} version={() => opened.version}
     >
+      <ConditionsSummary conditions={input.conditions} />
       <BuilderBody view={{ work, input, evaluation, dispatch: null, fields: {} }} version={opened} reasons={opened.releaseReasons} />
     </BuilderFrame>
   )

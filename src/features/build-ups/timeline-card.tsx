@@ -6,6 +6,9 @@ import { Card } from '../../ui/page.tsx'
 import { TimelineFigure } from '../../ui/timeline-figure.tsx'
 import type { Work } from './work.ts'
 
+/** Fits Letter and A4 between their margins at the size of the page's own words. */
+const printWidth = 690
+
 interface TimelineCardProps {
   work: Work
   input: EvaluationInput
@@ -37,7 +40,10 @@ export const TimelineCard = memo(function TimelineCard({ work, input, evaluation
   return (
     <Card title="Timeline" className="mt-4 break-inside-avoid">
       <div className="px-3 py-2">
-        <div ref={setBox} className="min-h-24 overflow-hidden">
+        <div className="hidden print:block">
+          <TimelineFigure rows={rows} width={printWidth} />
+        </div>
+        <div ref={setBox} className="min-h-24 overflow-hidden print:hidden">
           {width > 0 && <TimelineFigure rows={rows} width={width} narrow={width < 620} lit={lit} onLight={onLight} />}
         </div>
         <p className="mt-1 text-small text-pencil">

@@ -26,7 +26,7 @@ export function SheetsCard({ record }: { record: { sheets: readonly SheetSummary
               <Link to={paths.sheet(sheet.id)} className="text-resin hover:underline">{sheet.title}</Link>
               <span className="block text-small text-pencil">
                 {kinds[sheet.kind]}, {sheet.revisionDate ?? 'date not stated'}
-                {age !== undefined && `, ${formatNumber(age, 1)} years old`}, {sheet.pages} pages,{' '}
+                {age !== undefined && `, ${formatNumber(age, 1)} years old`}, {sheet.pages === 1 ? 'one page' : `${sheet.pages} pages`},{' '}
                 <Link to={paths.sheetPage(sheet.revisionId)} className="underline">open</Link>
                 {old && (
                   <>

@@ -5,7 +5,6 @@ import { formatConditions, formatValue } from '../../../shared/domain/format.ts'
 import { type Property, properties } from '../../../shared/domain/property.ts'
 import { sentenceOf } from '../../lib/api.ts'
 import { useCan } from '../../lib/user.ts'
-import { Button } from '../../ui/button.tsx'
 import { OriginValue } from '../../ui/figure-view.tsx'
 import { Card } from '../../ui/page.tsx'
 import { useUnitSystem } from '../../ui/unit-system.tsx'
@@ -45,7 +44,7 @@ function ValueLine({ base, fact }: { base: string; fact: Fact }) {
   const conditions = formatConditions(fact.at, system)
   const remove = () => void endFact(fact.id).catch((thrown: unknown) => setError(sentenceOf(thrown)))
   return (
-    <div className="group flex flex-wrap items-baseline justify-between gap-x-3 py-0.5">
+    <div className="flex flex-wrap items-baseline justify-between gap-x-3 py-0.5">
       <span>
         {fact.part !== 'mixed' && <span className="text-pencil">{fact.part}: </span>}
         <OriginValue origin={fact.origin}>{formatValue(fact, system)}</OriginValue>
@@ -57,9 +56,9 @@ function ValueLine({ base, fact }: { base: string; fact: Fact }) {
           <Link to={`${base}/values/${fact.id}`} className="px-1 text-resin hover:underline" aria-label={`Amend ${properties[fact.property].label}`}>
             Amend
           </Link>
-          <Button look="quiet" className="min-h-0 px-1 py-0 font-normal" aria-label={`Remove ${properties[fact.property].label}`} onClick={remove}>
+          <button type="button" className="px-1 text-resin hover:underline" aria-label={`Remove ${properties[fact.property].label}`} onClick={remove}>
             Remove
-          </Button>
+          </button>
         </span>
       )}
     </div>

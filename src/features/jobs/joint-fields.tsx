@@ -23,7 +23,7 @@ export function JointFields({ bay, prefix, fields, disabled, onChange }: JointFi
       ...bay,
       joints: [...bay.joints, { length: { value: 100, unit: 'ft' }, width: { value: 0.1875, unit: 'in' }, depth: { value: 2, unit: 'in' } }],
     })
-  const summary = [bay.joints.length > 0 && `${bay.joints.length} joint sizes`, bay.spalls && 'spalls'].filter(Boolean).join(', ') || 'none surveyed'
+  const summary = [bay.joints.length > 0 && (bay.joints.length === 1 ? 'joints of one size' : `joints of ${bay.joints.length} sizes`), bay.spalls && 'spalls'].filter(Boolean).join(', ') || 'none surveyed'
   return (
     <details className="mt-2">
       <summary className="cursor-pointer text-pencil">Joints and spalls: {summary}</summary>

@@ -43,8 +43,18 @@ export function DetailsForm({ sheet, revisionIds, suggestion, alike = [], beside
   const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const values = new FormData(event.currentTarget)
-    const dates = dated.map(({ id }, index) => ({ revisionId: id, revisionDate: textOf(values.get(`dates.${index}.revisionDate`)) || null }))
-    const body = { version: sheet.version, kind: values.get('kind'), title: values.get('title'), maker, subjects: subjects.map(refOf), dates }
+    const dates = dated.map(({ id }, index) => ({
+      revisionId: id,
+      revisionDate: textOf(values.get(`dates.${index}.revisionDate`)) || null,
+    }))
+    const body = {
+      version: sheet.version,
+      kind: values.get('kind'),
+      title: values.get('title'),
+      maker,
+      subjects: subjects.map(refOf),
+      dates,
+    }
     const saved = await submit(body)
     if (!saved) return
     onSaved(revisionOf ? await move({ revisionId: revisionIds[0], sheetId: revisionOf }) : saved)
@@ -71,15 +81,29 @@ export function DetailsForm({ sheet, revisionIds, suggestion, alike = [], beside
               <option value="safety">Safety sheet</option>
             </SelectField>
             <TextField label="Title" name="title" defaultValue={sheet.title} error={fields['title']} />
-            <TextField label="Maker" name="maker" value={maker} onChange={(event) => setMaker(event.target.value)} error={fields['maker']} />
+            <TextField
+              label="Maker"
+              name="maker"
+              value={maker}
+              onChange={(event) => setMaker(event.target.value)}
+              error={fields['maker']}
+            />
           </>
         )}
         {revisionOf && <KeptValues sheet={sheet} />}
         {dated.map(({ id, fileName, revisionDate }, index) => (
           <TextField
-            key={id} label={dated.length > 1 ? `Revision date of ${fileName}` : 'Revision date'} name={`dates.${index}.revisionDate`}
-            defaultValue={revisionDate ?? suggestion?.revisionDate ?? ''} placeholder="not stated" error={fields[`dates.${index}.revisionDate`]}
-            help={revisionDate === null && suggestion?.revisionDate ? 'Found in the text. Check it on the sheet.' : 'As 2024-03-18, 2024-03 or 2024.'}
+            key={id}
+            label={dated.length > 1 ? `Revision date of ${fileName}` : 'Revision date'}
+            name={`dates.${index}.revisionDate`}
+            defaultValue={revisionDate ?? suggestion?.revisionDate ?? ''}
+            placeholder="not stated"
+            error={fields[`dates.${index}.revisionDate`]}
+            help={
+              revisionDate === null && suggestion?.revisionDate
+                ? 'Found in the text. Check it on the sheet.'
+                : 'As 2024-03-18, 2024-03 or 2024.'
+            }
           />
         ))}
       </div>

@@ -24,7 +24,10 @@ export function FindPanel({ find, onMark }: FindPanelProps) {
   return (
     <search className="block border border-rule bg-card p-3 lg:p-4">
       <TextField
-        label="Search in this sheet" type="search" value={text} onChange={(event) => setText(event.target.value)}
+        label="Search in this sheet"
+        type="search"
+        value={text}
+        onChange={(event) => setText(event.target.value)}
         onKeyDown={(event) => {
           if (event.key !== 'Enter') return
           event.preventDefault()
@@ -35,7 +38,13 @@ export function FindPanel({ find, onMark }: FindPanelProps) {
         <>
           <div className="mt-2 flex items-center justify-between gap-2">
             <span role="status" className="text-pencil">
-              {find.error ? sentenceOf(find.error) : find.pending ? 'Searching …' : hits.length === 0 ? 'Nothing found.' : `${current + 1} of ${hits.length}${find.more ? ' or more' : ''}`}
+              {find.error
+                ? sentenceOf(find.error)
+                : find.pending
+                  ? 'Searching …'
+                  : hits.length === 0
+                    ? 'Nothing found.'
+                    : `${current + 1} of ${hits.length}${find.more ? ' or more' : ''}`}
             </span>
             {hits.length > 0 && (
               <span className="flex gap-1">
@@ -71,7 +80,9 @@ function HitList({ find: { hits, current, goTo } }: { find: Finding }) {
       {hits.map((hit, index) => (
         <li key={index} ref={index === current ? currentItem : undefined}>
           <button
-            type="button" aria-current={index === current || undefined} onClick={() => goTo(index)}
+            type="button"
+            aria-current={index === current || undefined}
+            onClick={() => goTo(index)}
             className={`block w-full border-l-4 px-2 py-1 text-left text-small ${index === current ? 'border-resin bg-resin-wash' : 'border-transparent hover:bg-paper'}`}
           >
             <span className="text-pencil">Page {hit.page}</span> {hit.excerpt}

@@ -15,7 +15,12 @@ interface MarkLayerProps {
 type Point = { x: number; y: number }
 /** Points; with Alt a tenth. */
 const stride = 5
-const arrows: Record<string, Point> = { ArrowLeft: { x: -1, y: 0 }, ArrowRight: { x: 1, y: 0 }, ArrowUp: { x: 0, y: -1 }, ArrowDown: { x: 0, y: 1 } }
+const arrows: Record<string, Point> = {
+  ArrowLeft: { x: -1, y: 0 },
+  ArrowRight: { x: 1, y: 0 },
+  ArrowUp: { x: 0, y: -1 },
+  ArrowDown: { x: 0, y: 1 },
+}
 
 /**
  * Takes a box on the page: drawn with a pointer (sideways first on a touch screen, so that up and down still scroll), by a tap on a word,
@@ -48,8 +53,13 @@ export function MarkLayer({ scale, size, words, box, onBox }: MarkLayerProps) {
   return (
     <>
       <div
-        ref={layer} className="absolute inset-0 cursor-crosshair touch-pan-y" data-mark-layer
-        onPointerDown={start} onPointerMove={(event) => drawing && setDrawing({ ...drawing, to: pointOf(event) })} onPointerUp={end} onPointerCancel={() => setDrawing(undefined)}
+        ref={layer}
+        className="absolute inset-0 cursor-crosshair touch-pan-y"
+        data-mark-layer
+        onPointerDown={start}
+        onPointerMove={(event) => drawing && setDrawing({ ...drawing, to: pointOf(event) })}
+        onPointerUp={end}
+        onPointerCancel={() => setDrawing(undefined)}
       />
       {shown && <MarkedBox box={shown} scale={scale} size={size} onBox={onBox} />}
     </>
@@ -84,9 +94,16 @@ function MarkedBox({ box, scale, size, onBox }: MarkedBoxProps) {
   return (
     // eslint-disable-next-line jsx-a11y/no-noninteractive-element-interactions -- a two-dimensional control has no native element; the label says its keys
     <div
-      ref={element} id="marked-box" role="application" aria-roledescription="marked place" aria-label={`Marked place at ${where} points. Arrow keys move it, with Shift they size it, with Alt in fine steps.`}
+      ref={element}
+      id="marked-box"
+      role="application"
+      aria-roledescription="marked place"
+      aria-label={`Marked place at ${where} points. Arrow keys move it, with Shift they size it, with Alt in fine steps.`}
       // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- as above
-      tabIndex={0} onKeyDown={onKey} data-box={box.join()} className="pointer-events-none absolute border-2 border-resin bg-resin-wash/60 mix-blend-multiply"
+      tabIndex={0}
+      onKeyDown={onKey}
+      data-box={box.join()}
+      className="pointer-events-none absolute border-2 border-resin bg-resin-wash/60 mix-blend-multiply"
       style={placed(box, scale)}
     />
   )

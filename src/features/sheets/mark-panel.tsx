@@ -20,7 +20,8 @@ interface MarkPanelProps {
 /** Beside the page while a place is marked: the words in the box, and the way back with it. */
 export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo }: MarkPanelProps) {
   const navigate = useNavigate()
-  if (!ownPage(returnTo)) return <Notice tone="stop">The page that asked for this place cannot be gone back to. Open the form again and mark from there.</Notice>
+  if (!ownPage(returnTo))
+    return <Notice tone="stop">The page that asked for this place cannot be gone back to. Open the form again and mark from there.</Notice>
   const placeBox = () => {
     if (size) onBox([size.width * 0.3, size.height * 0.3, size.width * 0.7, size.height * 0.33])
     // The box is there after the next drawing of the page.
@@ -34,7 +35,7 @@ export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo 
         <Quote
           key={`${page} ${box.join()}`}
           words={quoteOf(words, box)}
-          onUse={(quote) => void navigate(backWith(returnTo, { revisionId, page, box, quote }) ?? '/')}
+          onUse={(quote) => void navigate(backWith(returnTo, { revisionId, page, box, quote }) ?? '/', { replace: true })}
         />
       ) : (
         <Button disabled={!size} onClick={placeBox}>
@@ -44,7 +45,7 @@ export function MarkPanel({ revisionId, page, size, words, box, onBox, returnTo 
       <p className="mt-3 text-small text-pencil max-lg:hidden">
         By keyboard: arrow keys move the box, Shift and arrow keys size it, with Alt in fine steps. A hit of the search can be marked, too.
       </p>
-      <Button look="quiet" className="mt-2 -ml-3" onClick={() => void navigate(returnTo)}>
+      <Button look="quiet" className="mt-2 -ml-3" onClick={() => void navigate(returnTo, { replace: true })}>
         Go back without a place
       </Button>
     </section>
@@ -62,8 +63,17 @@ function Quote({ words, onUse }: { words: string; onUse: (quote: string) => void
   return (
     <>
       <AreaField
-        label="The sheet’s words" rows={2} maxLength={500} value={quote} onChange={(event) => setQuote(event.target.value)} error={error}
-        help={words === '' ? 'There is no text in this box. Write what stands there.' : 'As they stand in the box. Put right what was read wrongly.'}
+        label="The sheet’s words"
+        rows={2}
+        maxLength={500}
+        value={quote}
+        onChange={(event) => setQuote(event.target.value)}
+        error={error}
+        help={
+          words === ''
+            ? 'There is no text in this box. Write what stands there.'
+            : 'As they stand in the box. Put right what was read wrongly.'
+        }
       />
       <Button look="primary" className="mt-2" onClick={use}>
         Use this place

@@ -82,8 +82,10 @@ function Pages({ revision, file: { pdf, error } }: { revision: Revision; file: F
   const { ref, width } = useWidth()
   const find = useFind(revision.id)
   const words = useQuery({ ...pageWordsOptions(revision.id, page), enabled: marking })
-  const hits = find.hits.flatMap((hit, index) => (hit.page === page ? [{ boxes: hit.boxes, current: index === find.current && !cited }] : []))
   const marked = mark?.page === page ? mark.box : undefined
+  const hits = find.hits.flatMap((hit, index) =>
+    hit.page === page ? [{ boxes: hit.boxes, current: index === find.current && !cited && !marked }] : [],
+  )
   const setBox = useCallback((box: Box) => setMark({ page, box }), [page])
   const currentHit = find.hits[find.current]
   const markHit = () => {
@@ -97,26 +99,47 @@ function Pages({ revision, file: { pdf, error } }: { revision: Revision; file: F
       <div className="min-w-0 max-lg:order-2">
         <ViewToolbar page={page} pages={revision.pages} onPage={goTo} zoom={zoom} onZoom={setZoom} />
         {/* eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls must be reachable by keyboard */}
-        <div ref={ref} className="mt-3 overflow-x-auto" tabIndex={0} role="region" data-wide={zoom > 1 || undefined} aria-label={`Page ${page} of ${revision.pages}`}>
+        <div
+          ref={ref}
+          className="mt-3 overflow-x-auto"
+          tabIndex={0}
+          role="region"
+          data-wide={zoom > 1 || undefined}
+          aria-label={`Page ${page} of ${revision.pages}`}
+        >
           {error !== undefined && <Notice tone="stop">The PDF could not be fetched. Load the page again, or download the file.</Notice>}
           {pdf && width > 0 && (
             <PdfPage pdf={pdf} page={page} fitWidth={width} zoom={zoom}>
               {(scale) => (
                 <>
                   <PageBoxes scale={scale} cited={cited} hits={hits} />
-                  {marking && words.data && <MarkLayer scale={scale} size={words.data} words={words.data.words} box={marked} onBox={setBox} />}
+                  {marking && words.data && (
+                    <MarkLayer scale={scale} size={words.data} words={words.data.words} box={marked} onBox={setBox} />
+                  )}
                 </>
               )}
             </PdfPage>
           )}
-          {!pdf && error === undefined && <p role="status" className="min-h-[70vh] p-4 text-pencil">Loading the PDF …</p>}
+          {!pdf && error === undefined && (
+            <p role="status" className="min-h-[70vh] p-4 text-pencil">
+              Loading the PDF …
+            </p>
+          )}
         </div>
       </div>
       {/* One column on a phone: search, page, and the mark's panel at the foot of the screen. */}
       <div className="flex flex-col gap-4 max-lg:contents lg:sticky lg:top-3">
         {marking && (
           <div className="max-lg:sticky max-lg:bottom-0 max-lg:z-10 max-lg:order-3">
-            <MarkPanel revisionId={revision.id} page={page} size={words.data} words={words.data?.words ?? []} box={marked} onBox={setBox} returnTo={returnTo} />
+            <MarkPanel
+              revisionId={revision.id}
+              page={page}
+              size={words.data}
+              words={words.data?.words ?? []}
+              box={marked}
+              onBox={setBox}
+              returnTo={returnTo}
+            />
           </div>
         )}
         {revision.state === 'ready' && (
@@ -150,7 +173,9 @@ function useViewAddress(pages: number) {
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
       const by = event.key === 'ArrowRight' ? 1 : event.key === 'ArrowLeft' ? -1 : 0
-      const elsewhere = (event.target as HTMLElement).closest('input, textarea, select, [contenteditable], [role="application"], [data-wide]')
+      const elsewhere = (event.target as HTMLElement).closest(
+        'input, textarea, select, [contenteditable], [role="application"], [data-wide]',
+      )
       if (by === 0 || elsewhere || event.ctrlKey || event.metaKey || event.altKey || event.shiftKey) return
       if (page + by >= 1 && page + by <= pages) {
         event.preventDefault()

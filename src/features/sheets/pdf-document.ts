@@ -31,8 +31,18 @@ function openPdf(revisionId: string): PDFDocumentLoadingTask {
   const task =
     before ??
     getDocument({
-      url: fileAddress(revisionId), worker, isEvalSupported: false, enableXfa: false, disableAutoFetch: true, useWorkerFetch: false, verbosity: 0,
-      BinaryDataFactory: OwnFiles, cMapUrl: 'own/', standardFontDataUrl: 'own/', wasmUrl: 'own/', cMapPacked: true,
+      url: fileAddress(revisionId),
+      worker,
+      isEvalSupported: false,
+      enableXfa: false,
+      disableAutoFetch: true,
+      useWorkerFetch: false,
+      verbosity: 0,
+      BinaryDataFactory: OwnFiles,
+      cMapUrl: 'own/',
+      standardFontDataUrl: 'own/',
+      wasmUrl: 'own/',
+      cMapPacked: true,
     })
   open.set(revisionId, task)
   const [oldest] = open

@@ -1,5 +1,9 @@
 const cMaps = import.meta.glob<string>('/node_modules/pdfjs-dist/cmaps/*.bcmap', { query: '?url', import: 'default', eager: true })
-const fonts = import.meta.glob<string>('/node_modules/pdfjs-dist/standard_fonts/*.{pfb,ttf}', { query: '?url', import: 'default', eager: true })
+const fonts = import.meta.glob<string>('/node_modules/pdfjs-dist/standard_fonts/*.{pfb,ttf}', {
+  query: '?url',
+  import: 'default',
+  eager: true,
+})
 const decoders = import.meta.glob<string>('/node_modules/pdfjs-dist/wasm/*.wasm', { query: '?url', import: 'default', eager: true })
 const profiles = import.meta.glob<string>('/node_modules/pdfjs-dist/iccs/*.icc', { query: '?url', import: 'default', eager: true })
 

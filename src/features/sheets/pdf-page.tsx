@@ -21,7 +21,12 @@ export function PdfPage({ pdf, page: number, fitWidth, zoom, children }: PdfPage
   const size = page?.getViewport({ scale: 1 })
   const scale = size ? (fitWidth / size.width) * zoom : 1
   if (error) return <p className="p-4 text-stop">This page cannot be shown. The file can still be downloaded.</p>
-  if (!page || !size) return <p role="status" className="min-h-[70vh] p-4 text-pencil">Loading the page …</p>
+  if (!page || !size)
+    return (
+      <p role="status" className="min-h-[70vh] p-4 text-pencil">
+        Loading the page …
+      </p>
+    )
   const width = size.width * scale
   const height = size.height * scale
   const style = { width, height, '--total-scale-factor': scale, '--scale-round-x': '1px', '--scale-round-y': '1px' } as CSSProperties

@@ -16,7 +16,11 @@ const keys = {
 export type SheetsWanted = z.input<typeof wire.listSheets.query>
 
 export function useSheets(query: SheetsWanted) {
-  return useQuery({ queryKey: [...keys.list, query], queryFn: ({ signal }) => call(wire.listSheets, { query, signal }), placeholderData: keepPreviousData })
+  return useQuery({
+    queryKey: [...keys.list, query],
+    queryFn: ({ signal }) => call(wire.listSheets, { query, signal }),
+    placeholderData: keepPreviousData,
+  })
 }
 
 export function useSheet(sheetId: string) {
@@ -24,7 +28,10 @@ export function useSheet(sheetId: string) {
 }
 
 export function useRevision(revisionId: string) {
-  return useQuery({ queryKey: keys.revision(revisionId), queryFn: ({ signal }) => call(wire.readRevision, { params: { revisionId }, signal }) })
+  return useQuery({
+    queryKey: keys.revision(revisionId),
+    queryFn: ({ signal }) => call(wire.readRevision, { params: { revisionId }, signal }),
+  })
 }
 
 /** Words of a page never change, so they are asked for once. */
@@ -48,7 +55,10 @@ export function useHits(revisionId: string, q: string) {
 
 export function useSubjectChoices(q: string, enabled: boolean) {
   return useQuery({
-    queryKey: keys.subjects(q), queryFn: ({ signal }) => call(wire.listSubjects, { query: { q }, signal }), enabled, placeholderData: keepPreviousData,
+    queryKey: keys.subjects(q),
+    queryFn: ({ signal }) => call(wire.listSubjects, { query: { q }, signal }),
+    enabled,
+    placeholderData: keepPreviousData,
   })
 }
 
@@ -62,7 +72,10 @@ export function useSheetChanges() {
   const client = useQueryClient()
   const keep = async (sheet: Sheet) => {
     client.setQueryData(keys.one(sheet.id), sheet)
-    await client.invalidateQueries({ queryKey: keys.all, predicate: (query) => query.queryKey[1] === 'list' || query.queryKey[1] === 'revision' })
+    // Records of products and mixes name their sheets, too; words and hits of a page never change.
+    await client.invalidateQueries({
+      predicate: ({ queryKey: [feature, what] }) => feature !== 'sheets' || what === 'list' || what === 'revision',
+    })
     return sheet
   }
   const change = async ({ sheetId, ...body }: { sheetId: string } & z.input<typeof wire.changeSheet.body>) =>

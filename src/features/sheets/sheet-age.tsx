@@ -19,7 +19,8 @@ export function SheetAge({ kind, revisionDate, superseded }: { kind: SheetKind; 
   const beyond = kind === 'safety' && !superseded && limit !== undefined && age > limit
   return (
     <span className="whitespace-nowrap">
-      {writtenDate(revisionDate)}, <span className={beyond ? 'font-semibold text-caution' : 'text-pencil'}>
+      {writtenDate(revisionDate)},{' '}
+      <span className={beyond ? 'font-semibold text-caution' : 'text-pencil'}>
         {beyond && <span aria-hidden="true">▲ </span>}
         {ageText(age)}
         {beyond && ` (over ${limit})`}

@@ -52,7 +52,9 @@ function SheetRecord({ sheet }: { sheet: Sheet }) {
           <Card title="Edit" actions={<Button onClick={() => setEditing(false)}>Cancel</Button>}>
             <div className="p-4">
               <DetailsForm
-                key={sheet.version} sheet={sheet} revisionIds={[inForce.id, ...sheet.revisions.slice(1).map((revision) => revision.id)]}
+                key={sheet.version}
+                sheet={sheet}
+                revisionIds={[inForce.id, ...sheet.revisions.slice(1).map((revision) => revision.id)]}
                 onSaved={() => setEditing(false)}
               />
             </div>
@@ -76,13 +78,21 @@ function SheetRecord({ sheet }: { sheet: Sheet }) {
 
 function SubjectList({ sheet }: { sheet: Sheet }) {
   const mayOpen = useCan('catalogue:read')
-  if (sheet.subjects.length === 0) return <p className="px-4 py-3 text-pencil">No product or mix yet. Values can be tied to this sheet once it is attached to what it speaks of.</p>
+  if (sheet.subjects.length === 0)
+    return (
+      <p className="px-4 py-3 text-pencil">
+        No product or mix yet. Values can be tied to this sheet once it is attached to what it speaks of.
+      </p>
+    )
   return (
     <ul className="px-4 py-2">
       {sheet.subjects.map((subject) => (
         <li key={subject.id} className="py-1">
           {mayOpen ? (
-            <Link className="text-resin underline-offset-4 hover:underline" to={subject.kind === 'product' ? paths.product(subject.id) : paths.mix(subject.id)}>
+            <Link
+              className="text-resin underline-offset-4 hover:underline"
+              to={subject.kind === 'product' ? paths.product(subject.id) : paths.mix(subject.id)}
+            >
               {subject.name}
             </Link>
           ) : (
@@ -113,7 +123,8 @@ function RevisionItem({ sheet, revision }: { sheet: Sheet; revision: Revision })
           </span>
         </p>
         <p className="break-all text-pencil">
-          {revision.fileName}, {revision.pages} {revision.pages === 1 ? 'page' : 'pages'}, {sizeOf(revision.bytes)}, uploaded {uploaded} by {revision.uploadedByName ?? 'Wearcourse'}
+          {revision.fileName}, {revision.pages} {revision.pages === 1 ? 'page' : 'pages'}, {sizeOf(revision.bytes)}, uploaded {uploaded} by{' '}
+          {revision.uploadedByName ?? 'Wearcourse'}
         </p>
         {revision.state === 'no-text' && <NoText />}
         {revision.suggestedDate && <ConfirmDate sheet={sheet} revision={revision} date={revision.suggestedDate} />}
@@ -131,7 +142,15 @@ function ConfirmDate({ sheet, revision, date }: { sheet: Sheet; revision: Revisi
   const mayChange = useCan('sheet:write')
   const { id, version, kind, title, maker, subjects } = sheet
   const confirm = () =>
-    confirmDate.mutate({ sheetId: id, version, kind, title, maker, subjects: subjects.map(refOf), dates: [{ revisionId: revision.id, revisionDate: date }] })
+    confirmDate.mutate({
+      sheetId: id,
+      version,
+      kind,
+      title,
+      maker,
+      subjects: subjects.map(refOf),
+      dates: [{ revisionId: revision.id, revisionDate: date }],
+    })
   return (
     <p className="mt-1 flex flex-wrap items-center gap-2">
       The text seems to give {writtenDate(date)}; nobody has confirmed it.
@@ -149,7 +168,11 @@ function NewRevision({ sheet }: { sheet: Sheet }) {
   const { uploads, add } = useUploads(sheet.id)
   return (
     <>
-      <DropArea label="Add a revision" help="or drop the new PDF here. The latest date is in force, whatever the order of upload." onFiles={add} />
+      <DropArea
+        label="Add a revision"
+        help="or drop the new PDF here. The latest date is in force, whatever the order of upload."
+        onFiles={add}
+      />
       <UploadList uploads={uploads} />
     </>
   )

@@ -52,7 +52,11 @@ function Filters({ address }: { address: ListAddress }) {
   return (
     <div className="grid gap-3 border-b border-rule p-4 sm:grid-cols-2 lg:grid-cols-[2fr_1fr_1fr_1fr]">
       <TextField
-        label="Search" type="search" placeholder="Title, maker or file name" defaultValue={address.q} onChange={(event) => address.set({ q: event.target.value })}
+        label="Search"
+        type="search"
+        placeholder="Title, maker or file name"
+        defaultValue={address.q}
+        onChange={(event) => address.set({ q: event.target.value })}
       />
       <SelectField label="Kind" value={address.filter('kind')} onChange={(event) => address.set({ kind: event.target.value })}>
         <option value="">All</option>
@@ -80,21 +84,43 @@ function SheetsTable({ page, address, stale }: { page: ListPage<SheetRow>; addre
       { id: 'title', accessorKey: 'title', header: 'Sheet', cell: ({ row }) => <SheetTitle sheet={row.original} /> },
       { id: 'revisionDate', accessorKey: 'revisionDate', header: 'Revision, age', cell: ({ row }) => <SheetAge {...row.original} /> },
       { id: 'kind', header: 'Kind', enableSorting: false, accessorFn: (row) => (row.kind === 'data' ? 'data' : 'safety') },
-      { id: 'maker', accessorKey: 'maker', header: 'Maker', cell: ({ row }) => row.original.maker || <span className="text-pencil">not given</span> },
+      {
+        id: 'maker',
+        accessorKey: 'maker',
+        header: 'Maker',
+        cell: ({ row }) => row.original.maker || <span className="text-pencil">not given</span>,
+      },
       { id: 'subjects', header: 'Speaks of', enableSorting: false, cell: ({ row }) => <Subjects names={row.original.subjects} /> },
       { id: 'pages', accessorKey: 'pages', header: 'Pages', meta: { numeric: true }, cell: ({ row }) => <OpenPdf sheet={row.original} /> },
-      { id: 'uploadedAt', accessorKey: 'uploadedAt', header: 'Uploaded', cell: ({ row }) => <time dateTime={row.original.uploadedAt}>{dayOf(row.original.uploadedAt)}</time> },
+      {
+        id: 'uploadedAt',
+        accessorKey: 'uploadedAt',
+        header: 'Uploaded',
+        cell: ({ row }) => <time dateTime={row.original.uploadedAt}>{dayOf(row.original.uploadedAt)}</time>,
+      },
     ],
     [],
   )
   if (page.items.length === 0) {
     const narrowed = address.q !== '' || filters.some((name) => address.filter(name) !== '')
-    return <Notice>{narrowed ? 'No sheet matches. Take a filter off or search for fewer words.' : 'There are no sheets yet. Upload the PDFs of the makers to begin.'}</Notice>
+    return (
+      <Notice>
+        {narrowed
+          ? 'No sheet matches. Take a filter off or search for fewer words.'
+          : 'There are no sheets yet. Upload the PDFs of the makers to begin.'}
+      </Notice>
+    )
   }
   return (
     <ListTable
-      caption="Sheets" columns={columns} page={page} sort={address.sort} stale={stale} rowKey={(row) => row.revisionId}
-      onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+      caption="Sheets"
+      columns={columns}
+      page={page}
+      sort={address.sort}
+      stale={stale}
+      rowKey={(row) => row.revisionId}
+      onSort={(sort) => address.set({ sort })}
+      onCursor={(cursor) => address.set({ cursor })}
     />
   )
 }
@@ -121,7 +147,11 @@ function Subjects({ names }: { names: string[] }) {
 
 function OpenPdf({ sheet }: { sheet: SheetRow }) {
   return (
-    <Link className="text-resin underline-offset-4 hover:underline" aria-label={`Open ${sheet.title}, ${sheet.pages} ${sheet.pages === 1 ? 'page' : 'pages'}`} to={paths.sheetPage(sheet.revisionId)}>
+    <Link
+      className="text-resin underline-offset-4 hover:underline"
+      aria-label={`Open ${sheet.title}, ${sheet.pages} ${sheet.pages === 1 ? 'page' : 'pages'}`}
+      to={paths.sheetPage(sheet.revisionId)}
+    >
       {sheet.pages}
     </Link>
   )

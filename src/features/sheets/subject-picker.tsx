@@ -25,6 +25,7 @@ export function SubjectPicker({ value, onChange, error }: SubjectPickerProps) {
     onChange([...value, choice])
     setQ('')
     setActive(0)
+    setOpen(false)
   }
   const onKey = (event: React.KeyboardEvent) => {
     if (event.key === 'ArrowDown' || event.key === 'ArrowUp') {
@@ -50,7 +51,9 @@ export function SubjectPicker({ value, onChange, error }: SubjectPickerProps) {
             <li key={subject.id} className="flex items-center gap-1 border border-rule bg-paper pl-2">
               {subject.name} <span className="text-pencil">{subject.kind}</span>
               <button
-                type="button" className="min-h-8 min-w-8 text-pencil hover:text-stop" aria-label={`Take ${subject.name} off`}
+                type="button"
+                className="min-h-8 min-w-8 text-pencil hover:text-stop"
+                aria-label={`Take ${subject.name} off`}
                 onClick={() => onChange(value.filter((one) => one.id !== subject.id))}
               >
                 ✕
@@ -61,22 +64,41 @@ export function SubjectPicker({ value, onChange, error }: SubjectPickerProps) {
       )}
       <div className="relative">
         <input
-          id={id} name="subjects" role="combobox" aria-expanded={open} aria-controls={`${id}-list`} aria-autocomplete="list" autoComplete="off"
-          aria-activedescendant={open && current ? `${id}-${current.id}` : undefined} aria-describedby={error ? `${id}-error` : undefined}
-          placeholder="Search by name or maker" value={q}
+          id={id}
+          name="subjects"
+          role="combobox"
+          aria-expanded={open}
+          aria-controls={`${id}-list`}
+          aria-autocomplete="list"
+          autoComplete="off"
+          aria-activedescendant={open && current ? `${id}-${current.id}` : undefined}
+          aria-describedby={error ? `${id}-error` : undefined}
+          placeholder="Search by name or maker"
+          value={q}
           className={`min-h-9 w-full border bg-card px-2 py-1 placeholder:text-pencil ${error ? 'border-2 border-stop' : 'border-pencil'}`}
           onChange={(event) => {
             setQ(event.target.value)
             setActive(0)
             setOpen(true)
           }}
-          onFocus={() => setOpen(true)} onBlur={() => setOpen(false)} onKeyDown={onKey}
+          onFocus={() => setOpen(true)}
+          onClick={() => setOpen(true)}
+          onBlur={() => setOpen(false)}
+          onKeyDown={onKey}
         />
         {open && (
-          <ul id={`${id}-list`} role="listbox" aria-label="Products and mixes" className="absolute z-20 max-h-64 w-full overflow-y-auto border border-ink bg-card">
+          <ul
+            id={`${id}-list`}
+            role="listbox"
+            aria-label="Products and mixes"
+            className="absolute z-20 max-h-64 w-full overflow-y-auto border border-ink bg-card"
+          >
             {offered.map((choice) => (
               <li
-                key={choice.id} id={`${id}-${choice.id}`} role="option" aria-selected={choice === current}
+                key={choice.id}
+                id={`${id}-${choice.id}`}
+                role="option"
+                aria-selected={choice === current}
                 className={`flex min-h-9 cursor-pointer items-center justify-between gap-3 px-2 py-1 ${choice === current ? 'bg-resin-wash' : ''}`}
                 onPointerDown={(event) => {
                   event.preventDefault()
@@ -89,7 +111,11 @@ export function SubjectPicker({ value, onChange, error }: SubjectPickerProps) {
                 <span className="text-pencil">{choice.kind}</span>
               </li>
             ))}
-            {offered.length === 0 && <li className="px-2 py-2 text-pencil">{choices.isPending ? 'Searching …' : 'No product or mix of this name. It can be attached later.'}</li>}
+            {offered.length === 0 && (
+              <li className="px-2 py-2 text-pencil">
+                {choices.isPending ? 'Searching …' : 'No product or mix of this name. It can be attached later.'}
+              </li>
+            )}
           </ul>
         )}
       </div>

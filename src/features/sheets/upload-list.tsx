@@ -30,7 +30,9 @@ export function UploadList({ uploads }: { uploads: Upload[] }) {
         </p>
         <span className="flex flex-wrap gap-2">
           {unchecked.length > 1 && <Button onClick={saveAll}>Save all {unchecked.length} as shown</Button>}
-          {finished.length > 1 && <Button onClick={() => finished.forEach((upload) => uploadQueue.remove(upload.id))}>Clear those done</Button>}
+          {finished.length > 1 && (
+            <Button onClick={() => finished.forEach((upload) => uploadQueue.remove(upload.id))}>Clear those done</Button>
+          )}
         </span>
       </div>
       <ul>
@@ -57,14 +59,24 @@ function UploadRow({ upload }: { upload: Upload }) {
           {state.step === 'reading' && <span className="text-pencil">Reading the pages …</span>}
           {failed && state.canRetry && <Button onClick={() => uploadQueue.retry(upload.id)}>Send again</Button>}
           {(failed || state.step === 'done') && (
-            <button type="button" className="min-h-8 min-w-8 text-pencil hover:text-ink" aria-label={`Take ${file.name} off this list`} onClick={() => uploadQueue.remove(upload.id)}>
+            <button
+              type="button"
+              className="min-h-8 min-w-8 text-pencil hover:text-ink"
+              aria-label={`Take ${file.name} off this list`}
+              onClick={() => uploadQueue.remove(upload.id)}
+            >
               ✕
             </button>
           )}
         </span>
       </div>
       {(state.step === 'sending' || state.step === 'reading') && (
-        <progress className="mt-1 h-1.5 w-full accent-resin" aria-label={`Progress of ${file.name}`} max={1} {...(state.step === 'sending' ? { value: state.sent } : {})} />
+        <progress
+          className="mt-1 h-1.5 w-full accent-resin"
+          aria-label={`Progress of ${file.name}`}
+          max={1}
+          {...(state.step === 'sending' ? { value: state.sent } : {})}
+        />
       )}
       {failed && (
         <p role="alert" className="mt-1 text-stop">
@@ -120,9 +132,17 @@ function Added({ result, saved, onSaved }: OutcomeProps<Extract<UploadedFile, { 
   return (
     <>
       <p className="mt-1 mb-2 text-pencil">
-        Kept, {revision?.pages} {revision?.pages === 1 ? 'page' : 'pages'}. {revision?.state === 'no-text' ? <NoText /> : 'Check what the text suggests.'}
+        Kept, {revision?.pages} {revision?.pages === 1 ? 'page' : 'pages'}.{' '}
+        {revision?.state === 'no-text' ? <NoText /> : 'Check what the text suggests.'}
       </p>
-      <DetailsForm sheet={result.sheet} revisionIds={[result.revisionId]} suggestion={result.suggestion} alike={result.alike} onSaved={onSaved} beside={open} />
+      <DetailsForm
+        sheet={result.sheet}
+        revisionIds={[result.revisionId]}
+        suggestion={result.suggestion}
+        alike={result.alike}
+        onSaved={onSaved}
+        beside={open}
+      />
     </>
   )
 }

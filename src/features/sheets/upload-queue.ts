@@ -106,7 +106,9 @@ async function settle(request: XMLHttpRequest): Promise<UploadState> {
   }
   const parsed = sheetEndpoints.uploadSheets.response.safeParse(await json().catch(() => undefined))
   const [result] = parsed.success ? parsed.data.files : []
-  return result ? { step: 'done', result } : { step: 'failed', message: 'The answer of the server could not be read. Look in the list before you send it again.', canRetry: true }
+  return result
+    ? { step: 'done', result }
+    : { step: 'failed', message: 'The answer of the server could not be read. Look in the list before you send it again.', canRetry: true }
 }
 
 export const uploadQueue = new UploadQueue()

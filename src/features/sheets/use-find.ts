@@ -52,7 +52,14 @@ export function useFind(revisionId: string): Finding {
     )
   }
   return {
-    q, setQ, hits, more: query.data?.more ?? false, current, goTo, pending: query.isFetching, error: query.error,
+    q,
+    setQ,
+    hits,
+    more: query.data?.more ?? false,
+    current,
+    goTo,
+    pending: query.isFetching,
+    error: query.error,
     // The first step after a search goes to the first hit, wherever the page stands.
     step: (by) => goTo(search.has('hit') ? (current + by + hits.length) % hits.length : by === 1 ? 0 : hits.length - 1),
   }

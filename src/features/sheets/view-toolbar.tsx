@@ -15,7 +15,11 @@ const zooms = [0.5, 0.75, 1, 1.25, 1.5, 2, 3]
 export function ViewToolbar({ page, pages, onPage, zoom, onZoom }: ViewToolbarProps) {
   const at = zooms.indexOf(zoom)
   return (
-    <div role="toolbar" aria-label="Page and size" className="sticky top-0 z-10 flex flex-wrap items-center gap-x-2 gap-y-2 border border-rule bg-card px-2 py-2 sm:gap-x-4 sm:px-3">
+    <div
+      role="toolbar"
+      aria-label="Page and size"
+      className="sticky top-0 z-10 flex flex-wrap items-center gap-x-2 gap-y-2 border border-rule bg-card px-2 py-2 sm:gap-x-4 sm:px-3"
+    >
       <span className="flex items-center gap-1">
         <Button aria-label="Previous page" disabled={page <= 1} onClick={() => onPage(page - 1)}>
           ←
@@ -57,7 +61,10 @@ function PageJump({ page, pages, onPage }: Pick<ViewToolbarProps, 'page' | 'page
       <label>
         <span className="sr-only">Page</span>
         <input
-          inputMode="numeric" value={text} onChange={(event) => setText(event.target.value)} onBlur={jump}
+          inputMode="numeric"
+          value={text}
+          onChange={(event) => setText(event.target.value)}
+          onBlur={jump}
           className="min-h-9 w-12 border border-pencil bg-card px-2 py-1 text-right"
         />
       </label>

@@ -8,7 +8,7 @@ export function BigFigure({ figure, large = true }: { figure: Figure; large?: bo
   const [, number = '', unit = ''] = /^(.*?\d)\s*([^\d]*)$/.exec(formatRange(figure.value)) ?? [undefined, formatFigure(figure), '']
   const shown = (
     <>
-      <span className={large ? 'text-card-figure font-bold' : 'font-semibold'}>{number}</span> {unit}
+      <span className={large ? 'text-site-figure font-bold' : 'font-semibold'}>{number}</span> {unit}
     </>
   )
   return figure.kind === 'fact' && figure.origin.kind === 'stated' ? <CitationLink citation={figure.origin.citation}>{shown}</CitationLink> : <span>{shown}</span>

@@ -23,7 +23,7 @@ export function CardScreen({ card }: { card: SiteCard }) {
     document.title = `${card.name} · site card · Wearcourse`
   }, [card.name])
   return (
-    <main id="main" className="mx-auto max-w-xl bg-card pb-28 text-card">
+    <main id="main" className="mx-auto max-w-xl bg-card pb-28 text-site">
       <header className="border-b-2 border-ink px-4 py-3">
         <h1 className="text-[22px] leading-7">{card.name}</h1>
         <p className="text-body text-[#3c4649]">

@@ -70,7 +70,7 @@ function PailClock({ potLife, mixed, onMixed }: { potLife: Figure; mixed: number
       <p className="text-body">A full pail is shorter than the sheet’s small mass. Pour at once and spread.</p>
       {left !== undefined && (
         <p role="timer" className={`mt-1 ${over ? 'text-stop' : ''}`}>
-          <span className="text-card-figure font-bold">{minutesAndSeconds(left)}</span> {over ? '■ Time is over. Do not use this pail.' : 'left in the pail'}
+          <span className="text-site-figure font-bold">{minutesAndSeconds(left)}</span> {over ? '■ Time is over. Do not use this pail.' : 'left in the pail'}
         </p>
       )}
       <div className="mt-2 grid grid-cols-2 gap-3">
@@ -101,9 +101,9 @@ function WindowClock({ window: figure, laid, onLaid, zone }: { window: Figure; l
       )}
       {times && (
         <p className="mt-1">
-          From <strong className="text-card-figure">{times.opens?.text ?? 'not stated'}</strong>
+          From <strong className="text-site-figure">{times.opens?.text ?? 'not stated'}</strong>
           <span className="block">
-            until <strong className="text-card-figure">{times.closes?.text ?? 'not stated'}</strong>
+            until <strong className="text-site-figure">{times.closes?.text ?? 'not stated'}</strong>
           </span>
         </p>
       )}

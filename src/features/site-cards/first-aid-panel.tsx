@@ -18,17 +18,17 @@ export function FirstAidPanel({ hazards, firm }: { hazards: HazardSummary | null
         const lines = aid.filter(({ code }) => codes.test(code))
         return (
           <div key={name} className="border-b border-ink pb-3">
-            <h2 className="text-card font-bold">{name}</h2>
+            <h2 className="text-site font-bold">{name}</h2>
             {lines.length === 0 ? <p>Not stated as a statement on the loaded safety sheets. Open section 4 of the sheet.</p> : lines.map(({ code, text }) => <p key={code}>{text}</p>)}
           </div>
         )
       })}
       <div className="border-2 border-stop p-3">
-        <h2 className="text-card font-bold">Hot or smoking pail</h2>
+        <h2 className="text-site font-bold">Hot or smoking pail</h2>
         <p>Keep clear, fume is toxic. Do not cap it, do not put it in a bin, no water into it. Get it outside only if that is without danger; trained and protected people pour in dry sand. Never mix leftovers.</p>
       </div>
       <div>
-        <h2 className="text-card font-bold">Call</h2>
+        <h2 className="text-site font-bold">Call</h2>
         <p>The emergency number of the place first.</p>
         {hazards?.emergencyPhones.map(({ text, from }) => (
           <CallLink key={`${from} ${text}`} phone={text} who={from} />

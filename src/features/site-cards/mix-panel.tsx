@@ -33,7 +33,7 @@ export function MixPanel({ course, mix, result, bay }: MixPanelProps) {
   const allowed = partKits === 'allowed' ? share : 1
   return (
     <section aria-label="This pail">
-      <h2 className="text-card">{mix.name}</h2>
+      <h2 className="text-site">{mix.name}</h2>
       <Ratio mix={mix} result={result} />
       {packs.length > 1 && (
         <div className="my-3 grid grid-cols-2 gap-3">

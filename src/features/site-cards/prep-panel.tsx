@@ -10,7 +10,7 @@ export function PrepPanel({ course }: { course: Course }) {
           <span className="block text-body">Method</span>
           <strong>{preparation.method}</strong>
           <span className="mt-2 block text-body">Profile</span>
-          <strong className="text-card-figure">{preparation.profile === undefined ? 'not stated' : `CSP ${preparation.profile}`}</strong>
+          <strong className="text-site-figure">{preparation.profile === undefined ? 'not stated' : `CSP ${preparation.profile}`}</strong>
           <span className="block text-body">Compare with the profile chips in hand, edges too.</span>
         </p>
       ) : (

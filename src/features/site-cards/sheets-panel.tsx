@@ -17,7 +17,7 @@ export function SheetsPanel({ course, input }: { course: Course; input: Evaluati
         <Link key={sheet.revisionId} to={paths.sheetPage(sheet.revisionId)} className="flex min-h-[64px] flex-col justify-center rounded-touch border-2 border-ink px-4 py-2">
           <span className="font-semibold">{sheet.title}</span>
           <span className="text-body">
-            {kinds[sheet.kind]}, {sheet.revisionDate ?? 'no date stated'}, {sheet.pages} pages
+            {kinds[sheet.kind]}, {sheet.revisionDate ?? 'no date stated'}, {sheet.pages === 1 ? 'one page' : `${sheet.pages} pages`}
           </span>
         </Link>
       ))}

@@ -13,7 +13,7 @@ export function SiteCardsPage() {
   const cards = useSiteCards(q)
   return (
     <Page title="Site cards">
-      <div className="max-w-xl text-card">
+      <div className="max-w-xl text-site">
         {(q !== '' || (cards.data?.total ?? 0) > 8) && <TextField label="Search" type="search" value={q} onChange={(event) => setQ(event.target.value)} className="mb-4" />}
         <Asking query={cards} says={sentenceOf}>
           {({ items }) =>

@@ -12,7 +12,7 @@ export function TemperatureStepper({ value, onChange }: { value: Quantity; onCha
       </TouchButton>
       <p className="text-center" aria-live="polite">
         <span className="block text-body">Slab, as measured</span>
-        <span className="text-card-figure font-bold">
+        <span className="text-site-figure font-bold">
           {formatNumber(value.value, 1)} {unitText(value.unit)}
         </span>
       </p>

@@ -5,7 +5,7 @@ export function TouchButton({ strong = false, className = '', type = 'button', .
   return (
     <button
       {...rest} type={type}
-      className={`min-h-[64px] rounded-touch border-2 border-ink px-4 text-card font-semibold disabled:opacity-40 ${strong ? 'bg-ink text-white' : 'bg-card text-ink'} ${className}`}
+      className={`min-h-[64px] rounded-touch border-2 border-ink px-4 text-site font-semibold disabled:opacity-40 ${strong ? 'bg-ink text-white' : 'bg-card text-ink'} ${className}`}
     />
   )
 }

@@ -44,7 +44,7 @@ function FromSheets({ hazards }: { hazards: HazardSummary }) {
         ))}
       </dl>
       <div>
-        {hazards.signalWord && <p className="text-card-figure font-bold">{hazards.signalWord}</p>}
+        {hazards.signalWord && <p className="text-site-figure font-bold">{hazards.signalWord}</p>}
         <div className="my-2 flex flex-wrap gap-3">
           {hazards.pictograms.map((code) => (
             <Pictogram key={code} code={code} size={72} />
