@@ -41,8 +41,8 @@ export function broadcastGrains(placed: PlacedLayer, scale: SectionScale): Shape
   if (!layer.broadcast) return []
   const random = seeded(`broadcast ${layer.id}`)
   const radius = radiusOf(layer.broadcast.grain, placed, scale)
-  const left = (lower[0]?.[0] ?? 0) + radius
-  const right = (lower.at(-1)?.[0] ?? 0) - radius
+  const left = (lower[0]?.[0] ?? 0) + radius * 1.15
+  const right = (lower.at(-1)?.[0] ?? 0) - radius * 1.15
   const film = bottom - top
   const rests = (x: number) => Math.min(heightAt(lower, x) - radius, heightAt(upper, x) + radius * 0.35)
   const row: Point[] = []

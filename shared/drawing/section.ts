@@ -2,7 +2,7 @@ import { type SectionScale } from './scale.ts'
 import { broadcastGrains, fillerGrains } from './section-grains.ts'
 import type { SectionLayer } from './section-layer.ts'
 import { dimensions, leaders, numbers, titles } from './section-marks.ts'
-import { type PlacedLayer, type Placing, place } from './section-place.ts'
+import { type Ground, type PlacedLayer, type Placing, place } from './section-place.ts'
 import { filledSpalls, slabShapes } from './section-slab.ts'
 import { type DrawingUnit, alternativeText, layerWords, sectionNotes } from './section-words.ts'
 import { type Point, type Shape, ink, pathOf, svgOf, wrap } from './shapes.ts'
@@ -141,23 +141,40 @@ function surfaceLines({ placed, ground }: Placing, compact: boolean): Shape[] {
   ]
 }
 
-/** Strokes at 45° over a stopped course, cut to its height. */
-function stopped({ placed, ground }: Placing): Shape[] {
-  return placed
-    .filter(({ layer, kind }) => layer.status === 'stop' && kind === 'film')
-    .flatMap((one): Shape[] => {
-      const tall = one.bottom - one.top
-      const strokes: string[] = []
-      for (let x = ground.left - tall; x < ground.right; x += 7) {
-        const cutLow = Math.max(0, ground.left - x)
-        const cutHigh = Math.max(0, x + tall - ground.right)
-        if (tall - cutLow - cutHigh > 0.5) strokes.push(pathOf([[x + cutLow, one.bottom - cutLow], [x + tall - cutHigh, one.top + cutHigh]]))
-      }
-      return [
-        { kind: 'path', d: strokes.join(''), stroke: ink.stop, strokeWidth: 1.4, course: one.layer.id },
-        { kind: 'path', d: pathOf(outlineOf(one), true), stroke: ink.stop, strokeWidth: 1.4, course: one.layer.id },
-      ]
-    })
+/** Strokes at 45° over every stopped course: over a film, under a worked surface, across a joint. */
+function stopped(placing: Placing): Shape[] {
+  return placing.placed.filter(({ layer }) => layer.status === 'stop').flatMap((one) => hatch(one, placing.ground))
+}
+
+function hatch(one: PlacedLayer, ground: Ground): Shape[] {
+  const line = { stroke: ink.stop, strokeWidth: 1.4, course: one.layer.id }
+  const whole = { left: ground.left, right: ground.right }
+  if (one.kind === 'film') {
+    return [
+      { kind: 'path', d: strokes({ ...whole, top: one.top, bottom: one.bottom }), ...line },
+      { kind: 'path', d: pathOf(outlineOf(one), true), ...line },
+    ]
+  }
+  if (one.kind === 'surface') {
+    const under = one.upper.map(([x, y]) => `M${Math.round(x)} ${Math.round(y * 10) / 10 + 7}l6 -6`)
+    return [{ kind: 'path', d: under.filter((_, index) => index % 2 === 0).join(''), ...line }, { kind: 'path', d: pathOf(one.upper), ...line }]
+  }
+  const joint = ground.joints.find(({ layer }) => layer.id === one.layer.id)
+  if (!joint) return []
+  const { x, width, depth } = joint
+  return [{ kind: 'path', d: strokes({ left: x - width / 2 - 3, right: x + width / 2 + 3, top: ground.surface, bottom: ground.surface + depth }), ...line }]
+}
+
+/** Parallel strokes rising to the right, cut to a box. */
+function strokes({ left, right, top, bottom }: { left: number; right: number; top: number; bottom: number }): string {
+  const tall = bottom - top
+  const lines: string[] = []
+  for (let x = left - tall; x < right; x += 7) {
+    const cutLow = Math.max(0, left - x)
+    const cutHigh = Math.max(0, x + tall - right)
+    if (tall - cutLow - cutHigh > 0.5) lines.push(pathOf([[x + cutLow, bottom - cutLow], [x + tall - cutHigh, top + cutHigh]]))
+  }
+  return lines.join('')
 }
 
 /** A fillet against a stub of wall at the left end of the floor. */
