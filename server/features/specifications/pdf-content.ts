@@ -1,0 +1,132 @@
+import type { Content, ContentNode } from 'pdfmake'
+import { type Run, type Runs, type SpecDocument, type SpecTable, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
+import { type NumberedItem, numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
+import { writtenDate } from '../../../shared/domain/sheet-age.ts'
+import { drawSection } from './section-drawing.ts'
+
+export const fontName = 'SourceSans3'
+const pencil = '#55606a'
+const step = 22
+
+/** A line: figures carry their tags, small, as links to the tables at the end. */
+function inline(runs: readonly Run[]): Content[] {
+  return runs.flatMap((run): Content[] => {
+    if (run.kind !== 'figure') return [{ text: run.text }]
+    const figure = { text: run.text, ...(run.known === 'not-stated' ? { italics: true } : {}) }
+    const [first] = run.tags
+    const tag = tagText(run)
+    return tag ? [figure, { text: tag, fontSize: 7.5, color: pencil, ...(first ? { linkToDestination: first } : {}) }] : [figure]
+  })
+}
+
+function paragraph({ label, level, runs }: NumberedItem): Content {
+  return {
+    columns: [
+      { width: step, text: label },
+      { width: '*', text: inline(runs) },
+    ],
+    columnGap: 0,
+    margin: [level * step, level === 0 ? 4 : 1.5, 0, 0],
+  }
+}
+
+const heading = (text: string, id: string, more: ContentNode = {}): ContentNode => ({ text, id, outline: true, outlineText: text, outlineExpanded: false, ...more })
+
+function parts({ parts: all }: SpecDocument): Content[] {
+  return all.flatMap((part): Content[] => {
+    const title = `PART ${part.number} ${part.title.toUpperCase()}`
+    const id = `part-${part.number}`
+    const articles = numberedArticles(part).flatMap((article): Content[] => [
+      heading(`${article.number}  ${article.title.toUpperCase()}`, `${id}-${article.id}`, { style: 'article', outlineParentId: id, headlineLevel: 2 }),
+      ...article.items.map(paragraph),
+    ])
+    return [heading(title, id, { style: 'part', headlineLevel: 1 }), ...(articles.length > 0 ? articles : [{ text: 'Not used', margin: [0, 6, 0, 0] }])]
+  })
+}
+
+function front({ front: lists }: SpecDocument): Content[] {
+  const kinds = Object.keys(frontTitles) as (keyof typeof frontTitles)[]
+  return [
+    heading('READ FIRST', 'front', { style: 'part' }),
+    ...kinds.flatMap((kind): Content[] => [
+      { text: frontTitles[kind], style: 'article', headlineLevel: 2 },
+      ...(lists[kind].length > 0 ? numberedItems(lists[kind]).map(paragraph) : [{ text: 'None.', margin: [0, 3, 0, 0] }]),
+    ]),
+  ]
+}
+
+interface Grid {
+  id: string
+  title: string
+  columns: { label: string; width: number }[]
+  rows: Content[][]
+  note?: string
+}
+
+/** A table with its head repeated on every page and no row broken over two. */
+function grid({ id, title, columns, rows, note }: Grid): Content[] {
+  const total = columns.reduce((sum, { width }) => sum + width, 0)
+  return [
+    heading(title, id, { style: 'article', outlineParentId: 'schedules', headlineLevel: 2 }),
+    {
+      table: {
+        headerRows: 1, keepWithHeaderRows: 1, dontBreakRows: true,
+        widths: columns.map(({ width }) => `${(100 * width) / total}%`),
+        body: [columns.map(({ label }) => ({ text: label, bold: true })), ...rows],
+      },
+      layout: 'hairlines', fontSize: 8.5, margin: [0, 4, 0, 0],
+    },
+    ...(note ? [{ text: note, fontSize: 8.5, color: pencil, margin: [0, 3, 0, 0] }] : []),
+  ]
+}
+
+const schedule = ({ id, title, columns, rows, note }: SpecTable): Content[] =>
+  grid({ id: `schedule-${id}`, title, columns, note, rows: rows.map((row) => row.map((cell: Runs): Content => ({ text: inline(cell) }))) })
+
+const columnsOf = (columns: readonly [string, number][]) => columns.map(([label, width]) => ({ label, width }))
+const target = (tag: string): Content => ({ text: tag, id: tag })
+
+function registers({ sources, workings, entered, typicals }: SpecDocument): Content[] {
+  return [
+    ...(sources.length === 0 ? [] : grid({
+      id: 'sources', title: 'Sources: sheets and pages', columns: columnsOf([['Tag', 8], ['Sheet', 32], ['Revision', 16], ['Page', 8], ['Words of the sheet', 36]]),
+      rows: sources.map(({ tag, title, revisionDate, page, quotes }) => [target(tag), title, writtenDate(revisionDate), String(page), quotes.join(' · ') || 'not marked']),
+    })),
+    ...(workings.length === 0 ? [] : grid({
+      id: 'workings', title: 'Workings of computed values', columns: columnsOf([['Tag', 8], ['Formula', 26], ['Sum', 40], ['Source', 18], ['From', 8]]),
+      rows: workings.map(({ tag, formula, sum, source, from }) => [target(tag), formula, sum, source, from.join(', ')]),
+    })),
+    ...(entered.length === 0 ? [] : grid({
+      id: 'entered', title: 'Entered values', columns: columnsOf([['Tag', 8], ['Reason', 60], ['By', 32]]),
+      rows: entered.map(({ tag, reason, by, at }) => [target(tag), reason, `${by}, ${at.slice(0, 10)}`]),
+    })),
+    ...(typicals.length === 0 ? [] : grid({
+      id: 'typicals', title: 'Typical values, verify', columns: columnsOf([['Tag', 8], ['Source', 72], ['Dated', 20]]),
+      rows: typicals.map(({ tag, source, dated }) => [target(tag), source, dated]),
+    })),
+  ]
+}
+
+function drawing(document: SpecDocument): Content[] {
+  if (document.section.layers.length === 0) return []
+  const { svg, alternative } = drawSection(document, fontName)
+  return [
+    heading('Section through the floor', 'section', { style: 'article', outlineParentId: 'schedules', headlineLevel: 2 }),
+    { svg, width: 468, margin: [0, 4, 0, 4] },
+    { text: alternative, fontSize: 8.5, color: pencil },
+  ]
+}
+
+/** Everything between the title and the last page. */
+export function contentOf(document: SpecDocument): Content[] {
+  return [
+    ...front(document),
+    ...parts(document),
+    heading('SCHEDULES', 'schedules', { style: 'part', headlineLevel: 1 }),
+    ...drawing(document),
+    ...document.schedules.flatMap(schedule),
+    ...registers(document),
+    { text: document.closing.join(' '), margin: [0, 14, 0, 0], bold: true },
+    { text: `END OF SECTION ${document.header.sectionNumber}`, alignment: 'center', margin: [0, 16, 0, 0] },
+  ]
+}

@@ -1,0 +1,89 @@
+import pdfmake, { type Content } from 'pdfmake'
+import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
+import { fontFiles, fontFolder } from './fonts.ts'
+import { contentOf, fontName } from './pdf-content.ts'
+
+pdfmake.setFonts({ [fontName]: fontFiles })
+pdfmake.setUrlAccessPolicy(() => false)
+pdfmake.setLocalAccessPolicy((path) => path.startsWith(fontFolder))
+
+const ink = '#1d2226'
+const pencil = '#55606a'
+const [inch, side] = [72, 72]
+
+const hairlines = {
+  hLineWidth: (row: number) => (row <= 1 ? 0.8 : 0.4),
+  vLineWidth: () => 0,
+  hLineColor: (row: number) => (row <= 1 ? ink : '#c9c7c0'),
+  paddingLeft: () => 3, paddingRight: () => 3, paddingTop: () => 2.5, paddingBottom: () => 2.5,
+}
+
+/** Tables name their lines by a word; pdfmake takes the functions themselves. */
+function withLayouts(content: Content): Content {
+  if (Array.isArray(content)) return content.map(withLayouts)
+  if (typeof content === 'object' && content['layout'] === 'hairlines') return { ...content, layout: hairlines }
+  return content
+}
+
+function titleBlock({ header }: SpecDocument): Content[] {
+  const { firm, project, client, site, buildUp, issue, date } = header
+  const basis = `BU-${String(buildUp.number).padStart(3, '0')} ${buildUp.name}, version ${buildUp.version}, ${buildUp.status}`
+  const rows: [string, string][] = [
+    ['Project', `${project}, J-${String(header.jobNumber).padStart(3, '0')}`],
+    ['Client', client || 'not stated'],
+    ['Site', site || 'not stated'],
+    ['Installer', [firm.name, firm.address, firm.phone].filter(Boolean).join(', ')],
+    ['Build-up', basis],
+    ['Date', date],
+    ['Issue', issue ? `${issueWords(header)}, by ${issue.by}` : issueWords(header)],
+  ]
+  return [
+    { text: `SECTION ${header.sectionNumber}`, fontSize: 12, alignment: 'center' },
+    { text: header.sectionTitle.toUpperCase(), fontSize: 16, bold: true, alignment: 'center', margin: [0, 2, 0, 12] },
+    { table: { widths: [70, '*'], body: rows.map(([label, value]) => [{ text: label, color: pencil }, value]) }, layout: 'hairlines' },
+  ]
+}
+
+/** Words at the head of every page; a document that is not issued says so on each. */
+function pageHead({ header }: SpecDocument): Content {
+  return {
+    columns: [
+      { width: '*', text: header.project },
+      { width: 'auto', text: issueWords(header), bold: !header.issue, alignment: 'right' },
+    ],
+    fontSize: 8.5, color: pencil, margin: [side, 36, side, 0],
+  }
+}
+
+const pageFoot = ({ header }: SpecDocument, page: number, pages: number): Content => ({
+  columns: [
+    { width: '*', text: `${header.sectionNumber} ${header.sectionTitle}, ${header.date}` },
+    { width: 'auto', text: `Page ${page} of ${pages}`, alignment: 'right' },
+  ],
+  fontSize: 8.5, color: pencil, margin: [side, 20, side, 0],
+})
+
+interface Node {
+  headlineLevel?: number
+}
+
+/** The document as PDF. The same tree gives the same bytes: the only date is the document's own. */
+export async function toPdf(document: SpecDocument): Promise<Buffer> {
+  const { header } = document
+  const title = `${header.sectionNumber} ${header.sectionTitle}, ${header.project}`
+  return pdfmake
+    .createPdf({
+      content: [...titleBlock(document), ...contentOf(document)].map(withLayouts),
+      header: () => pageHead(document),
+      footer: (page: number, pages: number) => pageFoot(document, page, pages),
+      pageSize: 'LETTER',
+      pageMargins: [side, inch * 0.9, side, inch * 0.85],
+      defaultStyle: { font: fontName, fontSize: 10, lineHeight: 1.12, color: ink },
+      styles: { part: { fontSize: 12, bold: true, margin: [0, 18, 0, 2] }, article: { fontSize: 10.5, bold: true, margin: [0, 11, 0, 1] } },
+      // A heading never stands alone at the foot of a page.
+      pageBreakBefore: (node: Node, nodes: { getFollowingNodesOnPage(): unknown[] }) => node.headlineLevel !== undefined && nodes.getFollowingNodesOnPage().length < 4,
+      info: { title, author: header.firm.name, subject: header.site, creator: 'Wearcourse', producer: 'Wearcourse', creationDate: new Date(`${header.date}T00:00:00Z`) },
+      version: '1.7', language: 'en-US', displayTitle: true,
+    })
+    .getBuffer()
+}
