@@ -1,7 +1,7 @@
 import type { Content, ContentNode } from 'pdfmake'
 import { type Run, type Runs, type SpecDocument, type SpecTable, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
 import { type NumberedItem, numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
-import { writtenDate } from '../../../shared/domain/sheet-age.ts'
+import { registersOf } from './registers.ts'
 import { drawSection } from './section-drawing.ts'
 
 export const fontName = 'SourceSans3'
@@ -83,28 +83,10 @@ function grid({ id, title, columns, rows, note }: Grid): Content[] {
 const schedule = ({ id, title, columns, rows, note }: SpecTable): Content[] =>
   grid({ id: `schedule-${id}`, title, columns, note, rows: rows.map((row) => row.map((cell: Runs): Content => ({ text: inline(cell) }))) })
 
-const columnsOf = (columns: readonly [string, number][]) => columns.map(([label, width]) => ({ label, width }))
-const target = (tag: string): Content => ({ text: tag, id: tag })
-
-function registers({ sources, workings, entered, typicals }: SpecDocument): Content[] {
-  return [
-    ...(sources.length === 0 ? [] : grid({
-      id: 'sources', title: 'Sources: sheets and pages', columns: columnsOf([['Tag', 8], ['Sheet', 32], ['Revision', 16], ['Page', 8], ['Words of the sheet', 36]]),
-      rows: sources.map(({ tag, title, revisionDate, page, quotes }) => [target(tag), title, writtenDate(revisionDate), String(page), quotes.join(' · ') || 'not marked']),
-    })),
-    ...(workings.length === 0 ? [] : grid({
-      id: 'workings', title: 'Workings of computed values', columns: columnsOf([['Tag', 8], ['Formula', 26], ['Sum', 40], ['Source', 18], ['From', 8]]),
-      rows: workings.map(({ tag, formula, sum, source, from }) => [target(tag), formula, sum, source, from.join(', ')]),
-    })),
-    ...(entered.length === 0 ? [] : grid({
-      id: 'entered', title: 'Entered values', columns: columnsOf([['Tag', 8], ['Reason', 60], ['By', 32]]),
-      rows: entered.map(({ tag, reason, by, at }) => [target(tag), reason, `${by}, ${at.slice(0, 10)}`]),
-    })),
-    ...(typicals.length === 0 ? [] : grid({
-      id: 'typicals', title: 'Typical values, verify', columns: columnsOf([['Tag', 8], ['Source', 72], ['Dated', 20]]),
-      rows: typicals.map(({ tag, source, dated }) => [target(tag), source, dated]),
-    })),
-  ]
+function registers(document: SpecDocument): Content[] {
+  return registersOf(document).flatMap(({ rows, ...register }) =>
+    grid({ ...register, rows: rows.map(([tag = '', ...cells]): Content[] => [{ text: tag, id: tag }, ...cells]) }),
+  )
 }
 
 function drawing(document: SpecDocument): Content[] {

@@ -2,6 +2,7 @@ import pdfmake, { type Content } from 'pdfmake'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import { fontFiles, fontFolder } from './fonts.ts'
 import { contentOf, fontName } from './pdf-content.ts'
+import { titleRows } from './title-block.ts'
 
 pdfmake.setFonts({ [fontName]: fontFiles })
 pdfmake.setUrlAccessPolicy(() => false)
@@ -26,17 +27,7 @@ function withLayouts(content: Content): Content {
 }
 
 function titleBlock({ header }: SpecDocument): Content[] {
-  const { firm, project, client, site, buildUp, issue, date } = header
-  const basis = `BU-${String(buildUp.number).padStart(3, '0')} ${buildUp.name}, version ${buildUp.version}, ${buildUp.status}`
-  const rows: [string, string][] = [
-    ['Project', `${project}, J-${String(header.jobNumber).padStart(3, '0')}`],
-    ['Client', client || 'not stated'],
-    ['Site', site || 'not stated'],
-    ['Installer', [firm.name, firm.address, firm.phone].filter(Boolean).join(', ')],
-    ['Build-up', basis],
-    ['Date', date],
-    ['Issue', issue ? `${issueWords(header)}, by ${issue.by}` : issueWords(header)],
-  ]
+  const rows = titleRows(header)
   return [
     { text: `SECTION ${header.sectionNumber}`, fontSize: 12, alignment: 'center' },
     { text: header.sectionTitle.toUpperCase(), fontSize: 16, bold: true, alignment: 'center', margin: [0, 2, 0, 12] },
