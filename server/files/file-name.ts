@@ -10,6 +10,9 @@ export function cleanFileName(name: string, ending: string): string {
     .replace(/\s+/g, ' ')
     .trim()
   const stem = clean.toLowerCase().endsWith(ending) ? clean.slice(0, -ending.length) : clean
-  const kept = Array.from(stem.replace(/^[\s.]+|[\s.]+$/g, '')).slice(0, longest).join('').trim()
+  const kept = Array.from(stem.replace(/^[\s.]+|[\s.]+$/g, ''))
+    .slice(0, longest)
+    .join('')
+    .trim()
   return `${kept || 'sheet'}${ending}`
 }

@@ -1,5 +1,11 @@
 import {
-  DeleteObjectCommand, GetObjectCommand, HeadBucketCommand, HeadObjectCommand, PutObjectCommand, S3Client, S3ServiceException,
+  DeleteObjectCommand,
+  GetObjectCommand,
+  HeadBucketCommand,
+  HeadObjectCommand,
+  PutObjectCommand,
+  S3Client,
+  S3ServiceException,
 } from '@aws-sdk/client-s3'
 import { createHash } from 'node:crypto'
 import { createReadStream } from 'node:fs'
@@ -24,9 +30,13 @@ const answerMilliseconds = 60_000
  */
 export async function openS3Store(dataDir: string, { bucket, endpoint, region, ...credentials }: S3Place): Promise<FileStore> {
   const client = new S3Client({
-    endpoint, region, credentials, forcePathStyle: true,
+    endpoint,
+    region,
+    credentials,
+    forcePathStyle: true,
     // Checksums in trailers are not understood by every server: some keep the chunk headers as part of the file.
-    requestChecksumCalculation: 'WHEN_REQUIRED', responseChecksumValidation: 'WHEN_REQUIRED',
+    requestChecksumCalculation: 'WHEN_REQUIRED',
+    responseChecksumValidation: 'WHEN_REQUIRED',
     requestHandler: { connectionTimeout: connectMilliseconds, requestTimeout: answerMilliseconds },
   })
   await client.send(new HeadBucketCommand({ Bucket: bucket })).catch((error: unknown) => {
@@ -44,7 +54,9 @@ export async function openS3Store(dataDir: string, { bucket, endpoint, region, .
   }
   const has = async (sha256: string) => (await sizeOf(sha256)) !== undefined
   const get = async (sha256: string, range?: { start: number; end: number }) => {
-    const { Body } = await client.send(new GetObjectCommand({ ...at(sha256), ...(range ? { Range: `bytes=${range.start}-${range.end}` } : {}) }))
+    const { Body } = await client.send(
+      new GetObjectCommand({ ...at(sha256), ...(range ? { Range: `bytes=${range.start}-${range.end}` } : {}) }),
+    )
     if (!Body) throw new Error(`The bucket sent nothing for ${sha256}.`)
     return Body
   }

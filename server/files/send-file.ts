@@ -59,7 +59,11 @@ export function rangeOf(header: string | undefined, size: number): { start: numb
 
 /** `attachment` with a plain name for old readers and the full one after RFC 6266 and RFC 8187. */
 export function attachment(name: string): string {
-  const plain = name.normalize('NFKD').replace(/[\u0300-\u036f]/g, '').replace(/[^\x20-\x7e]/g, '_').replace(/["\\%;]/g, '_')
+  const plain = name
+    .normalize('NFKD')
+    .replace(/[\u0300-\u036f]/g, '')
+    .replace(/[^\x20-\x7e]/g, '_')
+    .replace(/["\\%;]/g, '_')
   const full = encodeURIComponent(name).replace(/['()*]/g, (character) => `%${character.charCodeAt(0).toString(16).toUpperCase()}`)
   return `attachment; filename="${plain}"; filename*=UTF-8''${full}`
 }

@@ -11,7 +11,13 @@ const folder = mkdtempSync(join(tmpdir(), 'wearcourse-store-'))
 // The account that s3rver knows.
 const place = { bucket: 'sheets', region: 'us-east-1', accessKeyId: 'S3RVER', secretAccessKey: 'S3RVER' }
 let endpoint = ''
-const server = new S3rver({ port: 0, address: '127.0.0.1', silent: true, directory: join(folder, 'bucket'), configureBuckets: [{ name: 'sheets' }] })
+const server = new S3rver({
+  port: 0,
+  address: '127.0.0.1',
+  silent: true,
+  directory: join(folder, 'bucket'),
+  configureBuckets: [{ name: 'sheets' }],
+})
 beforeAll(async () => {
   endpoint = `http://127.0.0.1:${(await server.run()).port}`
 })
@@ -79,5 +85,7 @@ describe.each(stores)('files $name', ({ open }) => {
 })
 
 it('a bucket that does not answer stops the start with its name', async () => {
-  await expect(openS3Store(folder, { ...place, endpoint, bucket: 'elsewhere' })).rejects.toThrow(/^The bucket elsewhere at http:\/\/127\.0\.0\.1:\d+ cannot be used: NotFound\.$/)
+  await expect(openS3Store(folder, { ...place, endpoint, bucket: 'elsewhere' })).rejects.toThrow(
+    /^The bucket elsewhere at http:\/\/127\.0\.0\.1:\d+ cannot be used: NotFound\.$/,
+  )
 })

@@ -42,7 +42,11 @@ export async function openDiskStore(dataDir: string): Promise<FileStore> {
     if (!isSha256(sha256)) throw new RangeError('not a SHA-256')
     return join(root, sha256.slice(0, 2), sha256)
   }
-  const has = async (sha256: string) => stat(pathOf(sha256)).then(() => true, () => false)
+  const has = async (sha256: string) =>
+    stat(pathOf(sha256)).then(
+      () => true,
+      () => false,
+    )
   const adopt = async (path: string, sha256: string) => {
     const target = pathOf(sha256)
     if (await has(sha256)) {

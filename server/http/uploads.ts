@@ -26,14 +26,18 @@ export function takeFiles({ folder, field, bytes, files }: Accepts): RequestHand
       const taken = (request.files ?? []) as { path?: string }[]
       for (const { path } of taken) if (path) void rm(path, { force: true })
     })
-    upload(request, response, (error: unknown) => next(error === undefined || error === null ? undefined : asAppError(error, { bytes, files })))
+    upload(request, response, (error: unknown) =>
+      next(error === undefined || error === null ? undefined : asAppError(error, { bytes, files })),
+    )
   }
 }
 
 function asAppError(error: unknown, { bytes, files }: { bytes: number; files: number }): unknown {
   if (error instanceof MulterError) {
-    if (error.code === 'LIMIT_FILE_SIZE') return new AppError('too-large', { message: `This file is larger than ${Math.round(bytes / 1024 / 1024)} MB.` })
-    if (error.code === 'LIMIT_UNEXPECTED_FILE') return new AppError('malformed', { message: `Send at most ${files} files, in the field that takes them.` })
+    if (error.code === 'LIMIT_FILE_SIZE')
+      return new AppError('too-large', { message: `This file is larger than ${Math.round(bytes / 1024 / 1024)} MB.` })
+    if (error.code === 'LIMIT_UNEXPECTED_FILE')
+      return new AppError('malformed', { message: `Send at most ${files} files, in the field that takes them.` })
     return new AppError('too-large', { message: 'The upload has too many parts or fields.' })
   }
   // What the multipart parser throws is the request's fault: a cut or malformed body.

@@ -105,7 +105,10 @@ export const uploadFieldsSchema = z.strictObject({
 
 export const sheetEndpoints = {
   listSheets: endpoint({
-    method: 'get', path: '/api/sheets', access: 'sheet:list', summary: 'List the sheets by the revision in force, or the superseded revisions',
+    method: 'get',
+    path: '/api/sheets',
+    access: 'sheet:list',
+    summary: 'List the sheets by the revision in force, or the superseded revisions',
     query: listQuery(['title', 'maker', 'revisionDate', 'uploadedAt', 'pages']).extend({
       kind: sheetKindSchema.optional(),
       standing: z.enum(['in-force', 'superseded', 'all']).default('in-force'),
@@ -115,15 +118,28 @@ export const sheetEndpoints = {
     response: listOf(sheetRowSchema),
   }),
   uploadSheets: endpoint({
-    method: 'post', path: '/api/sheets', access: 'sheet:write', body: 'files',
-    summary: 'Upload PDFs (field `files`, with optional sheetId, kind, title, maker, revisionDate). One refused file alone answers with its error',
+    method: 'post',
+    path: '/api/sheets',
+    access: 'sheet:write',
+    body: 'files',
+    summary:
+      'Upload PDFs (field `files`, with optional sheetId, kind, title, maker, revisionDate). One refused file alone answers with its error',
     response: z.object({ files: z.array(uploadedFileSchema) }),
   }),
   readSheet: endpoint({
-    method: 'get', path: '/api/sheets/:sheetId', access: 'sheet:read', summary: 'Read a sheet with its revisions', params: sheetId, response: sheetSchema,
+    method: 'get',
+    path: '/api/sheets/:sheetId',
+    access: 'sheet:read',
+    summary: 'Read a sheet with its revisions',
+    params: sheetId,
+    response: sheetSchema,
   }),
   changeSheet: endpoint({
-    method: 'put', path: '/api/sheets/:sheetId', access: 'sheet:write', summary: 'Change kind, title, maker, subjects and the dates of revisions', params: sheetId,
+    method: 'put',
+    path: '/api/sheets/:sheetId',
+    access: 'sheet:write',
+    summary: 'Change kind, title, maker, subjects and the dates of revisions',
+    params: sheetId,
     body: z.strictObject({
       version: versionSchema,
       kind: sheetKindSchema,
@@ -131,33 +147,58 @@ export const sheetEndpoints = {
       maker: makerSchema,
       subjects: z.array(subjectRefSchema).max(100),
       /** Only those that change. */
-      dates: z.array(z.strictObject({ revisionId: idSchema, revisionDate: dateSchema.nullable() })).max(200).default([]),
+      dates: z
+        .array(z.strictObject({ revisionId: idSchema, revisionDate: dateSchema.nullable() }))
+        .max(200)
+        .default([]),
     }),
     response: sheetSchema,
   }),
   moveRevision: endpoint({
-    method: 'put', path: '/api/sheet-revisions/:revisionId/sheet', access: 'sheet:write',
-    summary: 'Make a revision one of another sheet; a sheet left without revisions goes', params: revisionId,
-    body: z.strictObject({ sheetId: idSchema }), response: sheetSchema,
+    method: 'put',
+    path: '/api/sheet-revisions/:revisionId/sheet',
+    access: 'sheet:write',
+    summary: 'Make a revision one of another sheet; a sheet left without revisions goes',
+    params: revisionId,
+    body: z.strictObject({ sheetId: idSchema }),
+    response: sheetSchema,
   }),
   readRevision: endpoint({
-    method: 'get', path: '/api/sheet-revisions/:revisionId', access: 'sheet:read', summary: 'Read a revision and the sheet it is of', params: revisionId,
+    method: 'get',
+    path: '/api/sheet-revisions/:revisionId',
+    access: 'sheet:read',
+    summary: 'Read a revision and the sheet it is of',
+    params: revisionId,
     response: z.object({ sheet: sheetSchema, revision: revisionSchema }),
   }),
   downloadRevision: endpoint({
-    method: 'get', path: '/api/sheet-revisions/:revisionId/file', access: 'sheet:read', summary: 'The PDF as uploaded, whole or in ranges', params: revisionId,
+    method: 'get',
+    path: '/api/sheet-revisions/:revisionId/file',
+    access: 'sheet:read',
+    summary: 'The PDF as uploaded, whole or in ranges',
+    params: revisionId,
     response: { file: 'application/pdf' },
   }),
   readPage: endpoint({
-    method: 'get', path: '/api/sheet-revisions/:revisionId/pages/:page', access: 'sheet:read', summary: 'Words of a page with their places',
+    method: 'get',
+    path: '/api/sheet-revisions/:revisionId/pages/:page',
+    access: 'sheet:read',
+    summary: 'Words of a page with their places',
     params: revisionId.extend({ page: z.coerce.number().int().min(1).max(1000) }),
     response: z.object({
-      page: z.int(), width: z.number(), height: z.number(), rotation: z.int(),
+      page: z.int(),
+      width: z.number(),
+      height: z.number(),
+      rotation: z.int(),
       words: z.array(z.tuple([z.string(), z.number(), z.number(), z.number(), z.number()])),
     }),
   }),
   searchRevision: endpoint({
-    method: 'get', path: '/api/sheet-revisions/:revisionId/hits', access: 'sheet:read', summary: 'Where a phrase stands in a revision', params: revisionId,
+    method: 'get',
+    path: '/api/sheet-revisions/:revisionId/hits',
+    access: 'sheet:read',
+    summary: 'Where a phrase stands in a revision',
+    params: revisionId,
     query: z.object({ q: z.string().trim().min(1).max(200) }),
     response: z.object({
       hits: z.array(z.object({ page: z.int(), boxes: z.array(boxSchema), excerpt: z.string() })),
@@ -166,7 +207,10 @@ export const sheetEndpoints = {
     }),
   }),
   listSubjects: endpoint({
-    method: 'get', path: '/api/sheet-subjects', access: 'sheet:write', summary: 'Products and mixes by name, to attach a sheet to',
+    method: 'get',
+    path: '/api/sheet-subjects',
+    access: 'sheet:write',
+    summary: 'Products and mixes by name, to attach a sheet to',
     query: z.object({ q: z.string().trim().max(200).default('') }),
     response: z.object({ items: z.array(subjectSchema) }),
   }),

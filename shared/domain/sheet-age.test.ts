@@ -22,10 +22,16 @@ describe('the age of a sheet', () => {
 describe('revisions of a sheet', () => {
   const of = (revisionDate: string | null, uploadedAt: string) => ({ revisionDate, uploadedAt })
   it('stand in the order of their dates, not of upload', () => {
-    expect(inOrder([of('2025-03-01', '2025-04-01T00:00:00Z'), of('2022-02', '2025-05-01T00:00:00Z')]).map((r) => r.revisionDate)).toEqual(['2022-02', '2025-03-01'])
+    expect(inOrder([of('2025-03-01', '2025-04-01T00:00:00Z'), of('2022-02', '2025-05-01T00:00:00Z')]).map((r) => r.revisionDate)).toEqual([
+      '2022-02',
+      '2025-03-01',
+    ])
   })
 
   it('count from the day of upload while they have no date', () => {
-    expect(inOrder([of(null, '2025-05-01T00:00:00Z'), of('2024-01-01', '2025-05-02T00:00:00Z')]).map((r) => r.revisionDate)).toEqual(['2024-01-01', null])
+    expect(inOrder([of(null, '2025-05-01T00:00:00Z'), of('2024-01-01', '2025-05-02T00:00:00Z')]).map((r) => r.revisionDate)).toEqual([
+      '2024-01-01',
+      null,
+    ])
   })
 })

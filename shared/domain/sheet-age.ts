@@ -26,7 +26,20 @@ export function dayYearsBefore(today: string, years: number): string {
   return `${String(Math.floor(months / 12)).padStart(4, '0')}-${two((months % 12) + 1)}-${two(day)}`
 }
 
-const monthNames = ['January', 'February', 'March', 'April', 'May', 'June', 'July', 'August', 'September', 'October', 'November', 'December']
+const monthNames = [
+  'January',
+  'February',
+  'March',
+  'April',
+  'May',
+  'June',
+  'July',
+  'August',
+  'September',
+  'October',
+  'November',
+  'December',
+]
 
 /** `2024-05-06` as "6 May 2024", `2024-05` as "May 2024"; "not stated" without a date. */
 export function writtenDate(revisionDate: string | null): string {

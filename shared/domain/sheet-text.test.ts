@@ -2,8 +2,13 @@ import { describe, expect, it } from 'vitest'
 import { type PlacedWord, findPhrase, quoteOf, wordsIn } from './sheet-text.ts'
 
 const words: PlacedWord[] = [
-  ['Pot', 10, 10, 28, 20], ['life', 30, 10, 48, 20], ['25–30', 60, 10, 90, 20], ['min', 92, 10, 108, 20],
-  ['at', 10, 30, 18, 40], ['75', 20, 30, 30, 40], ['°F', 32, 30, 42, 40],
+  ['Pot', 10, 10, 28, 20],
+  ['life', 30, 10, 48, 20],
+  ['25–30', 60, 10, 90, 20],
+  ['min', 92, 10, 108, 20],
+  ['at', 10, 30, 18, 40],
+  ['75', 20, 30, 30, 40],
+  ['°F', 32, 30, 42, 40],
 ]
 
 describe('words of a page', () => {
@@ -20,7 +25,13 @@ describe('words of a page', () => {
 
   it('give a box a line where the phrase runs over its end, and the words around', () => {
     const [hit] = findPhrase(words, 'min at')
-    expect(hit).toEqual({ boxes: [[92, 10, 108, 20], [10, 30, 18, 40]], excerpt: 'Pot life 25–30 min at 75 °F' })
+    expect(hit).toEqual({
+      boxes: [
+        [92, 10, 108, 20],
+        [10, 30, 18, 40],
+      ],
+      excerpt: 'Pot life 25–30 min at 75 °F',
+    })
   })
 
   it('are not found where they do not stand', () => {

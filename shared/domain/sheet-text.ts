@@ -98,6 +98,9 @@ const wordsAround = 5
 function excerptAround(words: readonly PlacedWord[], first: number, last: number): string {
   const from = Math.max(0, first - wordsAround)
   const to = Math.min(words.length, last + 1 + wordsAround)
-  const text = words.slice(from, to).map(([word]) => word).join(' ')
+  const text = words
+    .slice(from, to)
+    .map(([word]) => word)
+    .join(' ')
   return `${from > 0 ? '… ' : ''}${text}${to < words.length ? ' …' : ''}`
 }

@@ -20,19 +20,38 @@ const onePage = (line: string) => makePdf([{ lines: [line] }])
 /** A job of the crew's, laid with a mix of one product, which the sheet speaks of; the same in the sand of another course. */
 async function putOnFloor({ db, ids }: TestApp, { sheetId }: { sheetId: string }): Promise<void> {
   await db.transaction(async (tx) => {
-    const [product] = await tx.insert(products).values({ name: 'Ostrel Prime A', maker: 'Ostrel', kind: 'resin', chemistry: 'epoxy' }).returning()
+    const [product] = await tx
+      .insert(products)
+      .values({ name: 'Ostrel Prime A', maker: 'Ostrel', kind: 'resin', chemistry: 'epoxy' })
+      .returning()
     const [mix] = await tx.insert(mixes).values({ name: 'Ostrel Prime', maker: 'Ostrel', chemistry: 'epoxy', color: '#c08040' }).returning()
     await tx.insert(mixParts).values({ mixId: mix!.id, part: 'A', productId: product!.id })
     await tx.insert(sheetSubjects).values({ sheetId, productId: product!.id })
     const [buildUp] = await tx.insert(buildUps).values({ name: 'Floor of one coat' }).returning()
     const conditions = {
-      slabTemperature: { value: 70, unit: '°F' as const }, airTemperature: { value: 70, unit: '°F' as const }, relativeHumidity: 50,
-      substrateRelativeHumidity: null, moistureEmission: null, vocPlace: null,
+      slabTemperature: { value: 70, unit: '°F' as const },
+      airTemperature: { value: 70, unit: '°F' as const },
+      relativeHumidity: 50,
+      substrateRelativeHumidity: null,
+      moistureEmission: null,
+      vocPlace: null,
     }
-    const [version] = await tx.insert(buildUpVersions).values({ buildUpId: buildUp!.id, number: 1, status: 'released', conditions }).returning()
+    const [version] = await tx
+      .insert(buildUpVersions)
+      .values({ buildUpId: buildUp!.id, number: 1, status: 'released', conditions })
+      .returning()
     const course = {
-      id: 'c1', stage: 'prime' as const, title: 'Primer', mixId: mix!.id, thickness: null, spreadRate: null, filler: null, broadcast: null,
-      preparation: null, startsAfter: null, note: '',
+      id: 'c1',
+      stage: 'prime' as const,
+      title: 'Primer',
+      mixId: mix!.id,
+      thickness: null,
+      spreadRate: null,
+      filler: null,
+      broadcast: null,
+      preparation: null,
+      startsAfter: null,
+      note: '',
     }
     await tx.insert(courses).values({ versionId: version!.id, courseId: 'c1', position: 0, stage: 'prime', mixId: mix!.id, course })
     const [job] = await tx
@@ -59,9 +78,18 @@ describe('sheets', () => {
     const { body } = await upload(sample('data-1.pdf'), 'Märlstone Prime 14.pdf').expect(200)
     const [file] = body.files
     expect(file).toMatchObject({
-      outcome: 'added', fileName: 'Märlstone Prime 14.pdf', suggestion: { kind: 'data', title: 'Marlstone Prime 14', revisionDate: '2024-05-06' },
+      outcome: 'added',
+      fileName: 'Märlstone Prime 14.pdf',
+      suggestion: { kind: 'data', title: 'Marlstone Prime 14', revisionDate: '2024-05-06' },
     })
-    expect(file.sheet.revisions[0]).toMatchObject({ pages: 1, state: 'ready', revisionDate: null, suggestedDate: '2024-05-06', superseded: false, uploadedByName: 'Test lead' })
+    expect(file.sheet.revisions[0]).toMatchObject({
+      pages: 1,
+      state: 'ready',
+      revisionDate: null,
+      suggestedDate: '2024-05-06',
+      superseded: false,
+      uploadedByName: 'Test lead',
+    })
     const { body: page } = await t.as.estimator.get(`/api/sheet-revisions/${file.revisionId}/pages/1`).expect(200)
     expect(page).toMatchObject({ width: 612, height: 792, rotation: 0 })
     expect(page.words.length).toBeGreaterThan(150)
@@ -71,7 +99,9 @@ describe('sheets', () => {
   it('recognises the same bytes and names the sheet that holds them', async () => {
     const { body: first } = await upload(onePage('Twice'), 'a.pdf').expect(200)
     const { body } = await upload(onePage('Twice'), 'b.pdf').expect(200)
-    expect(body.files).toEqual([{ outcome: 'duplicate', fileName: 'b.pdf', revisionId: first.files[0].revisionId, sheetId: first.files[0].sheet.id, title: 'Twice' }])
+    expect(body.files).toEqual([
+      { outcome: 'duplicate', fileName: 'b.pdf', revisionId: first.files[0].revisionId, sheetId: first.files[0].sheet.id, title: 'Twice' },
+    ])
     expect(left()).toEqual([])
   })
 
@@ -81,7 +111,10 @@ describe('sheets', () => {
   })
 
   it('answers for each file of many', async () => {
-    const { body } = await upload(onePage('One of many'), 'one.pdf').attach('files', Buffer.from('no pdf'), 'two.pdf').attach('files', sample('safety-2.pdf'), 'three.pdf').expect(200)
+    const { body } = await upload(onePage('One of many'), 'one.pdf')
+      .attach('files', Buffer.from('no pdf'), 'two.pdf')
+      .attach('files', sample('safety-2.pdf'), 'three.pdf')
+      .expect(200)
     expect(body.files.map((file: { outcome: string; code?: string }) => file.code ?? file.outcome)).toEqual(['added', 'not-a-pdf', 'added'])
     expect(body.files[2].suggestion.kind).toBe('safety')
     expect(left()).toEqual([])
@@ -95,7 +128,11 @@ describe('sheets', () => {
       { title: 'an empty file', code: 'not-a-pdf', bytes: () => Buffer.alloc(0) },
       { title: 'a picture under the name of a PDF', code: 'not-a-pdf', bytes: () => png },
       { title: 'a PDF under the name of a picture', code: 'not-a-pdf', bytes: () => whole, name: 'sheet.png' },
-      { title: 'a file that only begins like a PDF', code: 'damaged', bytes: () => Buffer.concat([Buffer.from('%PDF-1.7\n'), randomBytes(4000)]) },
+      {
+        title: 'a file that only begins like a PDF',
+        code: 'damaged',
+        bytes: () => Buffer.concat([Buffer.from('%PDF-1.7\n'), randomBytes(4000)]),
+      },
       { title: 'a PDF cut in the middle', code: 'damaged', bytes: () => whole.subarray(0, whole.length / 2) },
       { title: 'a PDF without pages', code: 'damaged', bytes: () => makePdf([]) },
       { title: 'a PDF of 1,001 pages', code: 'too-large', bytes: () => makePdf(Array.from({ length: 1001 }, () => ({}))) },
@@ -125,10 +162,24 @@ describe('sheets', () => {
     it('an upload that its sender breaks off', async () => {
       const server = t.app.listen(0)
       const { port } = server.address() as AddressInfo
-      const signIn = { method: 'POST', headers: { 'Content-Type': 'application/json' }, body: JSON.stringify({ email: 'lead@brackenholt.example', password: testPassword }) }
-      const [cookie = ''] = (await fetch(`http://127.0.0.1:${port}/api/session`, signIn)).headers.getSetCookie().map((line) => line.split(';')[0])
+      const signIn = {
+        method: 'POST',
+        headers: { 'Content-Type': 'application/json' },
+        body: JSON.stringify({ email: 'lead@brackenholt.example', password: testPassword }),
+      }
+      const [cookie = ''] = (await fetch(`http://127.0.0.1:${port}/api/session`, signIn)).headers
+        .getSetCookie()
+        .map((line) => line.split(';')[0])
       const socket = connect(port, '127.0.0.1')
-      const head = ['POST /api/sheets HTTP/1.1', `Host: 127.0.0.1:${port}`, `Cookie: ${cookie}`, 'Content-Type: multipart/form-data; boundary=b', 'Content-Length: 9000000', '', '']
+      const head = [
+        'POST /api/sheets HTTP/1.1',
+        `Host: 127.0.0.1:${port}`,
+        `Cookie: ${cookie}`,
+        'Content-Type: multipart/form-data; boundary=b',
+        'Content-Length: 9000000',
+        '',
+        '',
+      ]
       socket.write(`${head.join('\r\n')}--b\r\nContent-Disposition: form-data; name="files"; filename="x.pdf"\r\n\r\n%PDF-1.7\n`)
       socket.write(Buffer.alloc(500_000, 0x20))
       await expect.poll(() => left().length).toBe(1)
@@ -176,10 +227,22 @@ describe('sheets', () => {
   })
 
   it('adds a revision to a sheet; the later date is in force whatever the order of upload', async () => {
-    const { body: newer } = await upload(onePage('Revised 2025'), 'new.pdf', { title: 'Ostrel Sealer 3', kind: 'data', revisionDate: '2025-03-01' }).expect(200)
+    const { body: newer } = await upload(onePage('Revised 2025'), 'new.pdf', {
+      title: 'Ostrel Sealer 3',
+      kind: 'data',
+      revisionDate: '2025-03-01',
+    }).expect(200)
     const sheetId = newer.files[0].sheet.id
     const { body: older } = await upload(onePage('Revised 2022'), 'old.pdf', { sheetId, revisionDate: '2022-02' }).expect(200)
-    expect(older.files[0].sheet.revisions.map((revision: { revisionDate: string; superseded: boolean }) => [revision.revisionDate, revision.superseded])).toEqual([['2025-03-01', false], ['2022-02', true]])
+    expect(
+      older.files[0].sheet.revisions.map((revision: { revisionDate: string; superseded: boolean }) => [
+        revision.revisionDate,
+        revision.superseded,
+      ]),
+    ).toEqual([
+      ['2025-03-01', false],
+      ['2022-02', true],
+    ])
     const { body: list } = await t.as.lead.get('/api/sheets?standing=superseded&q=sealer').expect(200)
     expect(list.items).toHaveLength(1)
     expect(list.items[0]).toMatchObject({ revisionId: older.files[0].revisionId, superseded: true, revisions: 2 })
@@ -189,7 +252,10 @@ describe('sheets', () => {
     const { body: a } = await upload(onePage('Sheet A'), 'a1.pdf', { title: 'Teasel Fill 20' }).expect(200)
     const { body: b } = await upload(onePage('Sheet B'), 'b1.pdf', { title: 'Teasel Fill 20 rev 2' }).expect(200)
     expect(b.files[0].alike.map((sheet: { title: string }) => sheet.title)).toContain('Teasel Fill 20')
-    const { body: moved } = await t.as.lead.put(`/api/sheet-revisions/${b.files[0].revisionId}/sheet`).send({ sheetId: a.files[0].sheet.id }).expect(200)
+    const { body: moved } = await t.as.lead
+      .put(`/api/sheet-revisions/${b.files[0].revisionId}/sheet`)
+      .send({ sheetId: a.files[0].sheet.id })
+      .expect(200)
     expect(moved.revisions).toHaveLength(2)
     await t.as.lead.get(`/api/sheets/${b.files[0].sheet.id}`).expect(404)
     await t.as.estimator.put(`/api/sheet-revisions/${b.files[0].revisionId}/sheet`).send({ sheetId: a.files[0].sheet.id }).expect(403)
@@ -198,9 +264,21 @@ describe('sheets', () => {
   it('changes title, kind, maker and dates; a stale version is a conflict; each change is in the trail', async () => {
     const { body } = await upload(onePage('To change'), 'c.pdf').expect(200)
     const { sheet, revisionId } = body.files[0]
-    const change = { version: sheet.version, kind: 'safety', title: 'Corbel Hardener', maker: 'Corbel', subjects: [], dates: [{ revisionId, revisionDate: '2023-11' }] }
+    const change = {
+      version: sheet.version,
+      kind: 'safety',
+      title: 'Corbel Hardener',
+      maker: 'Corbel',
+      subjects: [],
+      dates: [{ revisionId, revisionDate: '2023-11' }],
+    }
     const { body: changed } = await t.as.lead.put(`/api/sheets/${sheet.id}`).send(change).expect(200)
-    expect(changed).toMatchObject({ kind: 'safety', title: 'Corbel Hardener', version: 2, revisions: [{ revisionDate: '2023-11', suggestedDate: null }] })
+    expect(changed).toMatchObject({
+      kind: 'safety',
+      title: 'Corbel Hardener',
+      version: 2,
+      revisions: [{ revisionDate: '2023-11', suggestedDate: null }],
+    })
     await t.as.lead.put(`/api/sheets/${sheet.id}`).send(change).expect(409)
     const bad = { ...change, version: 2, title: ' ', dates: [{ revisionId, revisionDate: '2023-02-30' }] }
     const { body: refused } = await t.as.lead.put(`/api/sheets/${sheet.id}`).send(bad).expect(422)
@@ -210,10 +288,18 @@ describe('sheets', () => {
   })
 
   it('finds sheets in spite of a typo, by title, maker and file name, and filters by kind and age', async () => {
-    await upload(onePage('Aged'), 'quarzin_slurry_tds.pdf', { title: 'Quarzin slurry', maker: 'Ostrel', kind: 'data', revisionDate: '2019-06' }).expect(200)
+    await upload(onePage('Aged'), 'quarzin_slurry_tds.pdf', {
+      title: 'Quarzin slurry',
+      maker: 'Ostrel',
+      kind: 'data',
+      revisionDate: '2019-06',
+    }).expect(200)
     for (const q of ['quarzin', 'quartzin slury', 'ostrel quarzin', 'slurry tds']) {
       const { body } = await t.as.estimator.get('/api/sheets').query({ q }).expect(200)
-      expect(body.items.map((row: { title: string }) => row.title), q).toContain('Quarzin slurry')
+      expect(
+        body.items.map((row: { title: string }) => row.title),
+        q,
+      ).toContain('Quarzin slurry')
     }
     const { body: beyond } = await t.as.lead.get('/api/sheets?age=beyond&kind=data&sort=revisionDate').expect(200)
     expect(beyond.items.map((row: { title: string }) => row.title)).toEqual(['Quarzin slurry'])
@@ -230,7 +316,10 @@ describe('sheets', () => {
     const whole = await t.as.lead.get(path).buffer(true).expect(200)
     expect(whole.body).toEqual(bytes)
     expect(whole.headers).toMatchObject({
-      'content-type': 'application/pdf', 'x-content-type-options': 'nosniff', 'content-security-policy': "sandbox; default-src 'none'", 'accept-ranges': 'bytes',
+      'content-type': 'application/pdf',
+      'x-content-type-options': 'nosniff',
+      'content-security-policy': "sandbox; default-src 'none'",
+      'accept-ranges': 'bytes',
       'content-disposition': `attachment; filename="Hohe 1.pdf"; filename*=UTF-8''H%C3%B6he%201.pdf`,
     })
     const part = await t.as.lead.get(path).set('Range', 'bytes=0-4').expect(206)
@@ -243,7 +332,14 @@ describe('sheets', () => {
   })
 
   it('finds a phrase on every page, across spaces and dashes, with its boxes', async () => {
-    const { body } = await upload(makePdf([{ lines: ['Pot life 25\u201330 min'.replace('\u2013', '-')] }, { lines: ['nothing'] }, { lines: ['the pot', 'life again'] }]), 'search.pdf').expect(200)
+    const { body } = await upload(
+      makePdf([
+        { lines: ['Pot life 25\u201330 min'.replace('\u2013', '-')] },
+        { lines: ['nothing'] },
+        { lines: ['the pot', 'life again'] },
+      ]),
+      'search.pdf',
+    ).expect(200)
     const path = `/api/sheet-revisions/${body.files[0].revisionId}/hits`
     const { body: found } = await t.as.lead.get(path).query({ q: 'POT  life' }).expect(200)
     expect(found.hits.map((hit: { page: number }) => hit.page)).toEqual([1, 3])
@@ -258,7 +354,13 @@ describe('sheets', () => {
     const { body } = await upload(onePage('Not theirs'), 'n.pdf').expect(200)
     const { revisionId, sheet } = body.files[0]
     await t.as.crew.get('/api/sheets').expect(403)
-    for (const path of [`/api/sheets/${sheet.id}`, `/api/sheet-revisions/${revisionId}`, `/api/sheet-revisions/${revisionId}/file`, `/api/sheet-revisions/${revisionId}/pages/1`, `/api/sheet-revisions/${revisionId}/hits?q=a`]) {
+    for (const path of [
+      `/api/sheets/${sheet.id}`,
+      `/api/sheet-revisions/${revisionId}`,
+      `/api/sheet-revisions/${revisionId}/file`,
+      `/api/sheet-revisions/${revisionId}/pages/1`,
+      `/api/sheet-revisions/${revisionId}/hits?q=a`,
+    ]) {
       await t.as.crew.get(path).expect(404)
       await t.as.nobody.get(path).expect(401)
       await t.as.estimator.get(path).expect(200)

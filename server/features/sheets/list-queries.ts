@@ -18,11 +18,16 @@ const subjectNames = sql<string[]>`(
 /** Each word is contained or nearly so: a typo does not hide a sheet. */
 function matches(q: string, text: SQL | typeof sheets.searchText): SQL | undefined {
   const words = q.toLowerCase().split(/\s+/).filter(Boolean).slice(0, 8)
-  return and(...words.map((word) => sql`(position(${word} in ${text}) > 0 or (length(${word}) > 3 and word_similarity(${word}, ${text}) >= 0.5))`))
+  return and(
+    ...words.map((word) => sql`(position(${word} in ${text}) > 0 or (length(${word}) > 3 and word_similarity(${word}, ${text}) >= 0.5))`),
+  )
 }
 
 const columns = {
-  title: sql`lower(${sheets.title})`, maker: sql`lower(${sheets.maker})`, revisionDate: sheetRevisions.revisionDate, uploadedAt: sheetRevisions.uploadedAt,
+  title: sql`lower(${sheets.title})`,
+  maker: sql`lower(${sheets.maker})`,
+  revisionDate: sheetRevisions.revisionDate,
+  uploadedAt: sheetRevisions.uploadedAt,
   pages: sheetRevisions.pages,
 } as const
 
@@ -35,17 +40,38 @@ export async function listSheets(db: Database, wanted: Wanted & { oldestDay: str
     kind ? eq(sheets.kind, kind) : undefined,
     standing === 'all' ? undefined : standing === 'superseded' ? superseded : sql`not ${superseded}`,
     age === 'undated' ? isNull(sheetRevisions.revisionDate) : undefined,
-    age === 'beyond' ? sql`${sheetRevisions.revisionDate} < ${oldestDay}` : age === 'within' ? sql`${sheetRevisions.revisionDate} >= ${oldestDay}` : undefined,
+    age === 'beyond'
+      ? sql`${sheetRevisions.revisionDate} < ${oldestDay}`
+      : age === 'within'
+        ? sql`${sheetRevisions.revisionDate} >= ${oldestDay}`
+        : undefined,
   )
   const column = columns[sort.replace(/^-/, '') as keyof typeof columns]
   const order = sort.startsWith('-') ? sql`${column} desc nulls last` : sql`${column} asc nulls last`
   const from = <T extends Record<string, unknown>>(fields: T) =>
-    db.select(fields as never).from(sheetRevisions).innerJoin(sheets, eq(sheets.id, sheetRevisions.sheetId)).where(where)
+    db
+      .select(fields as never)
+      .from(sheetRevisions)
+      .innerJoin(sheets, eq(sheets.id, sheetRevisions.sheetId))
+      .where(where)
   const rows = (await from({
-    sheetId: sheets.id, revisionId: sheetRevisions.id, kind: sheets.kind, title: sheets.title, maker: sheets.maker, fileName: sheetRevisions.fileName,
-    revisionDate: sheetRevisions.revisionDate, pages: sheetRevisions.pages, state: sheetRevisions.state, uploadedAt: sheetRevisions.uploadedAt,
-    superseded, revisions: revisionCount, subjects: subjectNames,
-  }).orderBy(order, desc(sheetRevisions.sequence), asc(sheetRevisions.id)).limit(limit).offset(offset)) as SheetRow[]
+    sheetId: sheets.id,
+    revisionId: sheetRevisions.id,
+    kind: sheets.kind,
+    title: sheets.title,
+    maker: sheets.maker,
+    fileName: sheetRevisions.fileName,
+    revisionDate: sheetRevisions.revisionDate,
+    pages: sheetRevisions.pages,
+    state: sheetRevisions.state,
+    uploadedAt: sheetRevisions.uploadedAt,
+    superseded,
+    revisions: revisionCount,
+    subjects: subjectNames,
+  })
+    .orderBy(order, desc(sheetRevisions.sequence), asc(sheetRevisions.id))
+    .limit(limit)
+    .offset(offset)) as SheetRow[]
   const [counted] = (await from({ total: count() })) as { total: number }[]
   const items = rows.map((row) => ({ ...row, uploadedAt: new Date(row.uploadedAt).toISOString() }))
   return pageOf(items, { offset, limit, total: counted?.total ?? 0 })

@@ -24,8 +24,17 @@ const root = dirname(createRequire(import.meta.url).resolve('pdfjs-dist/package.
 /** Reads pages and words of a PDF. Nothing in the file is run; pictures are not decoded. */
 export async function readPages(bytes: Uint8Array<ArrayBuffer>): Promise<ReadResult> {
   const task = getDocument({
-    data: bytes, verbosity: 0, isEvalSupported: false, enableXfa: false, maxImageSize: 1, disableFontFace: true, useSystemFonts: false,
-    standardFontDataUrl: `${root}/standard_fonts/`, cMapUrl: `${root}/cmaps/`, cMapPacked: true, wasmUrl: `${root}/wasm/`,
+    data: bytes,
+    verbosity: 0,
+    isEvalSupported: false,
+    enableXfa: false,
+    maxImageSize: 1,
+    disableFontFace: true,
+    useSystemFonts: false,
+    standardFontDataUrl: `${root}/standard_fonts/`,
+    cMapUrl: `${root}/cmaps/`,
+    cMapPacked: true,
+    wasmUrl: `${root}/wasm/`,
   })
   try {
     const document = await task.promise
@@ -63,7 +72,8 @@ const round = (points: number) => Math.round(points * 100) / 100
 async function fontsOf(page: PDFPageProxy, { fnArray, argsArray }: PDFOperatorList): Promise<Map<string, GlyphRunFont>> {
   const used = fnArray.flatMap((operator, index) => (operator === OPS.setFont ? [(argsArray[index] as [string])[0]] : []))
   const arrived = [...new Set(used)].map(
-    (name) => new Promise<[string, GlyphRunFont]>((resolve) => void page.commonObjs.get(name, (font: GlyphRunFont) => resolve([name, font]))),
+    (name) =>
+      new Promise<[string, GlyphRunFont]>((resolve) => void page.commonObjs.get(name, (font: GlyphRunFont) => resolve([name, font]))),
   )
   return new Map(await Promise.all(arrived))
 }

@@ -86,7 +86,13 @@ class Pen {
     this.move(0, this.#state.leading)
   }
   show(glyphs: (Glyph | number)[]): void {
-    const [dx, dy] = showGlyphs({ glyphs, state: this.#state, matrix: times(this.#state.ctm, this.#matrix), ...this.#at, writer: this.writer })
+    const [dx, dy] = showGlyphs({
+      glyphs,
+      state: this.#state,
+      matrix: times(this.#state.ctm, this.#matrix),
+      ...this.#at,
+      writer: this.writer,
+    })
     this.#at = { ...this.#at, x: this.#at.x + dx, y: this.#at.y + dy }
   }
 }
@@ -165,7 +171,9 @@ function showGlyphs({ glyphs, state, matrix, x, y, writer }: Run): [number, numb
       em: size,
       from: vertical ? [x, y - pen] : [left, base],
       to: vertical ? [x, y - pen - advance] : [left + advance * scale, base],
-      rect: vertical ? [x - width / 2, y - pen - advance, x + width / 2, y - pen] : [left, base + descent, left + width * scale, base + ascent],
+      rect: vertical
+        ? [x - width / 2, y - pen - advance, x + width / 2, y - pen]
+        : [left, base + descent, left + width * scale, base + ascent],
     })
     pen += advance
   }

@@ -51,7 +51,9 @@ export async function addRevision(tx: Transaction, { pages, ...revision }: NewRe
   const [row] = await tx
     .insert(sheetRevisions)
     .values({
-      ...revision, state, pages: pages.length,
+      ...revision,
+      state,
+      pages: pages.length,
       sequence: sql`(select coalesce(max(${sheetRevisions.sequence}), 0) + 1 from ${sheetRevisions} where ${sheetRevisions.sheetId} = ${revision.sheetId})`,
     })
     .onConflictDoNothing({ target: sheetRevisions.sha256 })
@@ -61,8 +63,17 @@ export async function addRevision(tx: Transaction, { pages, ...revision }: NewRe
   for (let from = 0; from < rows.length; from += 50) await tx.insert(sheetPages).values(rows.slice(from, from + 50))
   await arrange(tx, revision.sheetId)
   await recordChange(tx, {
-    personId: revision.uploadedBy, action: 'revision-added', subject: { kind: 'sheet', id: revision.sheetId },
-    to: { revisionId: row.id, fileName: revision.fileName, sha256: revision.sha256, revisionDate: revision.revisionDate, pages: pages.length, state },
+    personId: revision.uploadedBy,
+    action: 'revision-added',
+    subject: { kind: 'sheet', id: revision.sheetId },
+    to: {
+      revisionId: row.id,
+      fileName: revision.fileName,
+      sha256: revision.sha256,
+      revisionDate: revision.revisionDate,
+      pages: pages.length,
+      state,
+    },
   })
   return row.id
 }
@@ -72,7 +83,8 @@ async function setSubjects(tx: Transaction, sheetId: string, subjects: readonly 
   const productIds = [...new Set(subjects.flatMap((subject) => ('productId' in subject ? [subject.productId] : [])))]
   const mixIds = [...new Set(subjects.flatMap((subject) => ('mixId' in subject ? [subject.mixId] : [])))]
   await tx.delete(sheetSubjects).where(eq(sheetSubjects.sheetId, sheetId))
-  const foundProducts = productIds.length > 0 ? await tx.select({ id: products.id }).from(products).where(inArray(products.id, productIds)) : []
+  const foundProducts =
+    productIds.length > 0 ? await tx.select({ id: products.id }).from(products).where(inArray(products.id, productIds)) : []
   const foundMixes = mixIds.length > 0 ? await tx.select({ id: mixes.id }).from(mixes).where(inArray(mixes.id, mixIds)) : []
   if (foundProducts.length < productIds.length || foundMixes.length < mixIds.length) {
     throw new AppError('invalid', { fields: { subjects: 'One of these products or mixes is not here any more.' } })
@@ -87,12 +99,22 @@ async function arrange(tx: Transaction, sheetId: string): Promise<void> {
   const wanted = inOrder(revisions.map((revision) => ({ ...revision, uploadedAt: new Date(revision.uploadedAt).toISOString() })))
   if (wanted.some((revision, index) => revision.sequence !== index + 1)) {
     // Out of the way first: no two revisions of a sheet may have one number even for a moment.
-    await tx.update(sheetRevisions).set({ sequence: sql`-${sheetRevisions.sequence} - 100000` }).where(eq(sheetRevisions.sheetId, sheetId))
-    for (const [index, revision] of wanted.entries()) await tx.update(sheetRevisions).set({ sequence: index + 1 }).where(eq(sheetRevisions.id, revision.id))
+    await tx
+      .update(sheetRevisions)
+      .set({ sequence: sql`-${sheetRevisions.sequence} - 100000` })
+      .where(eq(sheetRevisions.sheetId, sheetId))
+    for (const [index, revision] of wanted.entries())
+      await tx
+        .update(sheetRevisions)
+        .set({ sequence: index + 1 })
+        .where(eq(sheetRevisions.id, revision.id))
   }
   const [sheet] = await tx.select({ title: sheets.title, maker: sheets.maker }).from(sheets).where(eq(sheets.id, sheetId))
   const names = wanted.reverse().map(({ fileName }) => fileName.replace(/\.pdf$/i, '').replace(/[_-]+/g, ' '))
-  await tx.update(sheets).set({ searchText: [sheet?.title, sheet?.maker, ...names].join(' ').toLowerCase().slice(0, 4000) }).where(eq(sheets.id, sheetId))
+  await tx
+    .update(sheets)
+    .set({ searchText: [sheet?.title, sheet?.maker, ...names].join(' ').toLowerCase().slice(0, 4000) })
+    .where(eq(sheets.id, sheetId))
 }
 
 interface SheetChange extends SheetDetails {
@@ -108,40 +130,82 @@ export async function changeSheet(tx: Transaction, sheetId: string, { by, ...cha
   if (row.version !== version) throw new AppError('conflict')
   const before = await readSheet(tx, sheetId, by)
   for (const { revisionId, revisionDate } of dates) {
-    if (!before.revisions.some((revision) => revision.id === revisionId)) throw new AppError('invalid', { fields: { dates: 'A revision is not of this sheet.' } })
+    if (!before.revisions.some((revision) => revision.id === revisionId))
+      throw new AppError('invalid', { fields: { dates: 'A revision is not of this sheet.' } })
     await tx.update(sheetRevisions).set({ revisionDate }).where(eq(sheetRevisions.id, revisionId))
   }
-  await tx.update(sheets).set({ kind, title, maker, version: version + 1 }).where(eq(sheets.id, sheetId))
+  await tx
+    .update(sheets)
+    .set({ kind, title, maker, version: version + 1 })
+    .where(eq(sheets.id, sheetId))
   await setSubjects(tx, sheetId, subjects)
   await arrange(tx, sheetId)
   const after = await readSheet(tx, sheetId, by)
-  await recordChange(tx, { personId: by.id, action: 'changed', subject: { kind: 'sheet', id: sheetId }, from: described(before), to: described(after) })
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'changed',
+    subject: { kind: 'sheet', id: sheetId },
+    from: described(before),
+    to: described(after),
+  })
   return after
 }
 
 /** What the audit trail keeps of a sheet. */
 function described({ kind, title, maker, subjects, revisions }: Sheet) {
   return {
-    kind, title, maker, subjects: subjects.map((subject) => ({ [`${subject.kind}Id`]: subject.id, name: subject.name })),
+    kind,
+    title,
+    maker,
+    subjects: subjects.map((subject) => ({ [`${subject.kind}Id`]: subject.id, name: subject.name })),
     revisions: revisions.map((revision) => ({ revisionId: revision.id, revisionDate: revision.revisionDate })),
   }
 }
 
 /** Makes a revision one of another sheet, which keeps its own title and subjects; a sheet left empty goes. */
-export async function moveRevision(tx: Transaction, { revisionId, sheetId }: { revisionId: string; sheetId: string }, by: User): Promise<Sheet> {
-  const [revision] = await tx.select({ from: sheetRevisions.sheetId }).from(sheetRevisions).where(eq(sheetRevisions.id, revisionId)).for('update')
+export async function moveRevision(
+  tx: Transaction,
+  { revisionId, sheetId }: { revisionId: string; sheetId: string },
+  by: User,
+): Promise<Sheet> {
+  const [revision] = await tx
+    .select({ from: sheetRevisions.sheetId })
+    .from(sheetRevisions)
+    .where(eq(sheetRevisions.id, revisionId))
+    .for('update')
   if (!revision) throw new AppError('not-found')
-  const locked = await tx.select({ id: sheets.id }).from(sheets).where(inArray(sheets.id, [revision.from, sheetId])).orderBy(sheets.id).for('update')
-  if (!locked.some((sheet) => sheet.id === sheetId)) throw new AppError('invalid', { fields: { sheetId: 'This sheet is not here any more.' } })
+  const locked = await tx
+    .select({ id: sheets.id })
+    .from(sheets)
+    .where(inArray(sheets.id, [revision.from, sheetId]))
+    .orderBy(sheets.id)
+    .for('update')
+  if (!locked.some((sheet) => sheet.id === sheetId))
+    throw new AppError('invalid', { fields: { sheetId: 'This sheet is not here any more.' } })
   if (revision.from === sheetId) return readSheet(tx, sheetId, by)
-  const [last] = await tx.select({ sequence: max(sheetRevisions.sequence) }).from(sheetRevisions).where(eq(sheetRevisions.sheetId, sheetId))
-  await tx.update(sheetRevisions).set({ sheetId, sequence: (last?.sequence ?? 0) + 1 }).where(eq(sheetRevisions.id, revisionId))
+  const [last] = await tx
+    .select({ sequence: max(sheetRevisions.sequence) })
+    .from(sheetRevisions)
+    .where(eq(sheetRevisions.sheetId, sheetId))
+  await tx
+    .update(sheetRevisions)
+    .set({ sheetId, sequence: (last?.sequence ?? 0) + 1 })
+    .where(eq(sheetRevisions.id, revisionId))
   const left = await tx.select({ id: sheetRevisions.id }).from(sheetRevisions).where(eq(sheetRevisions.sheetId, revision.from)).limit(1)
   if (left.length > 0) await arrange(tx, revision.from)
   else await removeEmptySheet(tx, revision.from, by)
   await arrange(tx, sheetId)
-  await tx.update(sheets).set({ version: sql`${sheets.version} + 1` }).where(inArray(sheets.id, [revision.from, sheetId]))
-  await recordChange(tx, { personId: by.id, action: 'revision-moved', subject: { kind: 'sheet', id: sheetId }, from: { sheetId: revision.from, revisionId }, to: { sheetId, revisionId } })
+  await tx
+    .update(sheets)
+    .set({ version: sql`${sheets.version} + 1` })
+    .where(inArray(sheets.id, [revision.from, sheetId]))
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'revision-moved',
+    subject: { kind: 'sheet', id: sheetId },
+    from: { sheetId: revision.from, revisionId },
+    to: { sheetId, revisionId },
+  })
   return readSheet(tx, sheetId, by)
 }
 

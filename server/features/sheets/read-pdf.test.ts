@@ -35,7 +35,10 @@ describe('reading a PDF in a thread of its own', () => {
   })
 
   it('ends what unpacks to more memory than allowed', async () => {
-    expect(await readPdf(keep('bomb.pdf', bomb()), { ...limits, growthMegabytes: 200 })).toEqual({ problem: 'too-large', detail: 'more memory to read than allowed' })
+    expect(await readPdf(keep('bomb.pdf', bomb()), { ...limits, growthMegabytes: 200 })).toEqual({
+      problem: 'too-large',
+      detail: 'more memory to read than allowed',
+    })
   }, 30_000)
 
   it('outlives a thread that runs out of memory or breaks, and reads the next file', async () => {

@@ -81,7 +81,9 @@ function readWith(worker: Worker, path: string, limits: ReadLimits): Promise<Rea
     }
     const tooMuch = (detail: string) => end({ problem: 'too-large', detail })
     const broken = (error: Error & { code?: string }) =>
-      error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? tooMuch('more memory to read than allowed') : end({ problem: 'damaged', detail: error.message })
+      error.code === 'ERR_WORKER_OUT_OF_MEMORY'
+        ? tooMuch('more memory to read than allowed')
+        : end({ problem: 'damaged', detail: error.message })
     const ended = (code: number) => end({ problem: 'damaged', detail: `the reader ended with ${code}` })
     const timer = setTimeout(() => tooMuch(`more than ${limits.milliseconds / 1000} s to read`), limits.milliseconds)
     const watch = setInterval(() => {

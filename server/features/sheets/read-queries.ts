@@ -33,7 +33,10 @@ function openTo(user: User) {
 
 /** A sheet with its revisions, newest first. @throws AppError `not-found`, also for one that the person may not know of. */
 export async function readSheet(db: Database | Transaction, sheetId: string, user: User): Promise<Sheet> {
-  const [sheet] = await db.select().from(sheets).where(and(eq(sheets.id, sheetId), openTo(user)))
+  const [sheet] = await db
+    .select()
+    .from(sheets)
+    .where(and(eq(sheets.id, sheetId), openTo(user)))
   if (!sheet) throw new AppError('not-found')
   const { id, kind, title, maker, version } = sheet
   return { id, kind, title, maker, version, revisions: await revisionsOf(db, id), subjects: await subjectsOf(db, id) }
@@ -51,20 +54,38 @@ async function revisionsOf(db: Database | Transaction, sheetId: string): Promise
     const { id, fileName, bytes, sha256, pages, state, revisionDate, uploadedAt } = revision
     const suggestedDate = revisionDate === null ? findRevisionDate(await textOf(db, id)) : null
     revisions.push({
-      id, fileName, bytes, sha256, pages, state, revisionDate, suggestedDate, uploadedByName, superseded: index > 0, uploadedAt: new Date(uploadedAt).toISOString(),
+      id,
+      fileName,
+      bytes,
+      sha256,
+      pages,
+      state,
+      revisionDate,
+      suggestedDate,
+      uploadedByName,
+      superseded: index > 0,
+      uploadedAt: new Date(uploadedAt).toISOString(),
     })
   }
   return revisions
 }
 
 async function textOf(db: Database | Transaction, revisionId: string): Promise<string> {
-  const rows = await db.select({ text: sheetPages.text }).from(sheetPages).where(eq(sheetPages.revisionId, revisionId)).orderBy(asc(sheetPages.page)).limit(40)
+  const rows = await db
+    .select({ text: sheetPages.text })
+    .from(sheetPages)
+    .where(eq(sheetPages.revisionId, revisionId))
+    .orderBy(asc(sheetPages.page))
+    .limit(40)
   return rows.map((row) => row.text).join('\n')
 }
 
 async function subjectsOf(db: Database | Transaction, sheetId: string): Promise<Subject[]> {
   const rows = await db
-    .select({ product: { id: products.id, name: products.name, maker: products.maker }, mix: { id: mixes.id, name: mixes.name, maker: mixes.maker } })
+    .select({
+      product: { id: products.id, name: products.name, maker: products.maker },
+      mix: { id: mixes.id, name: mixes.name, maker: mixes.maker },
+    })
     .from(sheetSubjects)
     .leftJoin(products, eq(products.id, sheetSubjects.productId))
     .leftJoin(mixes, eq(mixes.id, sheetSubjects.mixId))
@@ -89,7 +110,10 @@ export async function findRevision(db: Database | Transaction, revisionId: strin
 
 export async function readPageWords(db: Database, { revisionId, page }: { revisionId: string; page: number }, user: User) {
   await findRevision(db, revisionId, user)
-  const [row] = await db.select().from(sheetPages).where(and(eq(sheetPages.revisionId, revisionId), eq(sheetPages.page, page)))
+  const [row] = await db
+    .select()
+    .from(sheetPages)
+    .where(and(eq(sheetPages.revisionId, revisionId), eq(sheetPages.page, page)))
   if (!row) throw new AppError('not-found')
   const { width, height, rotation, words } = row
   return { page, width, height, rotation, words }
@@ -101,13 +125,18 @@ const mostHits = 500
 export async function searchRevision(db: Database, { revisionId, q }: { revisionId: string; q: string }, user: User) {
   await findRevision(db, revisionId, user)
   const hits: { page: number; boxes: [number, number, number, number][]; excerpt: string }[] = []
-  const [last] = await db.select({ page: max(sheetPages.page) }).from(sheetPages).where(eq(sheetPages.revisionId, revisionId))
+  const [last] = await db
+    .select({ page: max(sheetPages.page) })
+    .from(sheetPages)
+    .where(eq(sheetPages.revisionId, revisionId))
   const pagesAtOnce = 50
   for (let from = 1; from <= (last?.page ?? 0) && hits.length <= mostHits; from += pagesAtOnce) {
     const rows = await db
       .select({ page: sheetPages.page, words: sheetPages.words })
       .from(sheetPages)
-      .where(and(eq(sheetPages.revisionId, revisionId), sql`${sheetPages.page} >= ${from}`, sql`${sheetPages.page} < ${from + pagesAtOnce}`))
+      .where(
+        and(eq(sheetPages.revisionId, revisionId), sql`${sheetPages.page} >= ${from}`, sql`${sheetPages.page} < ${from + pagesAtOnce}`),
+      )
       .orderBy(asc(sheetPages.page))
     for (const row of rows) hits.push(...findPhrase(row.words, q).map((hit) => ({ page: row.page, ...hit })))
   }

@@ -45,7 +45,9 @@ export function sheetRoutes({ db, files, clock }: AppContext): Router {
     ],
   )
   serve(router, wire.readSheet, ({ params, user }) => readSheet(db, params.sheetId, user))
-  serve(router, wire.changeSheet, ({ params, body, user }) => db.transaction((tx) => changeSheet(tx, params.sheetId, { ...body, by: user })))
+  serve(router, wire.changeSheet, ({ params, body, user }) =>
+    db.transaction((tx) => changeSheet(tx, params.sheetId, { ...body, by: user })),
+  )
   serve(router, wire.moveRevision, ({ params, body, user }) => db.transaction((tx) => moveRevision(tx, { ...params, ...body }, user)))
   serve(router, wire.readRevision, async ({ params, user }) => {
     const { sheetId, id } = await findRevision(db, params.revisionId, user)

@@ -3,12 +3,18 @@ import { findRevisionDate, suggestDetails } from './suggest-details.ts'
 
 const page = (...lines: string[]) => ({
   text: lines.join('\n'),
-  words: lines.flatMap((line, row) => line.split(' ').map((word): [string, number, number, number, number] => [word, 0, row * 30, 10, row * 30 + (row === 1 ? 24 : 12)])),
+  words: lines.flatMap((line, row) =>
+    line.split(' ').map((word): [string, number, number, number, number] => [word, 0, row * 30, 10, row * 30 + (row === 1 ? 24 : 12)]),
+  ),
 })
 
 describe('what the text of a sheet suggests', () => {
   it('is the largest line as title, never the name of the paper itself', () => {
-    expect(suggestDetails([page('Product data sheet', 'Ostrel Body 40', 'A two-part resin')], 'x.pdf')).toEqual({ kind: 'data', title: 'Ostrel Body 40', revisionDate: null })
+    expect(suggestDetails([page('Product data sheet', 'Ostrel Body 40', 'A two-part resin')], 'x.pdf')).toEqual({
+      kind: 'data',
+      title: 'Ostrel Body 40',
+      revisionDate: null,
+    })
   })
 
   it('is a safety sheet where the heading says so, not where a data sheet points to one', () => {

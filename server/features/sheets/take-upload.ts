@@ -53,7 +53,15 @@ async function keep({ db, files, fields, user, file, pages }: Kept): Promise<Upl
   try {
     const kept = await db.transaction(async (tx) => {
       const sheetId = fields.sheetId ?? (await addSheet(tx, details, user.id))
-      const revisionId = await addRevision(tx, { sheetId, sha256, bytes, fileName, revisionDate: fields.revisionDate ?? null, pages, uploadedBy: user.id })
+      const revisionId = await addRevision(tx, {
+        sheetId,
+        sha256,
+        bytes,
+        fileName,
+        revisionDate: fields.revisionDate ?? null,
+        pages,
+        uploadedBy: user.id,
+      })
       stored.isNew = await files.adopt(path, sha256)
       return { revisionId, sheet: await readSheet(tx, sheetId, user) }
     })
@@ -79,6 +87,7 @@ async function beginsLikePdf(path: string): Promise<boolean> {
 }
 
 function messageOf(problem: ReadProblem, detail: string): string {
-  if (problem === 'too-large') return `This PDF is too large to take in: ${detail}. At most 1,000 pages, 30 seconds of reading and 512 MB of memory are allowed.`
+  if (problem === 'too-large')
+    return `This PDF is too large to take in: ${detail}. At most 1,000 pages, 30 seconds of reading and 512 MB of memory are allowed.`
   return new AppError(problem).message
 }

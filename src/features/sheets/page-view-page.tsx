@@ -98,10 +98,10 @@ function Pages({ revision, file: { pdf, error } }: { revision: Revision; file: F
     <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1fr)_320px]">
       <div className="min-w-0 max-lg:order-2">
         <ViewToolbar page={page} pages={revision.pages} onPage={goTo} zoom={zoom} onZoom={setZoom} />
-        {/* eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls must be reachable by keyboard */}
         <div
           ref={ref}
           className="mt-3 overflow-x-auto"
+          // eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls must be reachable by keyboard
           tabIndex={0}
           role="region"
           data-wide={zoom > 1 || undefined}
