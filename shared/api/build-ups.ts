@@ -4,7 +4,6 @@ import { evaluationSchema } from '../domain/evaluation.ts'
 import { figureSchema } from '../domain/figure.ts'
 import { mixFactsSchema } from '../domain/mix.ts'
 import { productFactsSchema } from '../domain/product.ts'
-import { type Dimension, type Quantity, dimensionOf } from '../domain/units.ts'
 import { sectionLayerSchema } from '../drawing/section-layer.ts'
 import { endpoint } from './endpoint.ts'
 import { idSchema, line, listOf, listQuery, paragraph, versionSchema } from './list.ts'
@@ -61,9 +60,6 @@ const buildUpSchema = z.object({
 })
 export type BuildUp = z.infer<typeof buildUpSchema>
 
-const measures = (dimension: Dimension) => (given: Quantity | null) => given === null || dimensionOf(given.unit) === dimension
-const wrongUnit = { error: 'This unit measures something else.' }
-
 const courseBody = courseSchema
   .extend({
     id: z.string().regex(/^[A-Za-z0-9_-]{1,40}$/, 'Ids have letters, digits, - and _ only.'),
@@ -74,20 +70,9 @@ const courseBody = courseSchema
     broadcast: courseSchema.shape.broadcast.unwrap().extend({ productId: idSchema }).nullable(),
   })
   .refine((course) => !(course.thickness && course.spreadRate), { path: ['spreadRate'], error: 'Give the thickness or the spread rate, not both.' })
-  .refine((course) => measures('density')(course.filler?.loading ?? null) && (course.filler?.loading.value ?? 1) > 0, {
-    path: ['filler', 'loading'], error: 'Give the sand per volume of mixed resin, above nothing.',
-  })
-  .refine((course) => measures('consumption')(course.broadcast?.rate ?? null) && (course.broadcast?.rate.value ?? 1) > 0, {
-    path: ['broadcast', 'rate'], error: 'Give the sand per area, above nothing.',
-  })
 
 const conditionsBody = conditionsSchema
   .extend({ vocPlace: line(120).nullable() })
-  .refine((conditions) => measures('temperature')(conditions.slabTemperature), { path: ['slabTemperature'], ...wrongUnit })
-  .refine((conditions) => measures('temperature')(conditions.airTemperature), { path: ['airTemperature'], ...wrongUnit })
-  .refine((conditions) => measures('emission')(conditions.moistureEmission) && (conditions.moistureEmission?.value ?? 0) >= 0, {
-    path: ['moistureEmission'], error: 'Give the emission rate, not below nothing.',
-  })
 
 const coursesBody = z
   .array(courseBody)

@@ -2,6 +2,7 @@ import * as z from 'zod'
 import { mixFactsSchema } from './mix.ts'
 import { productFactsSchema } from './product.ts'
 import { quantitySchema } from './property.ts'
+import { type Dimension, dimensionOf, valueIn } from './units.ts'
 
 /** Stages of a floor, from the slab upward. */
 export const stages = ['prep', 'fill', 'slurry', 'grind', 'prime', 'body', 'broadcast', 'seal', 'top', 'cove'] as const
@@ -12,14 +13,37 @@ export const dryStages = ['prep', 'grind'] as const satisfies readonly Stage[]
 
 /** Methods of ICRI 310.2R-2013. */
 export const preparationMethods = [
-  'detergent scrubbing', 'low-pressure water cleaning', 'acid etching', 'grinding', 'abrasive blasting', 'steel shot blasting', 'scarifying',
-  'needle scaling', 'high-pressure water jetting', 'scabbling', 'surface retarder', 'flame blasting', 'milling', 'handheld concrete breaker',
+  'detergent scrubbing',
+  'low-pressure water cleaning',
+  'acid etching',
+  'grinding',
+  'abrasive blasting',
+  'steel shot blasting',
+  'scarifying',
+  'needle scaling',
+  'high-pressure water jetting',
+  'scabbling',
+  'surface retarder',
+  'flame blasting',
+  'milling',
+  'handheld concrete breaker',
 ] as const
 export const preparationSchema = z.strictObject({
   method: z.enum(preparationMethods),
   /** Concrete surface profile asked for, 1 to 10. */
   profile: z.int().min(1).max(10).optional(),
 })
+
+const wrongUnit = { error: 'This unit measures something else.' }
+const measured = (dimension: Dimension) => quantitySchema.refine(({ unit }) => dimensionOf(unit) === dimension, wrongUnit)
+/** An amount of a dimension, above nothing. */
+const amount = (dimension: Dimension) =>
+  measured(dimension).refine(({ value }) => value >= 1e-6, { error: 'Give an amount above nothing.' })
+/** Slab and air: wider than any place a floor is laid in, and short of where the formulae of vapour end. */
+const temperature = measured('temperature').refine(
+  (given) => dimensionOf(given.unit) !== 'temperature' || (valueIn(given, '°C') >= -60 && valueIn(given, '°C') <= 100),
+  { error: 'Give a temperature between −60 and 100 °C.' },
+)
 
 export const buildUpStatusSchema = z.enum(['draft', 'released', 'superseded', 'withdrawn'])
 export type BuildUpStatus = z.infer<typeof buildUpStatusSchema>
@@ -30,12 +54,18 @@ export const courseSchema = z.strictObject({
   stage: stageSchema,
   title: z.string().trim().min(1).max(120),
   mixId: z.string().nullable(),
-  thickness: z.strictObject({ value: z.number().positive().max(100_000), unit: z.enum(['mil', 'µm', 'mm', 'in']), film: z.enum(['wet', 'dry']) }).nullable(),
-  spreadRate: z.strictObject({ value: z.number().positive().max(100_000), unit: z.enum(['ft²/gal', 'm²/L']) }).nullable(),
+  thickness: z
+    .strictObject({
+      value: z.number().positive().min(1e-6).max(100_000),
+      unit: z.enum(['mil', 'µm', 'mm', 'in']),
+      film: z.enum(['wet', 'dry']),
+    })
+    .nullable(),
+  spreadRate: z.strictObject({ value: z.number().positive().min(1e-6).max(100_000), unit: z.enum(['ft²/gal', 'm²/L']) }).nullable(),
   /** Sand in the pail: mass per volume of mixed liquid resin. */
-  filler: z.strictObject({ productId: z.string(), loading: quantitySchema }).nullable(),
+  filler: z.strictObject({ productId: z.string(), loading: amount('density') }).nullable(),
   /** Sand thrown on the wet film: mass per area. */
-  broadcast: z.strictObject({ productId: z.string(), rate: quantitySchema, toRefusal: z.boolean() }).nullable(),
+  broadcast: z.strictObject({ productId: z.string(), rate: amount('consumption'), toRefusal: z.boolean() }).nullable(),
   preparation: preparationSchema.nullable(),
   /** Hours from the start of the floor's first course to the start of this one; null: as soon as the course beneath allows. */
   startsAfter: z.number().min(0).max(8760).nullable(),
@@ -45,14 +75,16 @@ export type Course = z.infer<typeof courseSchema>
 
 /** What the floor is laid under. */
 export const conditionsSchema = z.strictObject({
-  slabTemperature: quantitySchema,
-  airTemperature: quantitySchema,
+  slabTemperature: temperature,
+  airTemperature: temperature,
   /** Of the air, per cent. */
   relativeHumidity: z.number().min(1).max(100),
   /** Measured in the slab (ASTM F2170), per cent; null: not measured. */
   substrateRelativeHumidity: z.number().min(0).max(100).nullable(),
   /** Calcium-chloride rate (ASTM F1869); null: not measured. */
-  moistureEmission: quantitySchema.nullable(),
+  moistureEmission: measured('emission')
+    .refine(({ value }) => value >= 0, { error: 'Give the emission rate, not below nothing.' })
+    .nullable(),
   /** Place whose VOC rules are asked for; null: none chosen. */
   vocPlace: z.string().nullable(),
 })
