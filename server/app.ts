@@ -11,6 +11,7 @@ import { sessionRoutes } from './features/people/session-routes.ts'
 import { checkPassword } from './features/people/sign-in.ts'
 import { siteCardRoutes } from './features/site-cards/routes.ts'
 import { sheetRoutes } from './features/sheets/routes.ts'
+import { specificationRoutes } from './features/specifications/routes.ts'
 import type { FileStore } from './files/store.ts'
 import type { AppContext } from './http/context.ts'
 import { handleErrors, nothingHere } from './http/handle-errors.ts'
@@ -37,7 +38,7 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, catalogueRoutes, jobRoutes, siteCardRoutes, sheetRoutes, buildUpRoutes]
+const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, catalogueRoutes, jobRoutes, siteCardRoutes, sheetRoutes, buildUpRoutes, specificationRoutes]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {

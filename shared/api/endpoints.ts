@@ -7,6 +7,7 @@ import { peopleEndpoints } from './people.ts'
 import { sessionEndpoints } from './session.ts'
 import { sheetEndpoints } from './sheets.ts'
 import { siteCardEndpoints } from './site-cards.ts'
+import { specificationEndpoints } from './specifications.ts'
 
 /** Every endpoint by name: the source of the OpenAPI document and of the tests that walk it. */
 export const endpoints: Record<string, Endpoint> = {
@@ -18,4 +19,5 @@ export const endpoints: Record<string, Endpoint> = {
   ...jobEndpoints,
   ...siteCardEndpoints,
   ...sheetEndpoints,
+  ...specificationEndpoints,
 }
