@@ -98,11 +98,11 @@ export function watchWrites(folder: string): DurableFiles {
     paths.set(descriptor, String(path))
     if (isNew) dirtyFolders.add(dirname(String(path)))
     return descriptor
-  }) as typeof fs.openSync
+  })
   fs.closeSync = ((descriptor: number) => {
     paths.delete(descriptor)
     original.closeSync(descriptor)
-  }) as typeof fs.closeSync
+  })
   fs.writeSync = ((descriptor: number, ...rest: [never]) => {
     const path = pathOf(descriptor)
     if (isOurs(path)) beforeWrite(path)
@@ -112,11 +112,11 @@ export function watchWrites(folder: string): DurableFiles {
     const path = pathOf(descriptor)
     if (isOurs(path)) beforeWrite(path)
     original.ftruncateSync(descriptor, length ?? 0)
-  }) as typeof fs.ftruncateSync
+  })
   fs.truncateSync = ((path: fs.PathLike, length?: number | null) => {
     if (isOurs(String(path))) beforeWrite(String(path))
     original.truncateSync(path, length ?? 0)
-  }) as typeof fs.truncateSync
+  })
   fs.renameSync = ((from: fs.PathLike, to: fs.PathLike) => {
     if (dirtyLog.delete(String(from))) dirtyLog.add(String(to))
     if (dirtyData.delete(String(from))) {
@@ -125,11 +125,11 @@ export function watchWrites(folder: string): DurableFiles {
     entryChanged(from)
     entryChanged(to)
     original.renameSync(from, to)
-  }) as typeof fs.renameSync
+  })
   fs.unlinkSync = ((path: fs.PathLike) => {
     entryChanged(path)
     original.unlinkSync(path)
-  }) as typeof fs.unlinkSync
+  })
   fs.mkdirSync = ((path: fs.PathLike, options?: fs.MakeDirectoryOptions) => {
     entryChanged(path)
     return original.mkdirSync(path, options)
@@ -137,7 +137,7 @@ export function watchWrites(folder: string): DurableFiles {
   fs.rmdirSync = ((path: fs.PathLike) => {
     entryChanged(path)
     original.rmdirSync(path)
-  }) as typeof fs.rmdirSync
+  })
   syncBuiltinESMExports()
 
   return {

@@ -24,6 +24,7 @@ function isRefusedValue(error: unknown): boolean {
 
 /** The one place where an error becomes an answer. What is not ours is logged whole and answered without detail. */
 export function handleErrors(log: (line: string) => void): ErrorRequestHandler {
+  // eslint-disable-next-line max-params -- Express knows an error handler by its four parameters
   return (error: unknown, request, response, next) => {
     if (response.headersSent) return next(error)
     let known = asAppError(error)

@@ -1,5 +1,5 @@
 import connectPgSimple from 'connect-pg-simple'
-import { type Request, Router } from 'express'
+import { type Request, type RequestHandler, Router } from 'express'
 import session from 'express-session'
 import passport from 'passport'
 import { Strategy } from 'passport-local'
@@ -58,7 +58,7 @@ export function createSessions(options: SessionOptions): Sessions {
   const { clock } = options
   const authenticator = authenticatorFor(options)
   const middleware = Router()
-  middleware.use(sessionMiddleware(options), authenticator.session(), endOldSessions(clock))
+  middleware.use(sessionMiddleware(options), authenticator.session() as RequestHandler, endOldSessions(clock))
   const start = async (request: Request, user: User) => {
     await settled((done) => request.logIn(user, done))
     request.session.startedAt = clock()
@@ -69,7 +69,7 @@ export function createSessions(options: SessionOptions): Sessions {
     end: (request) => settled((done) => request.session.destroy(done)),
     async signIn(request) {
       const user = await new Promise<User | false>((resolve, reject) => {
-        const callback = (error: unknown, found?: User | false | null) => (error ? reject(error as Error) : resolve(found || false))
+        const callback = (error: unknown, found?: User | false | null) => (error ? reject(asError(error)) : resolve(found || false))
         const run = authenticator.authenticate('local', callback) as (request: Request, response: unknown, next: (error: Error) => void) => void
         run(request, request.res, reject)
       })
@@ -80,8 +80,10 @@ export function createSessions(options: SessionOptions): Sessions {
   }
 }
 
+const asError = (thrown: unknown) => (thrown instanceof Error ? thrown : new Error(String(thrown)))
+
 function settled(begin: (done: (error: unknown) => void) => void): Promise<void> {
-  return new Promise((resolve, reject) => begin((error) => (error ? reject(error as Error) : resolve())))
+  return new Promise((resolve, reject) => begin((error) => (error ? reject(asError(error)) : resolve())))
 }
 
 function sessionMiddleware({ pool, secret, publicUrl }: SessionOptions) {

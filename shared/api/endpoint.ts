@@ -35,7 +35,7 @@ export interface Request<E extends Endpoint> {
   query: SchemaOutput<E['query']>
   body: SchemaOutput<E['body']>
 }
-export type Reply<E extends Endpoint> = E['response'] extends z.ZodType ? z.input<E['response']> : void
+export type Reply<E extends Endpoint> = E['response'] extends z.ZodType ? z.input<E['response']> : unknown
 export type Received<E extends Endpoint> = E['response'] extends z.ZodType ? z.output<E['response']> : undefined
 
 /** What a client passes: only the parts that the endpoint has. */

@@ -4,7 +4,7 @@ import * as z from 'zod'
 export function listQuery<const S extends readonly [string, ...string[]]>(sortable: S) {
   type Choice = S[number] | `-${S[number]}`
   const choices = sortable.flatMap((key) => [key, `-${key}`]) as [Choice, ...Choice[]]
-  const order: z.ZodType<Choice, string> = z.enum(choices as [string, ...string[]]) as never
+  const order: z.ZodType<Choice, string> = z.enum(choices as [string, ...string[]])
   return z.object({
     q: z.string().trim().max(200).default(''),
     sort: order.default(choices[0] as never),
@@ -33,7 +33,7 @@ export function line(max: number) {
     .min(1, 'This cannot be empty.')
     .max(max, `At most ${max} characters.`)
     // eslint-disable-next-line no-control-regex -- control characters are what this refuses
-    .regex(/^[^\u0000-\u001f\u007f]*$/, 'Control characters are not accepted.')
+    .regex(/^[^\u0000-\u001f\u007f\p{Cs}]*$/u, 'Control characters are not accepted.')
 }
 /** Text of several lines; may be empty. */
 export function paragraph(max: number) {
@@ -42,5 +42,5 @@ export function paragraph(max: number) {
     .trim()
     .max(max, `At most ${max} characters.`)
     // eslint-disable-next-line no-control-regex -- control characters other than tab and line breaks are refused
-    .regex(/^[^\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]*$/, 'Control characters are not accepted.')
+    .regex(/^[^\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f\p{Cs}]*$/u, 'Control characters are not accepted.')
 }

@@ -73,14 +73,14 @@ async function fillCatalogue(tx: Transaction, sheets: readonly DemoSheet[], lead
   await fillSheets(tx, sheets, { known, lead })
   for (const { name, price } of demoMixes) {
     const statement: FactBody['statement'] = { property: 'packPrice', part: 'mixed', value: { min: price, max: price, unit: 'USD' } }
-    await addFactsAtOnce(tx, ofMix(known.mix(name)), [{ statement, how: { kind: 'entered', reason: 'Price list of October 2026' } }], lead)
+    await addFactsAtOnce(tx, ofMix(known.mix(name)), { bodies: [{ statement, how: { kind: 'entered', reason: 'Price list of October 2026' } }], by: lead })
   }
   for (const name of ['Corbel 40-mesh silica', 'Corbel 20-40 mesh quartz, dried']) {
     const bag: FactBody['statement'] = { property: 'packSize', part: 'mixed', value: { min: 50, max: 50, unit: 'lb' } }
     const price: FactBody['statement'] = { property: 'packPrice', part: 'mixed', value: { min: 14, max: 14, unit: 'USD' } }
-    await addFactsAtOnce(tx, ofProduct(known.product(name)), [
+    await addFactsAtOnce(tx, ofProduct(known.product(name)), { by: lead, bodies: [
       { statement: bag, how: { kind: 'entered', reason: 'Printed on the bag, delivery of 3 October 2026' } }, { statement: price, how: { kind: 'entered', reason: 'Price list of October 2026' } },
-    ], lead)
+    ] })
   }
   return known
 }
@@ -97,7 +97,7 @@ async function fillSheets(tx: Transaction, sheets: readonly DemoSheet[], { known
     const revisionId = await addRevision(tx, { sheetId, sha256, bytes, fileName, revisionDate, pages, uploadedBy: lead.id, uploadedAt })
     if (sheet.superseded) continue
     const stated = sheet.facts.map(({ statement, page, box, quote }): FactBody => ({ statement, how: { kind: 'stated', revisionId, page, box, quote } }))
-    await addFactsAtOnce(tx, 'mixId' in subject ? ofMix(subject.mixId) : ofProduct(subject.productId), stated, lead)
+    await addFactsAtOnce(tx, 'mixId' in subject ? ofMix(subject.mixId) : ofProduct(subject.productId), { bodies: stated, by: lead })
   }
 }
 

@@ -65,7 +65,7 @@ function tableOf({ table }: DemoMix, look: Look): object[] {
   ]
 }
 
-const pageOf = (look: Look, dated: string, content: object[], title: string) => ({
+const pageOf = (look: Look, content: object[], { dated, title }: { dated: string; title: string }) => ({
   pageSize: look.size,
   pageMargins: [54, 50, 54, 50],
   info: { title, author: look.company, creationDate: new Date(`${dated}T09:00:00Z`), modDate: new Date(`${dated}T09:00:00Z`), producer: 'Wearcourse demo', creator: 'Wearcourse demo' },
@@ -83,14 +83,14 @@ const paragraphs = {
 /** A data sheet as a pdfmake definition. */
 export function dataSheet(mix: DemoMix): object {
   const look = looks[mix.maker]
-  return pageOf(look, mix.dated, [
+  return pageOf(look, [
     ...look.heading(mix.name, mix.use),
     { text: `${look.dateLabel}: ${dateWords(mix.maker, mix.dated)}`, fontSize: look.body - 1, margin: [0, 0, 0, 8] },
     { text: 'Properties', bold: true, color: look.ink, margin: [0, 4, 0, 3] },
     rowsOf(mix.values, look),
     ...tableOf(mix, look),
     ...paragraphs[mix.maker].map((text) => ({ text, margin: [0, 0, 0, 6] })),
-  ], `${mix.name}, data sheet`)
+  ], { dated: mix.dated, title: `${mix.name}, data sheet` })
 }
 
 export const shareWords = ([, , min, max]: DemoProduct['hazards']['ingredients'][number]) => (min === null ? `< ${max} %` : `${min}–${max} %`)
@@ -105,7 +105,7 @@ export function safetySheet(product: DemoProduct): object {
   const codes = (list: readonly string[]) => list.map((code) => ({ columns: [{ width: 110, text: code }, { width: '*', text: ghsStatement(code) ?? '' }], margin: [4, 0, 0, 1] }))
   const firstAid = hazards.p.filter((code) => /^P30[1-5]/.test(code)).map((code) => ({ text: ghsStatement(code) ?? '', margin: [4, 0, 0, 2] }))
   const { transport } = hazards
-  return pageOf(look, product.dated, [
+  return pageOf(look, [
     ...look.heading('Safety data sheet', product.name),
     ...section(1, 'Identification', rows([['Product name', product.name], ['Use', 'Component of floor coatings, for trade use only'], ['Supplier', look.company], ['Emergency telephone', look.phone], ['Revision date', dateWords(product.maker, product.dated)]])),
     ...section(2, 'Hazard identification', [
@@ -130,7 +130,7 @@ export function safetySheet(product: DemoProduct): object {
     ...section(14, 'Transport information', transport ? rows([['UN number', transport[0]], ['Proper shipping name', transport[1]], ['Class', transport[2]], ['Packing group', transport[3]]]) : [{ text: 'Not regulated.' }]),
     ...section(15, 'Regulatory information', silent),
     ...section(16, 'Other information', [{ text: 'This sheet replaces all earlier ones.' }]),
-  ], `${product.name}, safety sheet`)
+  ], { dated: product.dated, title: `${product.name}, safety sheet` })
 }
 
 /** Words of the emergency telephone of a maker. */

@@ -2,7 +2,7 @@ import { and, asc, eq, inArray, isNull, or, sql } from 'drizzle-orm'
 import type { Fact } from '../../../shared/domain/fact.ts'
 import type { MixFacts } from '../../../shared/domain/mix.ts'
 import type { ProductFacts } from '../../../shared/domain/product.ts'
-import { type Property, type ValueConditions, propertyNames } from '../../../shared/domain/property.ts'
+import { type Property, propertyNames } from '../../../shared/domain/property.ts'
 import type { SheetSummary } from '../../../shared/domain/sheet.ts'
 import type { Database, Transaction } from '../../db/open.ts'
 import { mixParts, mixes, products, propertyValues, sheetSubjects } from '../../db/schema/catalogue.ts'
@@ -40,7 +40,7 @@ function factOfRow({ value: row, sheetId, sheetTitle, revisionDate }: ValueRow):
     property: row.property as Property,
     part: row.part,
     value: row.value,
-    ...(row.at ? { at: row.at as ValueConditions } : {}),
+    ...(row.at ? { at: row.at } : {}),
     ...(row.film ? { film: row.film } : {}),
     ...(row.of ? { of: row.of } : {}),
     ...(row.thinned === null ? {} : { thinned: row.thinned }),

@@ -90,7 +90,7 @@ export async function addMix(tx: Transaction, { ratio, parts, ...body }: z.outpu
   await recordChange(tx, { personId: by.id, action: 'added', subject: { kind: 'mix', id: row.id }, to: { ...body, parts } })
   if (ratio) {
     const statement: Statement = { property: 'mixRatio', part: 'mixed', value: ratio.value }
-    await addFact(tx, ofMix(row.id), { statement, how: { kind: 'entered', reason: ratio.reason } }, by)
+    await addFact(tx, ofMix(row.id), { statement, how: { kind: 'entered', reason: ratio.reason }, by })
   }
   return row.id
 }
@@ -149,7 +149,7 @@ async function readFact(tx: Transaction, subject: Subject, factId: string): Prom
 }
 
 /** Adds a value. A property that does not repeat takes the place of the one that was there. */
-export async function addFact(tx: Transaction, subject: Subject, body: FactBody, by: Writer): Promise<Fact> {
+export async function addFact(tx: Transaction, subject: Subject, { by, ...body }: FactBody & { by: Writer }): Promise<Fact> {
   const exists = subject.productId === null
     ? await tx.select({ id: mixes.id }).from(mixes).where(eq(mixes.id, subject.mixId)).for('update')
     : await tx.select({ id: products.id }).from(products).where(eq(products.id, subject.productId)).for('update')
@@ -172,7 +172,7 @@ export async function addFact(tx: Transaction, subject: Subject, body: FactBody,
  * Adds many values of one record at once, those of its sheets when they are first read in. The pages are taken to be right: they come from the
  * reader, not from a person. One row of the trail for all.
  */
-export async function addFactsAtOnce(tx: Transaction, subject: Subject, bodies: readonly FactBody[], by: Writer): Promise<void> {
+export async function addFactsAtOnce(tx: Transaction, subject: Subject, { bodies, by }: { bodies: readonly FactBody[]; by: Writer }): Promise<void> {
   if (bodies.length === 0) return
   const rows = bodies.map((body, position) => ({ ...columnsOf(body, by), position, productId: subject.productId, mixId: subject.mixId }))
   await tx.insert(propertyValues).values(rows)
@@ -190,7 +190,7 @@ async function liveFact(tx: Transaction, factId: string) {
 const saidBy = ({ property, part, value, at, kind, reason, revisionId, page, quote }: typeof propertyValues.$inferSelect) => ({ property, part, value, at, kind, reason, revisionId, page, quote })
 
 /** Puts another value in the place of one, in the same place of a table. */
-export async function amendFact(tx: Transaction, factId: string, body: FactBody, by: Writer): Promise<Fact> {
+export async function amendFact(tx: Transaction, factId: string, { by, ...body }: FactBody & { by: Writer }): Promise<Fact> {
   const { row, subject } = await liveFact(tx, factId)
   await refuseWrongCitation(tx, subject, body)
   await tx.update(propertyValues).set({ endedAt: sql`now()` }).where(eq(propertyValues.id, factId))

@@ -161,12 +161,12 @@ export async function setPasswordByLink(tx: Transaction, { token, passwordHash, 
   if (!link) throw new AppError('link-dead')
   const person = await readPerson(tx, link.personId)
   if (person.status === 'disabled') throw new AppError('link-dead')
-  await setPassword(tx, person.id, passwordHash)
+  await setPassword(tx, person.id, { passwordHash })
   return person
 }
 
 /** Keeps a new password hash and ends the person's sessions, save the one that asked. */
-export async function setPassword(tx: Transaction, personId: string, passwordHash: string, exceptSid?: string): Promise<void> {
+export async function setPassword(tx: Transaction, personId: string, { passwordHash, exceptSid }: { passwordHash: string; exceptSid?: string }): Promise<void> {
   await tx.update(people).set({ passwordHash, status: 'active', version: sql`${people.version} + 1` }).where(eq(people.id, personId))
   await endSessions(tx, personId, exceptSid)
   await recordChange(tx, { personId, action: 'password-set', subject: { kind: 'person', id: personId } })

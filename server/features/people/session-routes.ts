@@ -38,7 +38,7 @@ export function sessionRoutes({ db, mail, clock, publicUrl, sessions, firstLeadC
       throw new AppError('invalid', { fields: { currentPassword: 'This is not your present password.' } })
     }
     const passwordHash = await hashPassword(body.newPassword)
-    await db.transaction((tx) => setPassword(tx, user.id, passwordHash, http.request.sessionID))
+    await db.transaction((tx) => setPassword(tx, user.id, { passwordHash, exceptSid: http.request.sessionID }))
     await mail.send({ to: user.email, subject: 'Your password was changed', text: 'Your Wearcourse password was changed just now. If it was not you, tell your technical lead at once.\n' })
   }, slowly)
   serve(router, wire.askForLink, ({ body }) => {

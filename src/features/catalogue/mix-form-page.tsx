@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { useNavigate, useParams } from 'react-router'
 import { type MixRecord, mixBody, newMixBody } from '../../../shared/api/catalogue.ts'
 import type { ComponentPart } from '../../../shared/domain/mix.ts'
@@ -41,11 +41,11 @@ function MixForm({ mix }: { mix: MixRecord | undefined }) {
   const [parts, setParts] = useState<Chosen[]>(mix?.parts.map(({ product }) => ({ id: product.id, name: product.name })) ?? [null, null])
   const { submit, problems, busy } = useSubmit(mix ? mixBody : newMixBody, (body) => (mix ? changeMix(mix.id, { ...mixBody.parse(body), version: mix.version }) : addMix(newMixBody.parse(body))))
   const { fields } = problems
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const { ratioText, ratioBasis, ratioReason, name, maker, chemistry, color, note } = Object.fromEntries(new FormData(event.currentTarget))
     const chosen = parts.map((part, index) => ({ part: partNames[index], productId: part?.id ?? '' }))
-    const ratio = parts.length > 1 ? { value: { parts: ratioFrom(String(ratioText ?? '')), ...(ratioBasis ? { basis: ratioBasis } : {}) }, reason: ratioReason } : null
+    const ratio = parts.length > 1 ? { value: { parts: ratioFrom(typeof ratioText === 'string' ? ratioText : ''), ...(ratioBasis ? { basis: ratioBasis } : {}) }, reason: ratioReason } : null
     const kept = await submit({ name, maker, chemistry, color, note, parts: chosen, ...(mix ? {} : { ratio }) })
     if (kept) await navigate(paths.mix(kept.id))
   }

@@ -1,4 +1,4 @@
-import { type FormEvent } from 'react'
+import { type SubmitEvent } from 'react'
 import { useNavigate, useParams } from 'react-router'
 import { type ProductRecord, productBody } from '../../../shared/api/catalogue.ts'
 import { chemistries, productKinds } from '../../../shared/domain/product.ts'
@@ -32,7 +32,7 @@ function ProductForm({ product }: { product: ProductRecord | undefined }) {
   const navigate = useNavigate()
   const { submit, problems, busy } = useSubmit(productBody, (body) => (product ? changeProduct(product.id, { ...body, version: product.version }) : addProduct(body)))
   const { fields } = problems
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const kept = await submit(Object.fromEntries(new FormData(event.currentTarget)))
     if (kept) await navigate(paths.product(kept.id))

@@ -9,7 +9,7 @@ type ListQuery = Record<string, string | undefined>
 export function useProducts(query: ListQuery, enabled = true) {
   return useQuery({
     queryKey: ['catalogue', 'products', query],
-    queryFn: ({ signal }) => call(wire.listProducts, { query: query as z.input<typeof wire.listProducts.query>, signal }),
+    queryFn: ({ signal }) => call(wire.listProducts, { query: query, signal }),
     placeholderData: keepPreviousData,
     enabled,
   })
@@ -18,7 +18,7 @@ export function useProducts(query: ListQuery, enabled = true) {
 export function useMixes(query: ListQuery) {
   return useQuery({
     queryKey: ['catalogue', 'mixes', query],
-    queryFn: ({ signal }) => call(wire.listMixes, { query: query as z.input<typeof wire.listMixes.query>, signal }),
+    queryFn: ({ signal }) => call(wire.listMixes, { query: query, signal }),
     placeholderData: keepPreviousData,
   })
 }

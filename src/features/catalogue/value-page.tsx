@@ -1,4 +1,4 @@
-import { type FormEvent, useEffect, useState } from 'react'
+import { type SubmitEvent, useEffect, useState } from 'react'
 import { useLocation, useNavigate, useParams, useSearchParams } from 'react-router'
 import { type MixRecord, type ProductRecord, factBody } from '../../../shared/api/catalogue.ts'
 import { type Property, definitionOf, properties, propertyNames } from '../../../shared/domain/property.ts'
@@ -46,7 +46,7 @@ function useDraft(record: ProductRecord | MixRecord, factId: string | undefined)
   const key = `wearcourse.value ${location.pathname}`
   const [draft, setDraft] = useState<ValueDraft>(() => {
     const marked = search.get('revision')
-    const kept = marked ? sessionStorage.getItem(key) : null
+    const kept = marked || search.has('resume') ? sessionStorage.getItem(key) : null
     const begun = kept ? (JSON.parse(kept) as ValueDraft) : draftOf(propertyIn(search), record.facts.find(({ id }) => id === factId))
     const fact = record.facts.find(({ id }) => id === factId)
     const base = fact && !kept ? draftOf(fact.property, fact) : begun
@@ -66,7 +66,7 @@ function ValueForm({ kind, record }: { kind: RecordKind; record: ProductRecord |
   const { draft, change, forget } = useDraft(record, factId)
   const back = kind === 'product' ? paths.product(record.id) : paths.mix(record.id)
   const { submit, problems, busy } = useSubmit(factBody, (body) => (factId ? amendFact(factId, body) : addFact(kind, record.id, body)))
-  const onSubmit = async (event: FormEvent) => {
+  const onSubmit = async (event: SubmitEvent) => {
     event.preventDefault()
     if (!(await submit(bodyOfDraft(draft)))) return
     forget()
@@ -90,7 +90,7 @@ function ValueForm({ kind, record }: { kind: RecordKind; record: ProductRecord |
           <ValueFields draft={draft} change={change} fields={problems.fields} />
           <HowFields
             draft={draft} change={change} fields={problems.fields} sheets={record.sheets} firmOnly={definitionOf(draft.property).source === 'firm'}
-            returnTo={`${location.pathname}${factId ? '' : `?property=${draft.property}`}`}
+            returnTo={`${location.pathname}?resume=1`}
           />
           <div className="flex gap-2">
             <Button type="submit" look="primary" busy={busy}>{factId ? 'Save' : 'Add'}</Button>

@@ -5,7 +5,7 @@ import { Button } from '../../ui/button.tsx'
 import { TextField } from '../../ui/field.tsx'
 import { Card, Notice } from '../../ui/page.tsx'
 import { QuantityField } from '../../ui/quantity-field.tsx'
-import type { JobFormPart } from './job-editor.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 import { JointFields } from './joint-fields.tsx'
 import { freshBayId } from './job-body.ts'
 

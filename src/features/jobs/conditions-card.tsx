@@ -4,7 +4,7 @@ import { SelectField } from '../../ui/field.tsx'
 import { NumberField } from '../../ui/number-field.tsx'
 import { Card } from '../../ui/page.tsx'
 import { QuantityField } from '../../ui/quantity-field.tsx'
-import type { JobFormPart } from './job-editor.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 
 const degrees = ['°F', '°C'] as const
 type Degrees = Quantity<'°F' | '°C'>

@@ -4,7 +4,7 @@ import { Asking } from '../../ui/asking.tsx'
 import { Card } from '../../ui/page.tsx'
 import { QrCode } from '../../ui/qr-code.tsx'
 import { useCrew } from '../people/queries.ts'
-import type { JobFormPart } from './job-editor.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 
 /** Who opens the site card, and the code that opens it on a phone. */
 export function CrewCard({ body, change, fields, disabled, job }: JobFormPart & { job: Job | undefined }) {

@@ -1,6 +1,6 @@
 import { SelectField, TextField } from '../../ui/field.tsx'
 import { Card } from '../../ui/page.tsx'
-import type { JobFormPart } from './job-editor.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 
 /** The instant as `datetime-local` shows it in the browser's own zone, and back. */
 const toLocal = (instant: string | null) => {

@@ -5,7 +5,7 @@ import { jobQuantities } from '../../../shared/domain/quantities.ts'
 
 /** The floor of a job worked out at the conditions in the form: the same call as everywhere else. Undefined until a build-up is saved with the job. */
 export function useEvaluated(body: JobBody, job: Job | undefined) {
-  const buildUp = job?.buildUp?.versionId === body.buildUpVersionId ? job?.buildUp : undefined
+  const buildUp = job?.buildUp && job.buildUp.versionId === body.buildUpVersionId ? job.buildUp : undefined
   return useMemo(() => {
     if (!buildUp) return undefined
     const { texture, ...conditions } = body.conditions

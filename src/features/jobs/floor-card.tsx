@@ -9,7 +9,7 @@ import { FindingList } from '../../ui/finding-list.tsx'
 import { Card, Notice } from '../../ui/page.tsx'
 import { SectionFigure } from '../../ui/section-figure.tsx'
 import { useEvaluated } from './evaluated.ts'
-import type { JobFormPart } from './job-editor.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 import { useReleasedBuildUps } from './queries.ts'
 
 /** Which floor is laid here, and what the checks say of it at this job's conditions. */

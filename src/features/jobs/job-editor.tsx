@@ -13,16 +13,10 @@ import { ConditionsCard } from './conditions-card.tsx'
 import { CrewCard } from './crew-card.tsx'
 import { DetailsCard } from './details-card.tsx'
 import { FloorCard } from './floor-card.tsx'
+import type { JobFormPart } from './job-form-part.ts'
 import { bodyOf, emptyBody } from './job-body.ts'
 import { QuantitiesCards } from './quantities-cards.tsx'
 import { useSaveJob } from './queries.ts'
-
-export interface JobFormPart {
-  body: JobBody
-  change: (part: Partial<JobBody>) => void
-  fields: Record<string, string>
-  disabled: boolean
-}
 
 /** The whole job as one form; figures follow every edit, saving is one action. */
 export function JobEditor({ job }: { job: Job | undefined }) {

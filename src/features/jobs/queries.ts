@@ -5,12 +5,11 @@ import { type Job, type JobBody, jobEndpoints as wire } from '../../../shared/ap
 import { call } from '../../lib/api.ts'
 
 const keys = { all: ['jobs'], list: ['jobs', 'list'], one: (id: string) => ['jobs', id] } as const
-type ListQuery = z.input<typeof wire.listJobs.query>
 
 export function useJobs(query: Record<string, string | undefined>) {
   return useQuery({
     queryKey: [...keys.list, query],
-    queryFn: ({ signal }) => call(wire.listJobs, { query: query as ListQuery, signal }),
+    queryFn: ({ signal }) => call(wire.listJobs, { query: query, signal }),
     placeholderData: keepPreviousData,
   })
 }

@@ -1,5 +1,5 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query'
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { useNavigate } from 'react-router'
 import { sessionEndpoints } from '../../../shared/api/session.ts'
 import { sentenceOf } from '../../lib/api.ts'
@@ -20,7 +20,7 @@ export function AccountPage() {
     await changePassword(body)
     return true
   })
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const form = event.currentTarget
     if (await submit(Object.fromEntries(new FormData(form)))) {

@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import type { Firm } from '../../../shared/api/people.ts'
 import { peopleEndpoints } from '../../../shared/api/people.ts'
 import { sentenceOf } from '../../lib/api.ts'
@@ -27,7 +27,7 @@ function FirmForm({ firm }: { firm: Firm }) {
   const [saved, setSaved] = useState(false)
   const { submit, problems, busy } = useSubmit(peopleEndpoints.changeFirm.body, change)
   const { fields } = problems
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const { sheetAgeLimitYears, ...rest } = Object.fromEntries(new FormData(event.currentTarget))
     setSaved(Boolean(await submit({ ...rest, version: firm.version, sheetAgeLimitYears: Number(sheetAgeLimitYears) })))

@@ -1,4 +1,4 @@
-import type { FormEvent } from 'react'
+import type { SubmitEvent } from 'react'
 import { useNavigate } from 'react-router'
 import { sessionEndpoints } from '../../../shared/api/session.ts'
 import { useSubmit } from '../../lib/form.ts'
@@ -14,7 +14,7 @@ export function FirstLeadForm() {
   const navigate = useNavigate()
   const { submit, problems, busy } = useSubmit(sessionEndpoints.makeFirstLead.body, make)
   const { fields } = problems
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     if (await submit(Object.fromEntries(new FormData(event.currentTarget)))) await navigate(paths.home, { replace: true })
   }

@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { sessionEndpoints } from '../../../shared/api/session.ts'
 import { useSubmit } from '../../lib/form.ts'
 import { Button } from '../../ui/button.tsx'
@@ -14,7 +14,7 @@ export function ForgottenPassword({ onBack }: { onBack: () => void }) {
     await askForLink(body)
     return true
   })
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     if (await submit(Object.fromEntries(new FormData(event.currentTarget)))) setSent(true)
   }

@@ -1,4 +1,4 @@
-import type { FormEvent } from 'react'
+import type { SubmitEvent } from 'react'
 import { peopleEndpoints } from '../../../shared/api/people.ts'
 import { useSubmit } from '../../lib/form.ts'
 import { Button } from '../../ui/button.tsx'
@@ -10,7 +10,7 @@ import { usePeopleChanges } from './queries.ts'
 export function InviteForm({ onDone }: { onDone: () => void }) {
   const { invite } = usePeopleChanges()
   const { submit, problems, busy } = useSubmit(peopleEndpoints.invite.body, invite)
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     if (await submit(Object.fromEntries(new FormData(event.currentTarget)))) onDone()
   }

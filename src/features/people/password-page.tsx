@@ -1,4 +1,4 @@
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { Link } from 'react-router'
 import { sessionEndpoints } from '../../../shared/api/session.ts'
 import { useSubmit } from '../../lib/form.ts'
@@ -17,7 +17,7 @@ export function PasswordPage() {
     await setPassword(body)
     return true
   })
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const password = new FormData(event.currentTarget).get('password')
     if (await submit({ token, password })) setDone(true)

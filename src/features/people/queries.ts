@@ -61,7 +61,7 @@ interface ListWanted {
 export function usePeople(query: ListWanted) {
   return useQuery({
     queryKey: [...keys.people, query],
-    queryFn: ({ signal }) => call(peopleWire.listPeople, { query: query as z.input<typeof peopleWire.listPeople.query>, signal }),
+    queryFn: ({ signal }) => call(peopleWire.listPeople, { query: query, signal }),
     placeholderData: keepPreviousData,
   })
 }

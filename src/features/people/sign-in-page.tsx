@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { type FormEvent, useState } from 'react'
+import { type SubmitEvent, useState } from 'react'
 import { Navigate, useNavigate, useSearchParams } from 'react-router'
 import { sessionEndpoints } from '../../../shared/api/session.ts'
 import { sentenceOf } from '../../lib/api.ts'
@@ -47,7 +47,7 @@ function SignInForm({ firmName }: { firmName: string }) {
   const [search] = useSearchParams()
   const [forgotten, setForgotten] = useState(false)
   const { submit, problems, busy } = useSubmit(sessionEndpoints.signIn.body, signIn)
-  const onSubmit = async (event: FormEvent<HTMLFormElement>) => {
+  const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const user = await submit(Object.fromEntries(new FormData(event.currentTarget)))
     if (user) await navigate(destination(search), { replace: true })
