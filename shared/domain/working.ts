@@ -35,6 +35,11 @@ export function sumOf(ranges: readonly Range[], unit: Unit): Range {
 
 const add = (a: number | undefined, b: number | undefined) => (a === undefined || b === undefined ? undefined : a + b)
 
+/** The least value of a range: what may be counted on. */
+export function leastOf({ min, max, unit }: Range): Quantity {
+  return { value: min ?? max ?? Number.NaN, unit }
+}
+
 /** The greatest value a range allows: what must be enough. */
 export function greatestOf({ min, max, unit }: Range): Quantity {
   return { value: max ?? min ?? Number.NaN, unit }

@@ -1,4 +1,4 @@
-import { leastOf } from '../course-result.ts'
+import { leastOf } from '../working.ts'
 import { type Fact, factsOf, rangeOf } from '../fact.ts'
 import { figureOfFact, notStated } from '../figure.ts'
 import { formatRange } from '../format.ts'

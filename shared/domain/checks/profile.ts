@@ -2,7 +2,7 @@ import { icriEdition, profileForThickness, profileOfMethod } from '../../referen
 import { factOf, rangeOf } from '../fact.ts'
 import { formatNumber, formatRange } from '../format.ts'
 import { figureOfFact, notStated } from '../figure.ts'
-import { leastOf } from '../course-result.ts'
+import { leastOf } from '../working.ts'
 import { valueIn } from '../units.ts'
 import { type Check, type Floor, type Laid, type Verdict, resinCourses, unknown } from './check.ts'
 
