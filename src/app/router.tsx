@@ -31,6 +31,8 @@ const signedIn: RouteObject[] = [
   page('/sheets', () => import('../features/sheets/sheets-page.tsx'), (module) => module.SheetsPage),
   page('/sheets/:sheetId', () => import('../features/sheets/sheet-page.tsx'), (module) => module.SheetPage),
   page('/sheets/pages/:revisionId', () => import('../features/sheets/page-view-page.tsx'), (module) => module.PageViewPage),
+  page('/specifications/:specificationId', () => import('../features/specifications/specification-page.tsx'), (module) => module.SpecificationPage),
+  page('/specifications/:specificationId/issues/:number', () => import('../features/specifications/specification-page.tsx'), (module) => module.IssuePage),
   page('/people', () => import('../features/people/people-page.tsx'), (module) => module.PeoplePage),
   page('/firm', () => import('../features/people/firm-page.tsx'), (module) => module.FirmPage),
   page('/outbox', () => import('../features/people/outbox-page.tsx'), (module) => module.OutboxPage),

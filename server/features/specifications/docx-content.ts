@@ -3,7 +3,7 @@ import { type Run, type SpecDocument, frontTitles, tagText } from '../../../shar
 import { numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
 import { frontList, partList, pencil } from './docx-styles.ts'
 import type { paintSection } from './section-drawing.ts'
-import { type Register, registersOf } from './registers.ts'
+import { type Register, registersOf } from '../../../shared/domain/specification/registers.ts'
 
 /** Width of the text on Letter paper with margins of an inch, in twentieths of a point. */
 const pageWidth = 9360

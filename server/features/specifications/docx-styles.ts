@@ -1,4 +1,4 @@
-import { AlignmentType, type ILevelsOptions, LevelFormat } from 'docx'
+import { AlignmentType, type ILevelsOptions, LevelFormat, LineRuleType } from 'docx'
 
 export const partList = 'specification'
 export const frontList = 'front'
@@ -43,13 +43,13 @@ const headingOf = (size: number, before: number) => ({
 /** Styles of the document. Sizes in half points, spacing in twentieths of a point. */
 export const styles = {
   default: {
-    document: { run: { font, size: 20, color: ink, language: { value: 'en-US' } }, paragraph: { spacing: { after: 40, line: 264 } } },
+    document: { run: { font, size: 20, color: ink, language: { value: 'en-US' } }, paragraph: { spacing: { after: 40, line: 264, lineRule: LineRuleType.AUTO } } },
     title: { run: { font, size: 32, bold: true, color: ink }, paragraph: { alignment: AlignmentType.CENTER, spacing: { after: 200 } } },
     heading1: headingOf(24, 360),
     heading2: headingOf(21, 220),
   },
   paragraphStyles: [
-    { id: 'TableText', name: 'Table text', basedOn: 'Normal', run: { size: 17 }, paragraph: { spacing: { after: 0, line: 240 } } },
+    { id: 'TableText', name: 'Table text', basedOn: 'Normal', run: { size: 17 }, paragraph: { spacing: { after: 0, line: 240, lineRule: LineRuleType.AUTO } } },
     { id: 'TableNote', name: 'Table note', basedOn: 'Normal', run: { size: 17, color: pencil }, paragraph: { spacing: { before: 60, after: 120 } } },
     { id: 'PageEdge', name: 'Page edge', basedOn: 'Normal', run: { size: 17, color: pencil } },
   ],

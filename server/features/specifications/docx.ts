@@ -4,7 +4,7 @@ import { drawingBlocks, frontBlocks, grid, headingOne, partBlocks, registerBlock
 import { numbering, pencil, styles } from './docx-styles.ts'
 import { withoutZipDates } from './same-bytes.ts'
 import { paintSection } from './section-drawing.ts'
-import { titleRows } from './title-block.ts'
+import { titleRows } from '../../../shared/domain/specification/title-block.ts'
 
 const textEdge = 9360
 

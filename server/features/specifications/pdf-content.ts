@@ -1,12 +1,17 @@
 import type { Content, ContentNode } from 'pdfmake'
 import { type Run, type Runs, type SpecDocument, type SpecTable, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
 import { type NumberedItem, numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
-import { registersOf } from './registers.ts'
+import { registersOf } from '../../../shared/domain/specification/registers.ts'
 import { drawSection } from './section-drawing.ts'
 
 export const fontName = 'SourceSans3'
 const pencil = '#55606a'
 const step = 22
+
+/** A heading never stands alone at the foot of a page: it goes with what comes first beneath it. */
+function together(head: Content, [first, ...rest]: readonly Content[]): Content[] {
+  return [{ stack: [head, first ?? ''], unbreakable: true }, ...rest]
+}
 
 /** A line: figures carry their tags, small, as links to the tables at the end. */
 function inline(runs: readonly Run[]): Content[] {
@@ -36,11 +41,11 @@ function parts({ parts: all }: SpecDocument): Content[] {
   return all.flatMap((part): Content[] => {
     const title = `PART ${part.number} ${part.title.toUpperCase()}`
     const id = `part-${part.number}`
-    const articles = numberedArticles(part).flatMap((article): Content[] => [
-      heading(`${article.number}  ${article.title.toUpperCase()}`, `${id}-${article.id}`, { style: 'article', outlineParentId: id, headlineLevel: 2 }),
-      ...article.items.map(paragraph),
-    ])
-    return [heading(title, id, { style: 'part', headlineLevel: 1 }), ...(articles.length > 0 ? articles : [{ text: 'Not used', margin: [0, 6, 0, 0] }])]
+    const articles = numberedArticles(part).flatMap((article): Content[] => {
+      const head = heading(`${article.number}  ${article.title.toUpperCase()}`, `${id}-${article.id}`, { style: 'article', outlineParentId: id })
+      return together(head, article.items.map(paragraph))
+    })
+    return together(heading(title, id, { style: 'part' }), articles.length > 0 ? articles : [{ text: 'Not used', margin: [0, 6, 0, 0] }])
   })
 }
 
@@ -48,10 +53,9 @@ function front({ front: lists }: SpecDocument): Content[] {
   const kinds = Object.keys(frontTitles) as (keyof typeof frontTitles)[]
   return [
     heading('READ FIRST', 'front', { style: 'part' }),
-    ...kinds.flatMap((kind): Content[] => [
-      { text: frontTitles[kind], style: 'article', headlineLevel: 2 },
-      ...(lists[kind].length > 0 ? numberedItems(lists[kind]).map(paragraph) : [{ text: 'None.', margin: [0, 3, 0, 0] }]),
-    ]),
+    ...kinds.flatMap((kind) =>
+      together({ text: frontTitles[kind], style: 'article' }, lists[kind].length > 0 ? numberedItems(lists[kind]).map(paragraph) : [{ text: 'None.', margin: [0, 3, 0, 0] }]),
+    ),
   ]
 }
 
@@ -63,18 +67,22 @@ interface Grid {
   note?: string
 }
 
-/** A table with its head repeated on every page and no row broken over two. */
+const titleRow = ({ id, title, columns }: Pick<Grid, 'id' | 'title' | 'columns'>): Content[] => [
+  heading(title, id, { fontSize: 10.5, bold: true, outlineParentId: 'schedules', colSpan: columns.length }),
+  ...columns.slice(1).map(() => ({})),
+]
+
+/** A table with its title and head repeated on every page and no row broken over two. */
 function grid({ id, title, columns, rows, note }: Grid): Content[] {
   const total = columns.reduce((sum, { width }) => sum + width, 0)
   return [
-    heading(title, id, { style: 'article', outlineParentId: 'schedules', headlineLevel: 2 }),
     {
       table: {
-        headerRows: 1, keepWithHeaderRows: 1, dontBreakRows: true,
+        headerRows: 2, keepWithHeaderRows: 1, dontBreakRows: true,
         widths: columns.map(({ width }) => `${(100 * width) / total}%`),
-        body: [columns.map(({ label }) => ({ text: label, bold: true })), ...rows],
+        body: [titleRow({ id, title, columns }), columns.map(({ label }) => ({ text: label, bold: true })), ...rows],
       },
-      layout: 'hairlines', fontSize: 8.5, margin: [0, 4, 0, 0],
+      layout: 'schedule', fontSize: 8.5, margin: [0, 8, 0, 0],
     },
     ...(note ? [{ text: note, fontSize: 8.5, color: pencil, margin: [0, 3, 0, 0] }] : []),
   ]
@@ -93,9 +101,14 @@ function drawing(document: SpecDocument): Content[] {
   if (document.section.layers.length === 0) return []
   const { svg, alternative } = drawSection(document, fontName)
   return [
-    heading('Section through the floor', 'section', { style: 'article', outlineParentId: 'schedules', headlineLevel: 2 }),
-    { svg, width: 468, margin: [0, 4, 0, 4] },
-    { text: alternative, fontSize: 8.5, color: pencil },
+    {
+      stack: [
+        heading('Section through the floor', 'section', { style: 'article', outlineParentId: 'schedules' }),
+        { svg, width: 468, margin: [0, 4, 0, 4] },
+        { text: alternative, fontSize: 8.5, color: pencil },
+      ],
+      unbreakable: true,
+    },
   ]
 }
 
@@ -104,8 +117,7 @@ export function contentOf(document: SpecDocument): Content[] {
   return [
     ...front(document),
     ...parts(document),
-    heading('SCHEDULES', 'schedules', { style: 'part', headlineLevel: 1 }),
-    ...drawing(document),
+    ...together(heading('SCHEDULES', 'schedules', { style: 'part' }), drawing(document)),
     ...document.schedules.flatMap(schedule),
     ...registers(document),
     { text: document.closing.join(' '), margin: [0, 14, 0, 0], bold: true },

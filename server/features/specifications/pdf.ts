@@ -2,7 +2,7 @@ import pdfmake, { type Content } from 'pdfmake'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import { fontFiles, fontFolder } from './fonts.ts'
 import { contentOf, fontName } from './pdf-content.ts'
-import { titleRows } from './title-block.ts'
+import { titleRows } from '../../../shared/domain/specification/title-block.ts'
 
 pdfmake.setFonts({ [fontName]: fontFiles })
 pdfmake.setUrlAccessPolicy(() => false)
@@ -13,16 +13,23 @@ const pencil = '#55606a'
 const [inch, side] = [72, 72]
 
 const hairlines = {
-  hLineWidth: (row: number) => (row <= 1 ? 0.8 : 0.4),
+  hLineWidth: () => 0.4,
   vLineWidth: () => 0,
-  hLineColor: (row: number) => (row <= 1 ? ink : '#c9c7c0'),
+  hLineColor: () => '#c9c7c0',
   paddingLeft: () => 3, paddingRight: () => 3, paddingTop: () => 2.5, paddingBottom: () => 2.5,
 }
+/** Its first row is the title, its second the head. */
+const schedule = {
+  ...hairlines,
+  hLineWidth: (row: number) => (row === 0 ? 0 : row <= 2 ? 0.8 : 0.4),
+  hLineColor: (row: number) => (row <= 2 ? ink : '#c9c7c0'),
+}
+const layouts: Record<string, unknown> = { hairlines, schedule }
 
 /** Tables name their lines by a word; pdfmake takes the functions themselves. */
 function withLayouts(content: Content): Content {
   if (Array.isArray(content)) return content.map(withLayouts)
-  if (typeof content === 'object' && content['layout'] === 'hairlines') return { ...content, layout: hairlines }
+  if (typeof content === 'object' && typeof content['layout'] === 'string') return { ...content, layout: layouts[content['layout']] }
   return content
 }
 
@@ -54,10 +61,6 @@ const pageFoot = ({ header }: SpecDocument, page: number, pages: number): Conten
   fontSize: 8.5, color: pencil, margin: [side, 20, side, 0],
 })
 
-interface Node {
-  headlineLevel?: number
-}
-
 /** The document as PDF. The same tree gives the same bytes: the only date is the document's own. */
 export async function toPdf(document: SpecDocument): Promise<Buffer> {
   const { header } = document
@@ -71,8 +74,6 @@ export async function toPdf(document: SpecDocument): Promise<Buffer> {
       pageMargins: [side, inch * 0.9, side, inch * 0.85],
       defaultStyle: { font: fontName, fontSize: 10, lineHeight: 1.12, color: ink },
       styles: { part: { fontSize: 12, bold: true, margin: [0, 18, 0, 2] }, article: { fontSize: 10.5, bold: true, margin: [0, 11, 0, 1] } },
-      // A heading never stands alone at the foot of a page.
-      pageBreakBefore: (node: Node, nodes: { getFollowingNodesOnPage(): unknown[] }) => node.headlineLevel !== undefined && nodes.getFollowingNodesOnPage().length < 4,
       info: { title, author: header.firm.name, subject: header.site, creator: 'Wearcourse', producer: 'Wearcourse', creationDate: new Date(`${header.date}T00:00:00Z`) },
       version: '1.7', language: 'en-US', displayTitle: true,
     })

@@ -47,7 +47,7 @@ function unknownsOf(floor: Floor): Unknown[] {
 function unknowns(floor: Floor): Item[] {
   const { evaluation } = floor
   const lines = unknownsOf(floor).map(({ what, of, ask, because }) =>
-    item(line`${quoted(what)} of ${quoted(of)}: not stated${because ? line` (${quoted(because)})` : []}. Ask ${quoted(ask)}.`),
+    item(line`${of.toLowerCase().includes(what.toLowerCase()) ? quoted(of) : line`${quoted(what)} of ${quoted(of)}`}: not stated${because ? line` (${quoted(because)})` : []}. Ask ${quoted(ask)}.`),
   )
   const unsettled = evaluation.findings.filter(({ status, missing }) => status === 'unknown' && missing.length === 0)
   const silent = evaluation.hazards.notStated

@@ -46,7 +46,7 @@ export function createRegister(): Register {
     if (figure.working.formula === chosenFormula) return { kind: 'figure', text, known: 'chosen', tags: [], citation: null }
     const from = [...new Set(figure.from.flatMap(({ origin }) => (origin ? [tagOf(origin)] : [])))]
     const { formula, sum, source } = figure.working
-    const tag = once(lists.workings, 'W', { formula, sum, source, from }, (one) => one.formula === formula && one.sum === sum)
+    const tag = once(lists.workings, 'W', { formula, sum, source, from }, (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from))
     return { kind: 'figure', text, known: isTypical(figure) ? 'typical' : 'computed', tags: [tag], citation: null }
   }
   const fact: Register['fact'] = (one) => cited(formatValue(one), one.origin)

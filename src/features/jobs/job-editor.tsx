@@ -17,6 +17,7 @@ import type { JobFormPart } from './job-form-part.ts'
 import { bodyOf, emptyBody } from './job-body.ts'
 import { QuantitiesCards } from './quantities-cards.tsx'
 import { useSaveJob } from './queries.ts'
+import { SpecificationCard } from './specification-card.tsx'
 
 /** The whole job as one form; figures follow every edit, saving is one action. */
 export function JobEditor({ job }: { job: Job | undefined }) {
@@ -95,6 +96,7 @@ export function JobEditor({ job }: { job: Job | undefined }) {
         </div>
         <div className="grid content-start gap-5">
           <FloorCard {...part} job={base} />
+          {base && <SpecificationCard job={base} dirty={dirty} />}
           <QuantitiesCards body={body} job={base} />
           <CrewCard {...part} job={base} />
         </div>

@@ -1,5 +1,5 @@
-import type { SpecDocument } from '../../../shared/domain/specification/document.ts'
-import { writtenDate } from '../../../shared/domain/sheet-age.ts'
+import type { SpecDocument } from './document.ts'
+import { writtenDate } from '../sheet-age.ts'
 
 /** A table of tags: the first cell of a row is the tag. */
 export interface Register {

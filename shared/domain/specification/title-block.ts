@@ -1,4 +1,4 @@
-import { type SpecHeader, issueWords } from '../../../shared/domain/specification/document.ts'
+import { type SpecHeader, issueWords } from './document.ts'
 
 /** What stands under the title: whose floor, on what basis, when and by whom issued. */
 export function titleRows(header: SpecHeader): [string, string][] {
