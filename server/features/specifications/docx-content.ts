@@ -84,7 +84,7 @@ export function drawingBlocks({ png, width, height, alternative }: Awaited<Retur
   const wide = 600
   const image = new ImageRun({
     type: 'png', data: png, transformation: { width: wide, height: Math.round((height * wide) / width) },
-    altText: { name: 'Section through the floor', title: 'Section through the floor', description: alternative },
+    altText: { id: '1', name: 'Section through the floor', title: 'Section through the floor', description: alternative },
   })
   return [headingTwo('Section through the floor'), new Paragraph({ children: [image] }), ...note(alternative)]
 }
