@@ -88,6 +88,10 @@ describe('specifications', () => {
     // The sheet's table goes from 60 to 75 °F; 50 and 90 °F are beyond it.
     expect(unknowns.find((line) => line.startsWith('Recoat window of Ostrel 110'))).toMatch(/stops at 60 °F.*stops at 75 °F/)
     expect(unknowns.find((line) => /Moisture emission rate/i.test(line))).toMatch(/not stated/)
+    expect(unknowns).toContainEqual('Pull-off strength: not stated for Ostrel 110; Ostrel 220. Ask the maker, in writing.')
+    const silent = document.parts[1]?.articles.find(({ id }) => id === 'materials')?.items.flatMap(({ items }) => items.map(({ runs }) => plainText(runs)).filter((line) => line.endsWith(': not stated.'))) ?? []
+    expect(silent.length).toBeGreaterThan(0)
+    for (const line of silent) expect(unknowns.some((one) => one.startsWith(line.slice(0, -'.'.length)))).toBe(true)
     expect(document.front.overrides.map(({ items }) => items.map(({ runs }) => plainText(runs)).join())).toContainEqual('Reason given at release: Agreed with the client on site.')
     const own = allLines(document).flat().filter(({ kind }) => kind === 'text').map(({ text }) => text).join(' ')
     expect(own).not.toMatch(/\bsafe\b/i)

@@ -1,8 +1,9 @@
 import { reasonKey } from '../course.ts'
+import { type Fact, factsOf } from '../fact.ts'
 import { type Figure, isTypical } from '../figure.ts'
 import type { Finding } from '../finding.ts'
 import { formatFigure, formatNumber, formatQuantity } from '../format.ts'
-import { properties } from '../property.ts'
+import { type Property, properties } from '../property.ts'
 import { valueAt } from '../sheet-table.ts'
 import { windowAt } from '../window.ts'
 import type { Item, SpecDocument } from './document.ts'
@@ -44,6 +45,29 @@ function unknownsOf(floor: Floor): Unknown[] {
   })
 }
 
+/** What parts, schedules and hazards ask of every mix and product; where a sheet is silent the front says so. */
+const askedOfMixes = [
+  'volumeSolids', 'filmThickness', 'applicationTemperature', 'maxRelativeHumidity', 'dewPointMargin', 'substrateRelativeHumidity', 'moistureEmission', 'surfaceProfile',
+  'pullOffStrength', 'splitKit', 'mixRatio', 'shelfLife',
+] as const satisfies readonly Property[]
+const askedOfProducts = ['gloves', 'eyeProtection', 'respiratoryProtection'] as const satisfies readonly Property[]
+const aboutKits = new Set<Property>(['splitKit', 'mixRatio'])
+
+/** One line a property: of which mixes and products nobody states it. */
+function silences({ mixes, products, aggregates }: Floor): Item[] {
+  const liquids = products.filter(({ id }) => !aggregates.some((one) => one.id === id))
+  const silent = (property: Property, holders: readonly { name: string; facts: readonly Fact[] }[]): Item[] => {
+    const names = holders.filter(({ facts }) => !facts.some((fact) => fact.property === property)).map(({ name }) => [quoted(name)])
+    return names.length > 0 ? [item(line`${quoted(properties[property].label)}: not stated for ${joined(names, '; ')}. Ask the maker, in writing.`)] : []
+  }
+  const stored = [...mixes, ...products].some(({ facts }) => factsOf(facts, 'storageTemperature').length > 0)
+  return [
+    ...askedOfMixes.flatMap((property) => silent(property, aboutKits.has(property) ? mixes.filter(({ parts }) => parts.length > 1) : mixes)),
+    ...askedOfProducts.flatMap((property) => silent(property, liquids)),
+    ...(stored ? [] : [item(line`${quoted(properties.storageTemperature.label)}: not stated for any material. Ask the makers, in writing.`)]),
+  ]
+}
+
 function unknowns(floor: Floor): Item[] {
   const { evaluation } = floor
   const lines = unknownsOf(floor).map(({ what, of, ask, because }) =>
@@ -53,6 +77,7 @@ function unknowns(floor: Floor): Item[] {
   const silent = evaluation.hazards.notStated
   return [
     ...lines,
+    ...silences(floor),
     ...unsettled.map((finding) => item(line`${quoted(finding.title)}: ${quoted(finding.says)}`)),
     ...(silent.length > 0 ? [item(line`Hazards of ${joined(silent.map((name) => [quoted(name)]), ', ')}: not stated. Read the safety sheet before a pack is opened.`)] : []),
   ]

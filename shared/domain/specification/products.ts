@@ -46,13 +46,16 @@ function oneOf({ register }: Floor, { facts }: Pick<MixFacts, 'facts'>, property
   return fact ? register.factAt(fact) : notStatedRun()
 }
 
-const mixProperties = ['volumeSolids', 'density', 'viscosity', 'filmThickness', 'surfaceProfile', 'substrateRelativeHumidity', 'moistureEmission', 'shelfLife'] as const satisfies readonly Property[]
+/** Told where a sheet states them; nothing here depends on them. */
+const furtherProperties = ['density', 'viscosity', 'weightSolids'] as const satisfies readonly Property[]
+const mixProperties = ['volumeSolids', 'filmThickness', 'surfaceProfile', 'substrateRelativeHumidity', 'moistureEmission', 'shelfLife'] as const satisfies readonly Property[]
 
 function materials(floor: Floor): Item[] {
   return floor.mixes.map((mix) =>
     item(line`${quoted(mix.name)}: ${quoted(mix.chemistry)}, by ${quoted(mix.maker)}.`, [
       item(line`Components: ${joined(mix.parts.map(({ part, product }) => line`${quoted(part)}, ${quoted(product.name)}`), '; ')}.`),
       ...mixProperties.map((property) => propertyLine(floor, mix.facts, property)),
+      ...furtherProperties.filter((property) => factOf(mix.facts, property)).map((property) => propertyLine(floor, mix.facts, property)),
     ]),
   )
 }

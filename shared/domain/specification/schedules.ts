@@ -118,13 +118,13 @@ function hazardSchedule({ courses }: Floor): SpecTable {
     const said = [
       ...(sum.signalWord ? [line`${quoted(sum.signalWord)}`] : []),
       ...sum.pictograms.map((code) => line`${quoted(`${code} ${shows(code)}`)}`),
-      ...sum.statements.map(({ code, text }) => line`${quoted(code)} ${quoted(text)}`),
+      ...sum.statements.map(({ code, text }) => line`${quoted(code)} ${quoted(text.replace(/\.$/, ''))}`),
       ...(sum.notStated.length > 0 ? [line`not stated for ${quoted(sum.notStated.join(', '))}`] : []),
     ]
     return [numbered(one), said.length > 0 ? joined(said, '; ') : notStatedRun(), wordsOr(sum.gloves), wordsOr(sum.eyes), wordsOr(sum.breathing)]
   })
   return table('hazards', {
-    columns: [['Course', 16], ['Hazards', 36], ['Gloves', 16], ['Eyes', 16], ['Breathing', 16]], rows,
+    columns: [['Course', 14], ['Hazards', 38], ['Gloves', 16], ['Eyes', 16], ['Breathing', 16]], rows,
     note: 'As the safety sheets state them. What arises in mixing, curing and grinding is on no sheet. The competent person decides on equipment.',
   })
 }
@@ -134,7 +134,7 @@ const statusWords = { stop: 'not met', caution: 'caution', unknown: 'unknown', m
 function checkSchedule({ evaluation, courses }: Floor): SpecTable {
   const titleOf = (id: string | null) => courses.find(({ course }) => course.id === id)?.course.title ?? 'the floor'
   return table('checks', {
-    columns: [['Check', 22], ['Of', 17], ['Result', 10], ['What it says', 35], ['Compared with', 16]],
+    columns: [['Check', 18], ['Of', 15], ['Result', 10], ['What it says', 34], ['Compared with', 23]],
     rows: evaluation.findings.map((finding) => [[quoted(finding.title)], [quoted(titleOf(finding.courseId))], [quoted(statusWords[finding.status])], [quoted(finding.says)], [quoted(finding.source)]]),
     note: 'Worked out at the conditions of this section. “Met” means met against the sheets loaded, and no more.',
   })

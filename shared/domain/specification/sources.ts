@@ -1,10 +1,14 @@
 import type { Fact, Origin } from '../fact.ts'
-import { type Figure, type KnownFigure, isTypical } from '../figure.ts'
+import { type Figure, type KnownFigure, type Missing, isTypical } from '../figure.ts'
+import type { Property } from '../property.ts'
 import { formatConditions, formatRange, formatValue, formatWindow } from '../format.ts'
 import type { Known, Run, Runs, SpecDocument, SpecSource } from './document.ts'
 import { line, notStatedRun, quoted } from './runs.ts'
 
 type Lists = Pick<SpecDocument, 'sources' | 'workings' | 'entered' | 'typicals'>
+
+/** What is missing, whose it is and who could supply it. */
+export type Gap = Pick<Missing, 'property' | 'of' | 'ask' | 'because'>
 
 /** Hands out the tags of a document: each page of a sheet, each entered value, typical value and working once, in the order of first use. */
 export interface Register {
@@ -14,6 +18,10 @@ export interface Register {
   factAt(fact: Fact): Runs
   /** A figure in words, "not stated" with its reason where it is. */
   figure(figure: Figure, options?: { window?: boolean }): Runs
+  /** "not stated", of a property of a mix or product; kept for the front of the document. */
+  notStated(of: string, property: Property): Runs
+  /** What the document has called not stated so far, in the order of first use. */
+  gaps(): Gap[]
   /** A number worked out for the document itself. */
   working(text: string, working: { formula: string; sum: string; source: string }): Run
   lists(): Lists
@@ -25,6 +33,7 @@ const chosenFormula = 'chosen for this course'
 
 export function createRegister(): Register {
   const lists: Lists = { sources: [], workings: [], entered: [], typicals: [] }
+  const gaps: Gap[] = []
 
   const tagOf = (origin: Origin): string => {
     if (origin.kind === 'stated') return sheetTag(lists.sources, origin.citation)
@@ -57,12 +66,20 @@ export function createRegister(): Register {
       return conditions ? line`${fact(one)} ${quoted(conditions)}` : [fact(one)]
     },
     figure: (figure, { window = false } = {}) => {
-      if (figure.kind === 'not-stated') return notStatedRun(figure.missing.because)
+      if (figure.kind === 'not-stated') {
+        gaps.push(figure.missing)
+        return notStatedRun(figure.missing.because)
+      }
       const text = window ? formatWindow(figure.value) : formatRange(figure.value)
       if (figure.kind === 'computed') return [computedRun(figure, text)]
       const run = cited(text, figure.origin)
       return figure.condition === 'no temperature stated' ? line`${run} (no temperature stated)` : [run]
     },
+    notStated: (of, property) => {
+      gaps.push({ of, property, ask: 'the maker, in writing' })
+      return notStatedRun()
+    },
+    gaps: () => gaps,
     working,
     lists: () => lists,
   }

@@ -5,9 +5,9 @@ export function titleRows(header: SpecHeader): [string, string][] {
   const { firm, project, client, site, buildUp, issue, date } = header
   return [
     ['Project', `${project}, J-${String(header.jobNumber).padStart(3, '0')}`],
-    ['Client', client || 'not stated'],
-    ['Site', site || 'not stated'],
-    ['Installer', [firm.name, firm.address, firm.phone].filter(Boolean).join(', ')],
+    ['Client', client.replaceAll('\n', ', ') || 'not stated'],
+    ['Site', site.replaceAll('\n', ', ') || 'not stated'],
+    ['Installer', [firm.name, ...firm.address.split('\n'), firm.phone].map((words) => words.trim()).filter(Boolean).join(', ')],
     ['Build-up', `BU-${String(buildUp.number).padStart(3, '0')} ${buildUp.name}, version ${buildUp.version}, ${buildUp.status}`],
     ['Date', date],
     ['Issue', issue ? `${issueWords(header)}, by ${issue.by}` : issueWords(header)],

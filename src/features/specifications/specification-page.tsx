@@ -71,9 +71,9 @@ function Draft({ specification }: { specification: Specification }) {
       }
     >
       <SupersededNotice titles={specification.restsOnSuperseded} />
-      <div className="grid gap-5 lg:grid-cols-[minmax(0,1fr)_260px]">
+      <div className="grid grid-cols-1 gap-5 lg:grid-cols-[minmax(0,1fr)_260px]">
         <DocumentView document={document} />
-        <div className="no-print">
+        <div className="no-print lg:sticky lg:top-4 lg:self-start">
           <IssuesCard specification={specification} />
         </div>
       </div>
