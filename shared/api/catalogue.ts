@@ -1,9 +1,9 @@
 import * as z from 'zod'
-import { isCasNumber } from '../domain/cas.ts'
 import { boxSchema, factSchema } from '../domain/fact.ts'
 import { componentPartSchema, mixFactsSchema } from '../domain/mix.ts'
 import { chemistrySchema, productFactsSchema, productKindSchema, recordStatusSchema } from '../domain/product.ts'
-import { definitionOf, ratioSchema, statementSchema, valueProblem } from '../domain/property.ts'
+import { type Statement, definitionOf, ratioSchema } from '../domain/property.ts'
+import { looseStatementSchema, soundStatement, statementProblems } from '../domain/statement.ts'
 import { endpoint } from './endpoint.ts'
 import { idSchema, line, listOf, listQuery, paragraph, versionSchema } from './list.ts'
 
@@ -19,23 +19,22 @@ export const knownHowSchema = z.discriminatedUnion('kind', [
 ])
 export type KnownHow = z.infer<typeof knownHowSchema>
 
-/** A value with how it is known; the value must be of the property's form and measure what the property is. */
+/** A value with how it is known. The value must be of the property's form, measure what the property is, and be possible. */
+export interface FactBody {
+  statement: Statement
+  how: KnownHow
+}
 export const factBody = z
-  .strictObject({ statement: statementSchema, how: knownHowSchema })
+  .strictObject({ statement: looseStatementSchema, how: knownHowSchema })
   .superRefine(({ statement, how }, context) => {
-    const problem = valueProblem(statement.property, statement.value)
-    if (problem) context.addIssue({ code: 'custom', path: ['statement', 'value'], message: problem })
-    const { value } = statement
-    if ('name' in value && value.cas !== undefined && !isCasNumber(value.cas)) {
-      context.addIssue({ code: 'custom', path: ['statement', 'value', 'cas'], message: 'This CAS number is not right: its check digit does not fit.' })
-    }
+    for (const { path, message } of statementProblems(statement)) context.addIssue({ code: 'custom', path: ['statement', ...path], message })
     if (definitionOf(statement.property).source === 'firm' && how.kind === 'stated') {
       context.addIssue({ code: 'custom', path: ['how', 'kind'], message: 'A price is the firm’s own: enter it with a reason.' })
     }
   })
-export type FactBody = z.infer<typeof factBody>
+  .transform(({ statement, how }): FactBody => ({ statement: soundStatement(statement), how }))
 
-const usedIn = z.array(z.object({ kind: z.enum(['mix', 'build-up', 'job']), id: idSchema, name: z.string(), version: z.int().nullable() }))
+const usedIn = z.array(z.object({ kind: z.enum(['mix', 'build-up', 'job', 'specification']), id: idSchema, name: z.string(), version: z.int().nullable() }))
 const recordParts = { note: z.string(), version: versionSchema, updatedAt: z.string(), usedIn }
 export const productRecordSchema = productFactsSchema.extend(recordParts)
 export type ProductRecord = z.infer<typeof productRecordSchema>
@@ -47,7 +46,10 @@ export const productRowSchema = z.object({
 })
 export type ProductRow = z.infer<typeof productRowSchema>
 export const mixRowSchema = z.object({
-  id: idSchema, name: z.string(), maker: z.string(), chemistry: z.string(), color: z.string(), status: recordStatusSchema, parts: z.int(), facts: z.int(), sheets: z.int(), updatedAt: z.string(),
+  id: idSchema, name: z.string(), maker: z.string(), chemistry: z.string(), color: z.string(), status: recordStatusSchema,
+  /** Names of the parts, A first. */
+  parts: z.array(z.string()),
+  facts: z.int(), sheets: z.int(), updatedAt: z.string(),
 })
 export type MixRow = z.infer<typeof mixRowSchema>
 
@@ -58,8 +60,14 @@ const partsSchema = z
   .min(1, 'A mix has at least one part.')
   .max(3, 'A mix has at most three parts.')
   .refine((parts) => parts.every(({ part }, index) => part === 'ABC'[index]), 'Parts are named A, B, C in this order.')
+  .superRefine((parts, context) => {
+    const first = (id: string) => parts.findIndex(({ productId }) => productId === id)
+    parts.forEach(({ productId }, index) => {
+      if (first(productId) < index) context.addIssue({ code: 'custom', path: [index, 'productId'], message: `This product is part ${'ABC'[first(productId)]} already.` })
+    })
+  })
 export const mixBody = z.strictObject({ name: line(160), maker: line(120), chemistry: chemistrySchema, color: colorSchema, note: paragraph(2000), parts: partsSchema })
-/** A new mix says its ratio with it, so that none of several parts goes without. */
+/** A new mix says its ratio with it, or says that nobody knows it yet. */
 export const newMixBody = mixBody
   .extend({ ratio: z.strictObject({ value: ratioSchema, reason: line(500) }).nullable() })
   .superRefine(({ parts, ratio }, context) => {
@@ -69,12 +77,20 @@ export const newMixBody = mixBody
     if (parts.length === 1 && ratio) context.addIssue({ code: 'custom', path: ['ratio'], message: 'One part alone has no ratio.' })
   })
 
+const csv = { file: 'text/csv; charset=utf-8' } as const
 const filters = { chemistry: chemistrySchema.optional(), status: recordStatusSchema.optional(), maker: z.string().trim().max(120).optional() }
+
+const productQuery = listQuery(['name', 'maker', 'kind', 'chemistry', 'updatedAt']).extend({ ...filters, kind: productKindSchema.optional() })
+const mixQuery = listQuery(['name', 'maker', 'chemistry', 'updatedAt']).extend(filters)
 
 export const catalogueEndpoints = {
   listProducts: endpoint({
-    method: 'get', path: '/api/products', access: 'catalogue:read', summary: 'List products by name, maker, CAS number or hazard code',
-    query: listQuery(['name', 'maker', 'kind', 'chemistry', 'updatedAt']).extend({ ...filters, kind: productKindSchema.optional() }), response: listOf(productRowSchema),
+    method: 'get', path: '/api/products', access: 'catalogue:read', summary: 'List products by name, maker, kind, chemistry, CAS number or hazard code', query: productQuery,
+    response: listOf(productRowSchema),
+  }),
+  exportProducts: endpoint({
+    method: 'get', path: '/api/products.csv', access: 'catalogue:read', summary: 'The list of products as CSV, with the same search and filters, all of it',
+    query: productQuery.omit({ limit: true, cursor: true }), response: csv,
   }),
   addProduct: endpoint({ method: 'post', path: '/api/products', access: 'catalogue:write', summary: 'Add a product', status: 201, body: productBody, response: productRecordSchema }),
   readProduct: endpoint({ method: 'get', path: '/api/products/:productId', access: 'catalogue:read', summary: 'Read a product with all that is known of it', params: productId, response: productRecordSchema }),
@@ -86,7 +102,12 @@ export const catalogueEndpoints = {
     method: 'post', path: '/api/products/:productId/facts', access: 'catalogue:write', summary: 'Add a value to a product', params: productId, status: 201, body: factBody, response: factSchema,
   }),
   listMixes: endpoint({
-    method: 'get', path: '/api/mixes', access: 'catalogue:read', summary: 'List mixes', query: listQuery(['name', 'maker', 'chemistry', 'updatedAt']).extend(filters), response: listOf(mixRowSchema),
+    method: 'get', path: '/api/mixes', access: 'catalogue:read', summary: 'List mixes by name, maker, chemistry, or by the name, CAS numbers and hazard codes of their parts', query: mixQuery,
+    response: listOf(mixRowSchema),
+  }),
+  exportMixes: endpoint({
+    method: 'get', path: '/api/mixes.csv', access: 'catalogue:read', summary: 'The list of mixes as CSV, with the same search and filters, all of it',
+    query: mixQuery.omit({ limit: true, cursor: true }), response: csv,
   }),
   addMix: endpoint({ method: 'post', path: '/api/mixes', access: 'catalogue:write', summary: 'Add a mix of one to three parts with its ratio', status: 201, body: newMixBody, response: mixRecordSchema }),
   readMix: endpoint({ method: 'get', path: '/api/mixes/:mixId', access: 'catalogue:read', summary: 'Read a mix with all that is known of it', params: mixId, response: mixRecordSchema }),

@@ -75,7 +75,16 @@ export function definitionOf(property: Property): PropertyDefinition {
 }
 
 export const unitSchema = z.enum(units)
-const finite = z.number().min(-1e9).max(1e9)
+const finite = z.number('This is not a number.').min(-1e9, 'This is too small.').max(1e9, 'This is too large.')
+/** Words of a sheet or a person: line breaks, but no other control characters and no broken characters. */
+const words = (most: number) =>
+  z
+    .string('Write this as text.')
+    .trim()
+    .max(most, `At most ${most.toLocaleString('en-US')} characters.`)
+    // eslint-disable-next-line no-control-regex -- control characters are what this refuses
+    .regex(/^[^\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f\p{Cs}]*$/u, 'Control characters are not accepted.')
+const someWords = (most: number) => words(most).min(1, 'This cannot be empty.')
 
 /** A quantity as written: both ends equal for a single figure, one end alone for a bound. */
 export const rangeSchema = z
@@ -90,29 +99,36 @@ export const quantitySchema = z.strictObject({ value: finite, unit: unitSchema }
 
 export const ratioSchema = z.strictObject({
   /** Parts in the order A, B, C. */
-  parts: z.array(z.number().positive().max(10_000)).min(2).max(3),
+  parts: z
+    .array(z.number('This is not a number.').positive('Parts of a ratio are above 0.').max(10_000, 'This is too large.'))
+    .min(2, 'Write the ratio as 2 : 1, or 4 : 1 : 6.')
+    .max(3, 'A ratio has at most three parts.'),
   basis: z.enum(['volume', 'weight']).optional(),
 })
 export type Ratio = z.infer<typeof ratioSchema>
 
-const codesSchema = z.strictObject({ codes: z.array(z.string().regex(/^(EU)?[HP]\d{3}[A-Za-z]{0,2}(\+[HP]\d{3})*$/)).min(1).max(60) })
-const percent = z.number().min(0).max(100)
+const codeSchema = z.string().regex(/^(EU)?[HP]\d{3}[A-Za-z]{0,2}(\+[HP]\d{3})*$/, 'Codes look like H315, EUH208 or P305+P351+P338.')
+const codesSchema = z.strictObject({ codes: z.array(codeSchema).min(1, 'Write at least one code.').max(60, 'At most 60 codes.') })
+const percent = z.number('This is not a number.').min(0, 'A share is not below 0 %.').max(100, 'A share is not above 100 %.')
 const substanceSchema = z.strictObject({
-  name: z.string().trim().min(1).max(200),
-  cas: z.string().regex(/^\d{2,7}-\d{2}-\d$/).optional(),
+  name: someWords(200),
+  cas: z.string().regex(/^\d{2,7}-\d{2}-\d$/, 'A CAS number looks like 100-51-6.').optional(),
   min: percent.optional(),
   max: percent.optional(),
   unit: z.literal('%'),
 })
 export type Substance = z.infer<typeof substanceSchema>
-const textSchema = z.strictObject({ text: z.string().trim().min(1).max(2000) })
-const dateSchema = z.strictObject({ date: z.string().regex(/^\d{4}(-(0[1-9]|1[0-2])(-(0[1-9]|[12]\d|3[01]))?)?$/) })
+const textSchema = z.strictObject({ text: someWords(2000) })
+const dateSchema = z.strictObject({
+  date: z.string().regex(/^\d{4}(-(0[1-9]|1[0-2])(-(0[1-9]|[12]\d|3[01]))?)?$/, 'Write the date as 2024-03-18, 2024-03 or 2024.'),
+})
 const flagSchema = z.strictObject({ is: z.boolean() })
 
 export const valueSchema = z.union([rangeSchema, ratioSchema, codesSchema, substanceSchema, textSchema, dateSchema, flagSchema])
 export type PropertyValue = z.infer<typeof valueSchema>
 
-const valueSchemas: Record<ValueForm, z.ZodType<PropertyValue>> = {
+/** The schema of a value by its form. */
+export const valueSchemas: Record<ValueForm, z.ZodType<PropertyValue>> = {
   quantity: rangeSchema,
   window: rangeSchema,
   ratio: ratioSchema,
@@ -130,7 +146,7 @@ export const conditionsSchema = z.strictObject({
   volume: quantitySchema.optional(),
   relativeHumidity: quantitySchema.optional(),
   film: quantitySchema.optional(),
-  next: z.string().trim().max(200).optional(),
+  next: words(200).optional(),
 })
 export type ValueConditions = z.infer<typeof conditionsSchema>
 

@@ -4,7 +4,7 @@ import type { Database } from '../../db/open.ts'
 
 type Use = MixRecord['usedIn'][number]
 
-/** Where a product or a mix is used: mixes it is part of, build-up versions that lay it, jobs done by those. */
+/** Where a product or a mix is used: mixes it is part of, build-up versions that lay it, jobs done by those and their specifications. */
 export async function readUses(db: Database, { productId, mixId }: { productId?: string; mixId?: string }): Promise<Use[]> {
   const mixesOf = productId ? sql`select m.id, m.name from mixes m join mix_parts p on p.mix_id = m.id where p.product_id = ${productId}` : sql`select id, name from mixes where id = ${mixId}`
   const bySand = productId ? sql`or c.course->'filler'->>'productId' = ${productId} or c.course->'broadcast'->>'productId' = ${productId}` : sql``
@@ -18,6 +18,8 @@ export async function readUses(db: Database, { productId, mixId }: { productId?:
     select 'mix' as kind, id, name, null::int as version from used_mixes where ${productId !== undefined}
     union all select 'build-up', build_up_id, name, number from versions
     union all select 'job', j.id, j.name, null from jobs j where j.build_up_version_id in (select id from versions)
+    union all select 'specification', s.id, s.title || ', ' || j.name, null from specifications s join jobs j on j.id = s.job_id
+      where j.build_up_version_id in (select id from versions)
     order by 1, 3, 4`)
   return rows
 }

@@ -3,8 +3,8 @@ import type { MixRecord } from '../../../shared/api/catalogue.ts'
 import { paths } from '../../lib/paths.ts'
 import { Card } from '../../ui/page.tsx'
 
-const addressOf = { mix: paths.mix, 'build-up': paths.buildUp, job: paths.job } as const
-const names = { mix: 'Mix', 'build-up': 'Build-up', job: 'Job' } as const
+const addressOf = { mix: paths.mix, 'build-up': paths.buildUp, job: paths.job, specification: paths.specification } as const
+const names = { mix: 'Mix', 'build-up': 'Build-up', job: 'Job', specification: 'Specification' } as const
 
 /** Mixes, build-ups and jobs that rest on this record. */
 export function UsesCard({ uses }: { uses: MixRecord['usedIn'] }) {
