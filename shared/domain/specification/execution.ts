@@ -1,10 +1,10 @@
 import { dryStages } from '../build-up.ts'
-import { factsOf } from '../fact.ts'
 import { formatNumber, formatQuantity } from '../format.ts'
 import { valueIn } from '../units.ts'
 import type { Article, Item, Runs } from './document.ts'
 import { type Floor, type SpecCourse, areaOf } from './floor.ts'
-import { chosen, item, joined, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
+import { chosen, item, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
+import { statedOfEach } from './stated.ts'
 
 /** Where the first course that lays something down stands; what is before it is preparation. */
 function firstLaid({ courses }: Floor): number {
@@ -26,17 +26,13 @@ function moistureTests({ given, register }: Floor): Runs {
 
 function examination(floor: Floor): Item[] {
   const { substrateRelativeHumidity, moistureEmission } = floor.given.input.conditions
-  const limits = floor.mixes.map((mix) => {
-    const facts = [...factsOf(mix.facts, 'substrateRelativeHumidity'), ...factsOf(mix.facts, 'moistureEmission')]
-    return item(line`${quoted(mix.name)}: ${facts.length > 0 ? joined(facts.map((fact) => floor.register.factAt(fact)), '; ') : notStatedRun()}.`)
-  })
   return [
     item(line`Examine the slab with the owner. Report in writing contamination, moving joints, cracks, weak concrete, old coatings and missing vapor retarder. Do not begin until the report is answered.`),
     item(line`Test moisture in the slab after ${standard('ASTM F2170')} or ${standard('ASTM F1869')}: ${moistureTests(floor)}, at least.`, [
       item(line`Relative humidity in the slab, as known today: ${substrateRelativeHumidity === null ? line`not measured` : [measured(`${substrateRelativeHumidity} %`)]}.`),
       item(line`Moisture emission rate, as known today: ${moistureEmission ? [measured(formatQuantity(moistureEmission))] : line`not measured`}.`),
     ]),
-    item(line`Moisture limits of the sheets. The lowest limit of the first resin course governs:`, limits),
+    item(line`Moisture limits of the sheets. The lowest limit of the first resin course governs:`, statedOfEach(floor, floor.mixes, ['substrateRelativeHumidity', 'moistureEmission'])),
     item(line`A licensed structural engineer decides on cracks that move and on load.`),
   ]
 }
@@ -50,14 +46,10 @@ const note = (words: string): Item[] => (words.trim() ? [item(line`Note: ${quote
 
 function preparation(floor: Floor): Item[] {
   const before = floor.courses.slice(0, firstLaid(floor))
-  const profiles = floor.mixes.map((mix) => {
-    const facts = factsOf(mix.facts, 'surfaceProfile')
-    return item(line`${quoted(mix.name)}: ${facts.length > 0 ? joined(facts.map((fact) => floor.register.factAt(fact)), '; ') : notStatedRun()}.`)
-  })
   return [
     ...plain('Remove laitance, curing compound, oil and old coatings to sound concrete. Degrease before any mechanical work.'),
     ...before.map(preparationLine),
-    item(line`Compare the prepared slab with the chips of ${standard('ICRI 310.2R')} and record the profile. Profiles that the sheets ask for:`, profiles),
+    item(line`Compare the prepared slab with the chips of ${standard('ICRI 310.2R')} and record the profile. Profiles that the sheets ask for:`, statedOfEach(floor, floor.mixes, ['surfaceProfile'])),
     item(line`Mean texture depth of the prepared slab: ${floor.given.texture ? [measured(formatQuantity(floor.given.texture))] : line`not measured`}.`),
     ...plain('Vacuum the dust. Honor moving joints through all courses.'),
   ]
@@ -97,10 +89,7 @@ function installation(floor: Floor): Item[] {
 const fieldQuality = (floor: Floor): Item[] => [
   item(line`Before every course record slab, air and material temperature, relative humidity and dew point. Hold when one is outside the limits of Part one.`),
   item(line`Measure wet film after ${standard('ASTM D4414')}, or the yield of each pack by bay, and compare it with the system schedule.`),
-  item(line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance:`, floor.mixes.map((mix) => {
-    const facts = factsOf(mix.facts, 'pullOffStrength')
-    return item(line`${quoted(mix.name)}: ${facts.length > 0 ? joined(facts.map((fact) => [floor.register.fact(fact)]), '; ') : notStatedRun()}.`)
-  })),
+  item(line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance:`, statedOfEach(floor, floor.mixes, ['pullOffStrength'])),
   ...plain('Mark, cut back and relay what fails. Record lots, bays, times and readings daily.'),
 ]
 

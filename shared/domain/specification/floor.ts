@@ -74,10 +74,12 @@ export function readFloor({ input }: SpecInput, evaluation: Evaluation): Pick<Fl
   }
 }
 
-/** The three temperatures that windows are told at, in the unit that the sheets use. */
+/** The three temperatures that windows are told at, in the unit that most of the sheets use; the slab's where they are even. */
 export function threeTemperatures({ mixes, given }: Pick<Floor, 'mixes' | 'given'>): Quantity[] {
-  const stated = mixes.flatMap(({ facts }) => facts).find(({ property, at }) => property === 'recoatWindow' && at?.temperature)?.at?.temperature
-  const unit: Unit = stated?.unit ?? given.input.conditions.slabTemperature.unit
+  const stated = mixes.flatMap(({ facts }) => facts.find(({ property, at }) => property === 'recoatWindow' && at?.temperature)?.at?.temperature?.unit ?? [])
+  const fahrenheit = stated.filter((one) => one === '°F').length
+  const slab = given.input.conditions.slabTemperature.unit
+  const unit: Unit = fahrenheit * 2 === stated.length ? slab : fahrenheit * 2 > stated.length ? '°F' : '°C'
   return (unit === '°F' ? [50, 70, 90] : [10, 20, 30]).map((value) => ({ value, unit }))
 }
 

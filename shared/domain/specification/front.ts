@@ -1,13 +1,10 @@
 import { reasonKey } from '../course.ts'
-import { type Fact, factsOf } from '../fact.ts'
 import { type Figure, isTypical } from '../figure.ts'
 import type { Finding } from '../finding.ts'
 import { formatFigure, formatNumber, formatQuantity } from '../format.ts'
 import { type Property, properties } from '../property.ts'
-import { valueAt } from '../sheet-table.ts'
-import { windowAt } from '../window.ts'
 import type { Item, SpecDocument } from './document.ts'
-import { type Floor, type SpecCourse, threeTemperatures } from './floor.ts'
+import type { Floor, SpecCourse } from './floor.ts'
 import { item, joined, line, measured, plain, quoted } from './runs.ts'
 
 interface Unknown {
@@ -20,18 +17,11 @@ interface Unknown {
 const figuresOf = ({ result, mix }: SpecCourse): Figure[] =>
   mix ? [result.wetFilm, result.dryFilm, result.spreadRate, result.potLife, result.workingTime, result.window, result.footTraffic, result.vehicleTraffic, result.fullCure, result.voc] : []
 
-/** Windows and pot lives at the three temperatures that the schedules show. */
-function scheduled(floor: Floor): Figure[] {
-  return floor.courses.flatMap(({ mix, next }) =>
-    mix ? threeTemperatures(floor).flatMap((temperature) => [windowAt(mix, { temperature, next }), valueAt(mix.facts, { property: 'potLife', temperature, mix })]) : [],
-  )
-}
-
 /** What the document cannot say, each once: by the figure that is missing and whose it is. */
 function unknownsOf(floor: Floor): Unknown[] {
-  const { evaluation, courses } = floor
+  const { evaluation, register } = floor
   const missing = [
-    ...[...courses.flatMap(figuresOf), ...scheduled(floor), ...Object.values(evaluation.totals)].flatMap((figure) => (figure.kind === 'not-stated' ? [figure.missing] : [])),
+    ...register.gaps().figures,
     ...evaluation.findings.flatMap((finding) => (finding.status === 'unknown' ? finding.missing : [])),
   ]
   const all = missing.map(({ property, of, ask, because }): Unknown => ({ what: properties[property].label, of, ask, because }))
@@ -45,27 +35,17 @@ function unknownsOf(floor: Floor): Unknown[] {
   })
 }
 
-/** What parts, schedules and hazards ask of every mix and product; where a sheet is silent the front says so. */
-const askedOfMixes = [
-  'volumeSolids', 'filmThickness', 'applicationTemperature', 'maxRelativeHumidity', 'dewPointMargin', 'substrateRelativeHumidity', 'moistureEmission', 'surfaceProfile',
-  'pullOffStrength', 'splitKit', 'mixRatio', 'shelfLife',
-] as const satisfies readonly Property[]
-const askedOfProducts = ['gloves', 'eyeProtection', 'respiratoryProtection'] as const satisfies readonly Property[]
-const aboutKits = new Set<Property>(['splitKit', 'mixRatio'])
+const equipment = ['gloves', 'eyeProtection', 'respiratoryProtection'] as const satisfies readonly Property[]
 
 /** One line a property: of which mixes and products nobody states it. */
-function silences({ mixes, products, aggregates }: Floor): Item[] {
+function silences({ products, aggregates, register }: Floor): Item[] {
   const liquids = products.filter(({ id }) => !aggregates.some((one) => one.id === id))
-  const silent = (property: Property, holders: readonly { name: string; facts: readonly Fact[] }[]): Item[] => {
-    const names = holders.filter(({ facts }) => !facts.some((fact) => fact.property === property)).map(({ name }) => [quoted(name)])
-    return names.length > 0 ? [item(line`${quoted(properties[property].label)}: not stated for ${joined(names, '; ')}. Ask the maker, in writing.`)] : []
-  }
-  const stored = [...mixes, ...products].some(({ facts }) => factsOf(facts, 'storageTemperature').length > 0)
-  return [
-    ...askedOfMixes.flatMap((property) => silent(property, aboutKits.has(property) ? mixes.filter(({ parts }) => parts.length > 1) : mixes)),
-    ...askedOfProducts.flatMap((property) => silent(property, liquids)),
-    ...(stored ? [] : [item(line`${quoted(properties.storageTemperature.label)}: not stated for any material. Ask the makers, in writing.`)]),
-  ]
+  const unworn = equipment.flatMap((property) => liquids.flatMap(({ name, facts }) => (facts.some((fact) => fact.property === property) ? [] : [{ of: name, property }])))
+  const all = [...register.gaps().silences, ...unworn]
+  return [...new Set(all.map(({ property }) => property))].map((property) => {
+    const names = [...new Set(all.filter((one) => one.property === property).map(({ of }) => of))]
+    return item(line`${quoted(properties[property].label)}: not stated for ${joined(names.map((name) => [quoted(name)]), '; ')}. Ask the maker, in writing.`)
+  })
 }
 
 function unknowns(floor: Floor): Item[] {
@@ -117,7 +97,7 @@ function assumptions({ given }: Floor): Item[] {
   ]
 }
 
-/** What stands before the first part: what is not known comes first. */
+/** What stands before the first part: what is not known comes first. Written last, when the document has said all that it says. */
 export function frontMatter(floor: Floor): SpecDocument['front'] {
   return { unknowns: unknowns(floor), overrides: overrides(floor), typical: typical(floor), assumptions: assumptions(floor) }
 }

@@ -1,9 +1,10 @@
-import { type Fact, factOf, factsOf } from '../fact.ts'
-import { firstAidOf } from '../hazard.ts'
+import { factOf } from '../fact.ts'
 import { formatQuantity } from '../format.ts'
 import type { Article, Item, Runs } from './document.ts'
 import { type Floor, areaOf } from './floor.ts'
+import { firstAidItems } from './hazards.ts'
 import { chosen, item, joined, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
+import { statedOfEach } from './stated.ts'
 
 const inSteps = (titles: readonly string[]): Runs => joined(titles.map((title) => [quoted(title)]), ', ')
 
@@ -76,11 +77,8 @@ const quality = (): Item[] => [
 ]
 
 function storedAt(floor: Floor): Item[] {
-  const lines = [...floor.mixes, ...floor.products].flatMap(({ name, facts }) => {
-    const stored = factOf(facts, 'storageTemperature')
-    return stored ? [item(line`${quoted(name)}: ${floor.register.factAt(stored)}.`)] : []
-  })
-  return lines.length > 0 ? lines : [item(line`Storage temperature: ${notStatedRun()}. Ask the maker in writing.`)]
+  const told = [...floor.mixes, ...floor.products].filter(({ facts }) => factOf(facts, 'storageTemperature'))
+  return statedOfEach(floor, told.length > 0 ? told : floor.mixes, ['storageTemperature'])
 }
 
 const delivery = (floor: Floor): Item[] => [
@@ -89,31 +87,25 @@ const delivery = (floor: Floor): Item[] => [
   ...plain('Keep the safety data sheets within immediate reach of every shift, without need of a signal.'),
 ]
 
-const limitsOf = (floor: Floor, properties: readonly Fact['property'][]): Item[] =>
-  floor.mixes.map((mix) => {
-    const facts = properties.flatMap((property) => factsOf(mix.facts, property))
-    return item(line`${quoted(mix.name)}: ${facts.length > 0 ? joined(facts.map((fact) => floor.register.factAt(fact)), '; ') : notStatedRun()}.`)
-  })
-
 function siteConditions(floor: Floor): Item[] {
   const { slabTemperature, airTemperature, relativeHumidity } = floor.given.input.conditions
   return [
     item(line`Conditions that this section is worked out at: slab ${measured(formatQuantity(slabTemperature))}, air ${measured(formatQuantity(airTemperature))}, relative humidity of the air ${measured(`${relativeHumidity} %`)}, dew point ${floor.register.figure(floor.evaluation.totals.dewPoint)}. Work under other conditions only within the sheets’ own limits.`),
-    item(line`Keep air, slab and material within the sheets’ temperatures:`, limitsOf(floor, ['applicationTemperature'])),
-    item(line`Keep the relative humidity of the air within the sheets’ limits:`, limitsOf(floor, ['maxRelativeHumidity'])),
-    item(line`Keep the slab above the dew point by at least:`, limitsOf(floor, ['dewPointMargin'])),
+    item(line`Keep air, slab and material within the sheets’ temperatures:`, statedOfEach(floor, floor.mixes, ['applicationTemperature'])),
+    item(line`Keep the relative humidity of the air within the sheets’ limits:`, statedOfEach(floor, floor.mixes, ['maxRelativeHumidity'])),
+    item(line`Keep the slab above the dew point by at least:`, statedOfEach(floor, floor.mixes, ['dewPointMargin'])),
     ...plain('Do not start a course on a slab that is warming. Keep permanent lighting and ventilation running, and other trades off the floor, from preparation until cure.'),
     ...plain('Do not run combustion engines or unvented heaters indoors: carbon monoxide. Open doors are no control.'),
   ]
 }
 
-function hazards({ evaluation: { hazards: union } }: Floor): Item[] {
-  const firstAid = firstAidOf(union.precautions)
+function hazards(floor: Floor): Item[] {
+  const union = floor.evaluation.hazards
   return [
     ...plain('This section informs. The sheet, the label, the law and the competent person decide.'),
     item(line`Hazards and protective equipment by course: see the schedule of hazards. Signal word of all materials together: ${union.signalWord ? quoted(union.signalWord) : notStatedRun()}.`),
     ...(union.notStated.length > 0 ? [item(line`No hazard statement is loaded for: ${joined(union.notStated.map((name) => [quoted(name)]), ', ')}. Treat the hazards as unknown until the safety sheet is read.`)] : []),
-    item(line`First aid as the safety sheets state it:`, firstAid.length > 0 ? firstAid.map(({ code, text }) => item(line`${quoted(code)}: ${quoted(text)}`)) : [item(line`${notStatedRun()}. Read the safety sheets before work.`)]),
+    item(line`First aid as the safety sheets state it:`, firstAidItems(floor)),
     item(line`Silica: control dust of grinding, blasting and sand tipping after ${standard('29 CFR 1926.1153')}: its table of controls, or an exposure assessment. Do not sweep dry. Do not blow with compressed air.`),
     item(line`Skin and breathing: sensitization to resins, hardeners and isocyanates is permanent. Leave gloves and respirators to the safety sheets and a competent person; a new rash or breathing trouble ends the work for that person.`),
     item(line`Hot pail: empty each mix at once. A mix left in the pail heats by itself, can smoke and burn. Keep clear of a smoking pail, do not cap it, do not pour water into it.`),

@@ -1,16 +1,14 @@
-import { type Fact, factOf, factsOf } from '../fact.ts'
+import { factOf, factsOf } from '../fact.ts'
 import type { MixFacts } from '../mix.ts'
 import { type Property, properties } from '../property.ts'
 import type { ProductFacts } from '../product.ts'
-import type { Article, Item, Runs } from './document.ts'
+import type { Article, Item } from './document.ts'
 import type { Floor, SpecCourse } from './floor.ts'
-import { item, joined, line, notStatedRun, plain, quoted } from './runs.ts'
+import { item, joined, line, plain, quoted } from './runs.ts'
+import { type Holder, stated, statedOfEach } from './stated.ts'
 
 /** "Solids by volume: 100 % [S1]." or "…: not stated." */
-function propertyLine({ register }: Floor, facts: readonly Fact[], property: Property): Item {
-  const found = factsOf(facts, property)
-  return item(line`${quoted(properties[property].label)}: ${found.length > 0 ? joined(found.map((fact) => register.factAt(fact)), '; ') : notStatedRun()}.`)
-}
+const propertyLine = (floor: Floor, holder: Holder, property: Property): Item => item(line`${quoted(properties[property].label)}: ${stated(floor, holder, [property])}.`)
 
 function manufacturers({ mixes, products }: Floor): Item[] {
   const makers = [...new Set([...mixes, ...products].map(({ maker }) => maker))].sort()
@@ -36,14 +34,9 @@ function performance(floor: Floor): Item[] {
       ...laid.map(({ course, mix, result }) => item(line`${quoted(course.title)}, ${quoted(mix?.name ?? '')}: ${register.figure(result.voc)}.`)),
       item(line`Greatest of all courses: ${register.figure(evaluation.totals.vocWorst)}. Comply with the air district’s rule; the strictest category named on label or sheet applies.`),
     ]),
-    item(line`Pull-off strength of the slab asked for:`, floor.mixes.map((mix) => item(line`${quoted(mix.name)}: ${oneOf(floor, mix, 'pullOffStrength')}.`))),
+    item(line`Pull-off strength of the slab asked for:`, statedOfEach(floor, floor.mixes, ['pullOffStrength'])),
     ...plain('Slip resistance, chemical and fire performance: as the contract states and the approved mock-up shows. Ask the maker in writing for what no sheet states.'),
   ]
-}
-
-function oneOf({ register }: Floor, { facts }: Pick<MixFacts, 'facts'>, property: Property): Runs {
-  const fact = factOf(facts, property)
-  return fact ? register.factAt(fact) : notStatedRun()
 }
 
 /** Told where a sheet states them; nothing here depends on them. */
@@ -54,8 +47,8 @@ function materials(floor: Floor): Item[] {
   return floor.mixes.map((mix) =>
     item(line`${quoted(mix.name)}: ${quoted(mix.chemistry)}, by ${quoted(mix.maker)}.`, [
       item(line`Components: ${joined(mix.parts.map(({ part, product }) => line`${quoted(part)}, ${quoted(product.name)}`), '; ')}.`),
-      ...mixProperties.map((property) => propertyLine(floor, mix.facts, property)),
-      ...furtherProperties.filter((property) => factOf(mix.facts, property)).map((property) => propertyLine(floor, mix.facts, property)),
+      ...mixProperties.map((property) => propertyLine(floor, mix, property)),
+      ...furtherProperties.filter((property) => factOf(mix.facts, property)).map((property) => propertyLine(floor, mix, property)),
     ]),
   )
 }
@@ -65,13 +58,12 @@ function aggregateItem(floor: Floor, product: ProductFacts): Item {
     ...(filler?.id === product.id ? [line`in the mix of ${quoted(course.title)}`] : []),
     ...(broadcast?.id === product.id ? [line`broadcast on ${quoted(course.title)}`] : []),
   ])
-  return item(line`${quoted(product.name)}: ${quoted(product.chemistry)}, by ${quoted(product.maker)}; ${joined(uses, ', ')}.`, [propertyLine(floor, product.facts, 'density')])
+  return item(line`${quoted(product.name)}: ${quoted(product.chemistry)}, by ${quoted(product.maker)}; ${joined(uses, ', ')}.`, [propertyLine(floor, product, 'density')])
 }
 
 function ratios(floor: Floor, mix: MixFacts): Item {
-  const stated = factsOf(mix.facts, 'mixRatio')
-  const single = mix.parts.length === 1
-  return item(line`Ratio: ${stated.length > 0 ? joined(stated.map((fact) => [floor.register.fact(fact)]), '; ') : single ? line`one component, nothing to proportion` : notStatedRun()}.`)
+  const single = mix.parts.length === 1 && !factOf(mix.facts, 'mixRatio')
+  return item(line`Ratio: ${single ? line`one component, nothing to proportion` : stated(floor, mix, ['mixRatio'])}.`)
 }
 
 function mixItem(floor: Floor, { mix, result, course, filler }: SpecCourse & { mix: MixFacts }): Item {
@@ -82,7 +74,7 @@ function mixItem(floor: Floor, { mix, result, course, filler }: SpecCourse & { m
     filler && course.filler ? item(line`Aggregate in the mix: ${quoted(filler.name)}, loading in the system schedule.`) : null,
     item(line`Pot life at the slab temperature of this section: ${floor.register.figure(result.potLife)}. Other temperatures: schedule of pot life.`),
     induction.length > 0 ? item(line`Induction time: ${joined(induction.map((fact) => floor.register.factAt(fact)), '; ')}.`) : null,
-    item(line`Part kits allowed: ${split ? [floor.register.fact(split)] : notStatedRun()}.`),
+    item(line`Part kits allowed: ${stated(floor, mix, ['splitKit'])}.`),
     split ? null : item(line`Mix whole kits only.`),
   ])
 }

@@ -1,12 +1,11 @@
 import { formatNumber, formatQuantity } from '../format.ts'
-import { pictograms } from '../../reference/ghs.ts'
-import { unionOfHazards } from '../hazard.ts'
 import { writtenDate } from '../sheet-age.ts'
 import { valueAt } from '../sheet-table.ts'
 import type { SheetSummary } from '../sheet.ts'
 import { windowAt } from '../window.ts'
 import type { Runs, SpecTable } from './document.ts'
 import { type Floor, type SpecCourse, threeTemperatures } from './floor.ts'
+import { hazardTable } from './hazards.ts'
 import { chosen, joined, line, measured, notStatedRun, plainFigure, quoted } from './runs.ts'
 
 /** Titles of the schedules, in their order. */
@@ -106,29 +105,6 @@ const sheetSchedule = ({ mixes, products }: Floor): SpecTable => table('sheets',
   note: 'Sheets at the revision that this section rests on.',
 })
 
-const wordsOr = (lines: readonly { text: string; from: string }[]): Runs =>
-  lines.length > 0 ? joined(lines.map(({ text, from }) => line`${quoted(text)} (${quoted(from)})`), '; ') : notStatedRun()
-
-const shows = (code: string) => (code in pictograms ? pictograms[code as keyof typeof pictograms].shows : code)
-
-function hazardSchedule({ courses }: Floor): SpecTable {
-  const rows = courses.map((one): Runs[] => {
-    if (!one.mix) return [numbered(one), line`No material sheet. Dust and noise of the work: Part one, Hazards and cautions.`, notStatedRun(), notStatedRun(), notStatedRun()]
-    const sum = one.result.hazards ?? unionOfHazards(one.products)
-    const said = [
-      ...(sum.signalWord ? [line`${quoted(sum.signalWord)}`] : []),
-      ...sum.pictograms.map((code) => line`${quoted(`${code} ${shows(code)}`)}`),
-      ...sum.statements.map(({ code, text }) => line`${quoted(code)} ${quoted(text.replace(/\.$/, ''))}`),
-      ...(sum.notStated.length > 0 ? [line`not stated for ${quoted(sum.notStated.join(', '))}`] : []),
-    ]
-    return [numbered(one), said.length > 0 ? joined(said, '; ') : notStatedRun(), wordsOr(sum.gloves), wordsOr(sum.eyes), wordsOr(sum.breathing)]
-  })
-  return table('hazards', {
-    columns: [['Course', 14], ['Hazards', 38], ['Gloves', 16], ['Eyes', 16], ['Breathing', 16]], rows,
-    note: 'As the safety sheets state them. What arises in mixing, curing and grinding is on no sheet. The competent person decides on equipment.',
-  })
-}
-
 const statusWords = { stop: 'not met', caution: 'caution', unknown: 'unknown', met: 'met' } as const
 
 function checkSchedule({ evaluation, courses }: Floor): SpecTable {
@@ -142,6 +118,6 @@ function checkSchedule({ evaluation, courses }: Floor): SpecTable {
 
 /** The schedules that follow the parts. */
 export function schedules(floor: Floor): SpecTable[] {
-  const all = [systemSchedule(floor), windows(floor), potLives(floor), areas(floor), sheetSchedule(floor), hazardSchedule(floor), checkSchedule(floor)]
+  const all = [systemSchedule(floor), windows(floor), potLives(floor), areas(floor), sheetSchedule(floor), hazardTable(floor, scheduleTitles.hazards), checkSchedule(floor)]
   return all.filter(({ rows }) => rows.length > 0)
 }

@@ -7,9 +7,6 @@ import { line, notStatedRun, quoted } from './runs.ts'
 
 type Lists = Pick<SpecDocument, 'sources' | 'workings' | 'entered' | 'typicals'>
 
-/** What is missing, whose it is and who could supply it. */
-export type Gap = Pick<Missing, 'property' | 'of' | 'ask' | 'because'>
-
 /** Hands out the tags of a document: each page of a sheet, each entered value, typical value and working once, in the order of first use. */
 export interface Register {
   /** A fact of the catalogue: its value with its tag. */
@@ -20,8 +17,10 @@ export interface Register {
   figure(figure: Figure, options?: { window?: boolean }): Runs
   /** "not stated", of a property of a mix or product; kept for the front of the document. */
   notStated(of: string, property: Property): Runs
-  /** What the document has called not stated so far, in the order of first use. */
-  gaps(): Gap[]
+  /** What the document has called not stated so far: figures, and what sheets are silent on. */
+  gaps(): { figures: Missing[]; silences: { of: string; property: Property }[] }
+  /** Words that several facts state together, with the tags of all. */
+  cite(text: string, facts: readonly Fact[]): Run
   /** A number worked out for the document itself. */
   working(text: string, working: { formula: string; sum: string; source: string }): Run
   lists(): Lists
@@ -33,7 +32,7 @@ const chosenFormula = 'chosen for this course'
 
 export function createRegister(): Register {
   const lists: Lists = { sources: [], workings: [], entered: [], typicals: [] }
-  const gaps: Gap[] = []
+  const gaps: ReturnType<Register['gaps']> = { figures: [], silences: [] }
 
   const tagOf = (origin: Origin): string => {
     if (origin.kind === 'stated') return sheetTag(lists.sources, origin.citation)
@@ -58,6 +57,11 @@ export function createRegister(): Register {
     const tag = once(lists.workings, 'W', { formula, sum, source, from }, (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from))
     return { kind: 'figure', text, known: isTypical(figure) ? 'typical' : 'computed', tags: [tag], citation: null }
   }
+  const cite: Register['cite'] = (text, facts) => {
+    const [first] = facts
+    if (!first) return quoted(text)
+    return { ...cited(text, first.origin), tags: [...new Set(facts.map(({ origin }) => tagOf(origin)))] } as Run
+  }
   const fact: Register['fact'] = (one) => cited(formatValue(one), one.origin)
   return {
     fact,
@@ -67,7 +71,7 @@ export function createRegister(): Register {
     },
     figure: (figure, { window = false } = {}) => {
       if (figure.kind === 'not-stated') {
-        gaps.push(figure.missing)
+        gaps.figures.push(figure.missing)
         return notStatedRun(figure.missing.because)
       }
       const text = window ? formatWindow(figure.value) : formatRange(figure.value)
@@ -76,10 +80,11 @@ export function createRegister(): Register {
       return figure.condition === 'no temperature stated' ? line`${run} (no temperature stated)` : [run]
     },
     notStated: (of, property) => {
-      gaps.push({ of, property, ask: 'the maker, in writing' })
+      gaps.silences.push({ of, property })
       return notStatedRun()
     },
     gaps: () => gaps,
+    cite,
     working,
     lists: () => lists,
   }

@@ -33,11 +33,11 @@ function floorOf(given: SpecInput): Floor {
  */
 export function specify(given: SpecInput): SpecDocument {
   const floor = floorOf(given)
-  const front = frontMatter(floor)
   const general = generalArticles(floor)
   const products = productArticles(floor)
   const execution = executionArticles(floor)
   const tables = schedules(floor)
+  const front = frontMatter(floor)
   return {
     header: { ...given.header, buildUp: given.buildUp },
     front,
