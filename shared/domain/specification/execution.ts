@@ -1,8 +1,8 @@
 import { dryStages } from '../build-up.ts'
-import { formatNumber, formatQuantity } from '../format.ts'
-import { valueIn } from '../units.ts'
-import type { Article, Item, Runs } from './document.ts'
-import { type Floor, type SpecCourse, areaOf } from './floor.ts'
+import { formatQuantity } from '../format.ts'
+import type { Article, Item } from './document.ts'
+import type { Floor, SpecCourse } from './floor.ts'
+import { moistureTests } from './moisture-tests.ts'
 import { chosen, item, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
 import { statedOfEach } from './stated.ts'
 
@@ -13,16 +13,6 @@ function firstLaid({ courses }: Floor): number {
 }
 
 const isDry = ({ course }: SpecCourse) => (dryStages as readonly string[]).includes(course.stage)
-
-/** Probes of ASTM F2170 and kits of ASTM F1869: three for the first 1,000 ft², one more for each further 1,000 ft² begun. From memory, so "verify". */
-function moistureTests({ given, register }: Floor): Runs {
-  const area = areaOf(given.bays)
-  if (!area) return notStatedRun()
-  const feet = valueIn(area, 'ft²')
-  const count = 3 + Math.max(0, Math.ceil((feet - 1000) / 1000 - 1e-9))
-  const sum = `${formatNumber(feet, 0)} ft²: 3 for the first 1,000 ft², then 1 for each further 1,000 ft² begun = ${count}`
-  return [register.working(`${count} tests`, { formula: 'tests by area', sum, source: 'ASTM F2170 and F1869, from memory: verify in the edition in force' })]
-}
 
 function examination(floor: Floor): Item[] {
   const { substrateRelativeHumidity, moistureEmission } = floor.given.input.conditions
@@ -58,7 +48,7 @@ function preparation(floor: Floor): Item[] {
 const mixing = (): Item[] => [
   ...plain(
     'Read label and safety sheet before a pack is opened. Wear what the schedule of hazards and the sheets call for.',
-    'Mix whole packs in the ratio of Part two, by machine, to an even color; scrape sides and bottom, pour over into a clean pail and mix again.',
+    'Mix whole packs in the ratio of the article on mixes, by machine, to an even color; scrape sides and bottom, pour over into a clean pail and mix again.',
     'Add aggregate to the mixed liquid, never to one part alone.',
     'Empty the pail onto the floor at once. Do not use a mix after its pot life.',
   ),
@@ -86,10 +76,11 @@ function installation(floor: Floor): Item[] {
   ]
 }
 
-const fieldQuality = (floor: Floor): Item[] => [
-  item(line`Before every course record slab, air and material temperature, relative humidity and dew point. Hold when one is outside the limits of Part one.`),
+const fieldQuality = (): Item[] => [
+  item(line`Test and record as the schedule of field quality control says. Hold the work when a value is outside its limit.`),
+  item(line`Before every course record slab, air and material temperature, relative humidity and dew point.`),
   item(line`Measure wet film after ${standard('ASTM D4414')}, or the yield of each pack by bay, and compare it with the system schedule.`),
-  item(line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance:`, statedOfEach(floor, floor.mixes, ['pullOffStrength'])),
+  item(line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance is by both; where no sheet states a strength, agree one in writing before work.`),
   ...plain('Mark, cut back and relay what fails. Record lots, bays, times and readings daily.'),
 ]
 
@@ -118,7 +109,7 @@ export function executionArticles(floor: Floor): Article[] {
     { id: 'preparation', title: 'Preparation', items: preparation(floor) },
     { id: 'mixing', title: 'Mixing', items: mixing() },
     { id: 'installation', title: 'Installation', items: installation(floor) },
-    { id: 'field-quality', title: 'Field quality control', items: fieldQuality(floor) },
+    { id: 'field-quality', title: 'Field quality control', items: fieldQuality() },
     { id: 'cleaning', title: 'Cleaning and waste', items: cleaning() },
     { id: 'protection', title: 'Cure and protection', items: protection(floor) },
   ]

@@ -41,7 +41,7 @@ function hazardCell(floor: Floor, { products, result }: SpecCourse): Runs {
 
 function row(floor: Floor, one: SpecCourse): Runs[] {
   const title = line`${chosen(String(one.number))}  ${quoted(one.course.title)}`
-  if (!one.mix) return [title, line`No material sheet. Dust and noise of the work: Part one, Hazards and cautions.`, notStatedRun(), notStatedRun(), notStatedRun()]
+  if (!one.mix) return [title, line`No material sheet. Dust and noise of the work: article on hazards and cautions.`, notStatedRun(), notStatedRun(), notStatedRun()]
   return [title, hazardCell(floor, one), ...(['gloves', 'eyeProtection', 'respiratoryProtection'] as const).map((property) => told(floor, one.products, property))]
 }
 

@@ -4,6 +4,7 @@ import { valueAt } from '../sheet-table.ts'
 import type { SheetSummary } from '../sheet.ts'
 import { windowAt } from '../window.ts'
 import type { Runs, SpecTable } from './document.ts'
+import { fieldQualityTable } from './field-quality.ts'
 import { type Floor, type SpecCourse, threeTemperatures } from './floor.ts'
 import { hazardTable } from './hazards.ts'
 import { chosen, joined, line, measured, notStatedRun, plainFigure, quoted } from './runs.ts'
@@ -16,6 +17,7 @@ export const scheduleTitles = {
   areas: 'Areas and quantities',
   sheets: 'Products and sheets',
   hazards: 'Hazards and protective equipment by course',
+  'field-quality': 'Field quality control',
   checks: 'Checks against the sheets loaded',
 } as const
 type ScheduleId = keyof typeof scheduleTitles
@@ -118,6 +120,6 @@ function checkSchedule({ evaluation, courses }: Floor): SpecTable {
 
 /** The schedules that follow the parts. */
 export function schedules(floor: Floor): SpecTable[] {
-  const all = [systemSchedule(floor), windows(floor), potLives(floor), areas(floor), sheetSchedule(floor), hazardTable(floor, scheduleTitles.hazards), checkSchedule(floor)]
+  const all = [systemSchedule(floor), windows(floor), potLives(floor), areas(floor), sheetSchedule(floor), hazardTable(floor, scheduleTitles.hazards), fieldQualityTable(floor, scheduleTitles['field-quality']), checkSchedule(floor)]
   return all.filter(({ rows }) => rows.length > 0)
 }
