@@ -25,6 +25,8 @@ const conditionDimensions: Record<Exclude<keyof ValueConditions, 'next'>, Dimens
   film: 'length',
 }
 
+const conditionEntries = Object.entries(conditionDimensions) as [keyof typeof conditionDimensions, Dimension][]
+
 /** What no thing of this world has, by property and in a unit: solids of nothing, a density beyond that of metals. From memory. */
 const possible: Partial<Record<Property, Range>> = {
   density: { min: 0.01, max: 23, unit: 'kg/L' },
@@ -50,8 +52,8 @@ function isPossible(property: Property, range: Range): boolean {
 
 function holdsAtSoundConditions(at: ValueConditions | undefined): boolean {
   if (!at) return true
-  return Object.entries(conditionDimensions).every(([key, dimension]) => {
-    const given = at[key as keyof typeof conditionDimensions]
+  return conditionEntries.every(([key, dimension]) => {
+    const given = at[key]
     if (!given) return true
     if (dimensionOf(given.unit) !== dimension) return false
     return dimension === 'temperature' ? valueIn(given, '°C') > -273.15 : given.value >= 0
@@ -68,27 +70,12 @@ function isSound(fact: Fact): boolean {
   return (dimensions ?? []).includes(dimensionOf(range.unit)) && isPossible(fact.property, range)
 }
 
-const sound = new WeakMap<object, unknown>()
-
-/** Kept by identity: a build-up is evaluated on every keystroke and its facts change with none. */
-function once<T extends object>(given: T, make: (given: T) => T): T {
-  const kept = sound.get(given) as T | undefined
-  if (kept) return kept
-  const made = make(given)
-  sound.set(given, made)
-  return made
+function withSoundFacts<T extends { facts: Fact[] }>(of: T): T {
+  return of.facts.every(isSound) ? of : { ...of, facts: of.facts.filter(isSound) }
 }
 
-const withSoundFacts = <T extends { facts: Fact[] }>(of: T): T =>
-  of.facts.every(isSound) ? of : { ...of, facts: of.facts.filter(isSound) }
-
-const soundProduct = (product: ProductFacts): ProductFacts => once(product, withSoundFacts)
-
 function soundMix(mix: MixFacts): MixFacts {
-  return once(mix, (given) => ({
-    ...withSoundFacts(given),
-    parts: given.parts.map(({ part, product }) => ({ part, product: soundProduct(product) })),
-  }))
+  return { ...withSoundFacts(mix), parts: mix.parts.map(({ part, product }) => ({ part, product: withSoundFacts(product) })) }
 }
 
 /** Without a prototype, so that an id like "constructor" finds nothing. */
@@ -103,5 +90,5 @@ function mapped<T>(record: Readonly<Record<string, T>>, make: (one: T) => T): Re
  * Such facts are refused when they are written down; this holds for whatever came in some other way.
  */
 export function withoutUnsoundFacts(input: EvaluationInput): EvaluationInput {
-  return { ...input, mixes: mapped(input.mixes, soundMix), products: mapped(input.products, soundProduct) }
+  return { ...input, mixes: mapped(input.mixes, soundMix), products: mapped(input.products, withSoundFacts<ProductFacts>) }
 }

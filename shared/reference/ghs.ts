@@ -56,11 +56,15 @@ const pictogramCodes: Record<PictogramCode, string> = {
   GHS08: 'H304 H334 H340 H341 H350 H350i H351 H360 H360F H360D H360FD H360Fd H360Df H361 H361f H361d H361fd H370 H371 H372 H373',
   GHS09: 'H400 H410 H411',
 }
-const pictogramEntries = codesOf(pictogramCodes) as readonly (readonly [string, PictogramCode])[]
+const pictogramsByCode = new Map<string, PictogramCode[]>()
+for (const [code, pictogram] of codesOf(pictogramCodes) as (readonly [string, PictogramCode])[]) {
+  pictogramsByCode.set(code, [...(pictogramsByCode.get(code) ?? []), pictogram])
+}
+const noPictogram: readonly PictogramCode[] = []
 
 /** Pictograms that a single hazard statement's class calls for, before precedence; most call for one, some for none. Source: UN GHS Annex 1, from memory. */
-export function pictogramsOfStatement(code: string): PictogramCode[] {
-  return pictogramEntries.flatMap(([one, pictogram]) => (one === code ? [pictogram] : []))
+export function pictogramsOfStatement(code: string): readonly PictogramCode[] {
+  return pictogramsByCode.get(code) ?? noPictogram
 }
 
 const signalWords = new Map<string, string>(

@@ -13,7 +13,10 @@ export interface VocPlace {
   limits: readonly VocLimit[]
 }
 
-/** Rules loaded, by place. All from memory unless the source says otherwise: confirm against the rule's own text before relying on one. */
+/**
+ * Rules loaded, by place; for any other place no rule is loaded. Days and limits are from memory unless the source says otherwise: confirm against the
+ * rule's own text before relying on one. A model rule binds only where a state or district has taken it up.
+ */
 export const vocPlaces: readonly VocPlace[] = [
   {
     id: 'us-national',
@@ -26,10 +29,25 @@ export const vocPlaces: readonly VocPlace[] = [
     ],
   },
   {
+    id: 'us-otc-1',
+    name: 'Ozone Transport Commission model rule, 2002',
+    source: 'OTC model rule of 2002 (from memory, verify that the state has taken it up and not phase II)',
+    limits: [{ category: 'floor coatings', limit: 250, from: '2005-01-01' }],
+  },
+  {
     id: 'us-otc-2',
     name: 'Ozone Transport Commission model rule, phase II',
     source: 'OTC model rule, phase II (from memory, verify that the state has taken it up)',
     limits: [{ category: 'floor coatings', limit: 100, from: '2014-01-01' }],
+  },
+  {
+    id: 'us-ca-2007',
+    name: 'California, suggested control measure 2007',
+    source: 'CARB suggested control measure 2007 (from memory, verify that the district has taken it up and not the one of 2019)',
+    limits: [
+      { category: 'floor coatings', limit: 100, from: '2010-01-01' },
+      { category: 'sealers', limit: 100, from: '2010-01-01' },
+    ],
   },
   {
     id: 'us-ca-2019',
@@ -49,6 +67,12 @@ export const vocPlaces: readonly VocPlace[] = [
       { category: 'primers', limit: 100, from: '2014-01-01' },
       { category: 'sealers', limit: 100, from: '2014-01-01' },
     ],
+  },
+  {
+    id: 'ca',
+    name: 'Canada',
+    source: 'SOR/2009-264, VOC limits for architectural coatings (from memory, verify)',
+    limits: [{ category: 'floor coatings', limit: 250, from: '2010-09-09' }],
   },
   {
     id: 'eu',

@@ -1,80 +1,134 @@
 import { condensationPoint, dewPointMargin, marginBounds } from '../dew-point.ts'
-import { factOf, factsOf, rangeOf } from '../fact.ts'
-import { type Figure, figureOfFact, notStated } from '../figure.ts'
-import { formatNumber, formatRange, unitText } from '../format.ts'
-import type { MixFacts } from '../mix.ts'
-import type { Property } from '../property.ts'
+import { type Fact, factsOf, rangeOf } from '../fact.ts'
+import { figureOfFact } from '../figure.ts'
+import { formatNumber, formatQuantity, formatRange } from '../format.ts'
+import type { Range } from '../property.ts'
 import { type Quantity, convert, valueIn } from '../units.ts'
-import { type Check, type Floor, type Laid, type Verdict, resinCourses, unknown } from './check.ts'
+import { computed } from '../working.ts'
+import { type Check, type Floor, type LaidMix, type Verdict, mixCourses, unknown, unstatedOfMix } from './check.ts'
 
-const missingOf = (property: Property, mix: MixFacts) => notStated(property, { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing' })
-const withMix = (floor: Floor) => resinCourses(floor).flatMap((laid) => (laid.mix ? [{ ...laid, mix: laid.mix }] : []))
-type Mixed = Laid & { mix: MixFacts }
+interface Asked {
+  what: 'slab' | 'air'
+  at: Quantity
+  range: Range
+  fact: Fact
+}
 
-function temperatureVerdict({ course, mix }: Mixed, { input }: Floor): Verdict {
-  const facts = factsOf(mix.facts, 'applicationTemperature')
-  if (facts.length === 0) return unknown(course.id, `No sheet of ${mix.name} states at which temperature it may be laid.`, [missingOf('applicationTemperature', mix)])
-  const asked = facts.flatMap((fact) => {
+const isOutside = ({ at, range }: Asked) => {
+  const value = valueIn(at, range.unit)
+  return (range.min !== undefined && value < range.min - 1e-9) || (range.max !== undefined && value > range.max + 1e-9)
+}
+
+/** Every range that the sheet gives with the temperature it is asked of; one that does not say is asked of slab and air. */
+function askedOf(facts: readonly Fact[], { input }: Floor): Asked[] {
+  const { slabTemperature, airTemperature } = input.conditions
+  const measured = [
+    { what: 'slab', at: slabTemperature },
+    { what: 'air', at: airTemperature },
+  ] as const
+  return facts.flatMap((fact) => {
     const range = rangeOf(fact)
-    const measured: [string, Quantity][] = [['slab', input.conditions.slabTemperature], ['air', input.conditions.airTemperature]]
-    return range ? measured.filter(([what]) => (fact.of ?? what) === what).map(([what, at]) => ({ what, at, range, fact })) : []
+    return range ? measured.filter(({ what }) => (fact.of ?? what) === what).map((one) => ({ ...one, range, fact })) : []
   })
-  const outside = asked.filter(({ at, range }) => {
-    const value = valueIn(at, range.unit)
-    return (range.min !== undefined && value < range.min) || (range.max !== undefined && value > range.max)
-  })
-  const figures = facts.map((fact) => ({ label: `the sheet’s range${fact.of ? `, ${fact.of}` : ''}`, figure: figureOfFact(fact) }))
-  const said = (list: typeof asked) => list.map(({ what, at, range }) => `${what} ${formatNumber(at.value, 1)} ${unitText(at.unit)}, the sheet allows ${formatRange(range)}`).join('; ')
-  if (asked.length === 0) return unknown(course.id, 'The sheet speaks of the material’s temperature only, which is not among the conditions.', [missingOf('applicationTemperature', mix)])
-  return outside.length > 0
-    ? { courseId: course.id, status: 'stop', says: `${said(outside)}.`, todo: 'Wait, heat or cool until slab and air are inside the range. Heat indirectly: a flame in the room brings water and soot.', figures }
-    : { courseId: course.id, status: 'met', says: `${said(asked)}.`, figures }
+}
+
+function temperatureVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
+  const facts = factsOf(mix.facts, 'applicationTemperature')
+  if (facts.length === 0) {
+    return unknown(course.id, `No sheet of ${mix.name} states at which temperature it may be laid.`, [
+      unstatedOfMix('applicationTemperature', mix),
+    ])
+  }
+  const asked = askedOf(facts, floor)
+  if (asked.length === 0) {
+    const because = 'the sheet speaks of the material’s temperature only, which is not among the conditions'
+    return unknown(course.id, 'The sheet states no temperature of slab or air.', [unstatedOfMix('applicationTemperature', mix, because)])
+  }
+  const said = (list: readonly Asked[]) =>
+    list.map(({ what, at, range }) => `${what} ${formatQuantity(at)}, the sheet allows ${formatRange(range)}`).join('; ')
+  const figures = facts.map((fact, index) => ({
+    label: `the sheet’s range${facts.length > 1 ? ` ${index + 1}` : ''}${fact.of ? `, ${fact.of}` : ''}`,
+    figure: figureOfFact(fact),
+  }))
+  const outside = asked.filter(isOutside)
+  if (outside.length > 0) {
+    const todo = 'Wait, heat or cool until slab and air are inside the range. Heat indirectly: a flame in the room brings water and soot.'
+    return { courseId: course.id, status: 'stop', says: `${said(outside)}.`, todo, figures }
+  }
+  const ends = (['slab', 'air'] as const).flatMap((what) => openEnd(asked.filter((one) => one.what === what)) ?? [])
+  if (ends.length > 0) {
+    const because = `the sheet states no ${[...new Set(ends)].join(' and no ')} temperature`
+    return { ...unknown(course.id, `${said(asked)}: ${because}.`, [unstatedOfMix('applicationTemperature', mix, because)]), figures }
+  }
+  return { courseId: course.id, status: 'met', says: `${said(asked)}.`, figures }
+}
+
+/** The end that none of the ranges asked of slab, or of air, gives. */
+function openEnd(asked: readonly Asked[]): 'lowest' | 'highest' | undefined {
+  if (asked.length === 0) return undefined
+  if (asked.every(({ range }) => range.min === undefined)) return 'lowest'
+  return asked.every(({ range }) => range.max === undefined) ? 'highest' : undefined
 }
 
 export const temperatureInRange: Check = {
   id: 'temperature-in-range',
   title: 'Temperature within the sheet’s range',
-  needs: ['applicationTemperature', 'slab and air temperature'],
+  needs: ['application temperature of the mix', 'slab and air temperature'],
   source: 'the mix’s data sheet',
-  run: (floor) => withMix(floor).map((laid) => temperatureVerdict(laid, floor)),
+  severity: 'Stop: too cold a film does not cure, too hot it is gone before it is laid.',
+  run: (floor) => mixCourses(floor).map((laid) => temperatureVerdict(laid, floor)),
 }
 
-function marginFigure(margin: Quantity, { input }: Floor): Figure {
+type MarginUnit = 'Δ°F' | 'Δ°C'
+
+function marginFigure(margin: Quantity<MarginUnit>, { input }: Floor) {
   const { slabTemperature, airTemperature, relativeHumidity } = input.conditions
   const { at, name } = condensationPoint({ temperature: airTemperature, relativeHumidity })
   const dew = convert(at, slabTemperature.unit === '°F' ? '°F' : '°C')
-  const degrees = (of: Quantity) => `${formatNumber(of.value, 1)} ${unitText(of.unit)}`
-  return {
-    kind: 'computed',
-    value: { min: margin.value, max: margin.value, unit: margin.unit },
-    working: {
-      formula: name === 'dew point' ? 'slab − dew point (over water)' : 'slab − frost point (over ice)',
-      sum: `${degrees(slabTemperature)} − ${degrees(dew)} (air ${degrees(airTemperature)}, ${formatNumber(relativeHumidity)} % RH) = ${degrees(margin)}`,
-      source: 'Magnus formula, WMO No. 8 constants',
-    },
-    from: [],
-  }
+  return computed(margin, {
+    formula: name === 'dew point' ? 'slab − dew point (over water)' : 'slab − frost point (over ice)',
+    sum: `${formatQuantity(slabTemperature)} − ${formatQuantity(dew)} (air ${formatQuantity(airTemperature)}, ${formatNumber(relativeHumidity)} % RH) = ${formatQuantity(margin)}`,
+    source: 'Magnus formula, WMO No. 8 constants',
+  })
 }
 
-function dewVerdict({ course, mix }: Mixed, floor: Floor): Verdict {
-  const fact = factOf(mix.facts, 'dewPointMargin')
+/** One margin that the sheet asks for: 3 °C and 5 °F are two different limits, each judged in its own unit, on unrounded values. */
+function marginAgainst(fact: Fact, floor: Floor) {
   const limit = rangeOf(fact)
-  if (!fact || limit?.min === undefined) return unknown(course.id, `No sheet of ${mix.name} states how far above the dew point the slab must be.`, [missingOf('dewPointMargin', mix)])
+  if (limit?.min === undefined) return []
   const { slabTemperature: slab, airTemperature: temperature, relativeHumidity } = floor.input.conditions
   const air = { temperature, relativeHumidity }
-  const unit = limit.unit === 'Δ°F' ? 'Δ°F' : 'Δ°C'
+  const unit: MarginUnit = limit.unit === 'Δ°F' ? 'Δ°F' : 'Δ°C'
   const margin = dewPointMargin(slab, air, unit)
-  const { least } = marginBounds(slab, air)
-  const status = margin.value < limit.min ? 'stop' : valueIn(least, unit) < limit.min ? 'caution' : 'met'
-  const says = `The slab is ${formatNumber(margin.value, 1)} ${unitText(unit)} above the dew point; the sheet asks for ${formatRange(limit)}.`
+  const least = convert(marginBounds(slab, air).least, unit)
+  const status = margin.value < limit.min ? 'stop' : least.value < limit.min ? 'caution' : 'met'
+  return [{ fact, limit, margin, least, status } as const]
+}
+
+function dewVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
+  const margins = factsOf(mix.facts, 'dewPointMargin').flatMap((fact) => marginAgainst(fact, floor))
+  const severest = (['stop', 'caution', 'met'] as const).flatMap((status) => margins.find((one) => one.status === status) ?? [])[0]
+  if (!severest) {
+    const says = `No sheet of ${mix.name} states how far above the dew point the slab must be.`
+    return unknown(course.id, says, [unstatedOfMix('dewPointMargin', mix)])
+  }
+  const { status, margin, limit, least } = severest
+  const { airTemperature: temperature, relativeHumidity, slabTemperature } = floor.input.conditions
+  const { name } = condensationPoint({ temperature, relativeHumidity })
+  const place = margin.value < 0 ? `${formatQuantity({ ...margin, value: -margin.value })} below` : `${formatQuantity(margin)} above`
+  const says = `The slab at ${formatQuantity(slabTemperature)} is ${place} the ${name}; the sheet asks for ${formatRange(limit)}.`
+  const unsure = `With common instruments (±0.5 °C, ±3 % RH) it may be ${formatQuantity(least)}.`
   return {
     courseId: course.id,
     status,
-    says: status === 'caution' ? `${says} With common instruments (±0.5 °C, ±3 % RH) it may be ${formatNumber(valueIn(least, unit), 1)} ${unitText(unit)}.` : says,
-    todo: status === 'stop' ? 'Hold the work. Warm the slab or dry the air, then measure again.' : 'Measure again with better instruments, and again every hour while laying and curing.',
+    says: status === 'caution' ? `${says} ${unsure}` : says,
+    todo:
+      status === 'stop'
+        ? 'Hold the work. Warm the slab or dry the air, then measure again.'
+        : 'Measure again with better instruments, and again every hour while laying and curing.',
     figures: [
-      { label: 'slab above dew point', figure: marginFigure(margin, floor) },
-      { label: 'the sheet’s margin', figure: figureOfFact(fact) },
+      { label: `slab above ${name}`, figure: marginFigure(margin, floor) },
+      ...margins.map((one, index) => ({ label: `the sheet’s margin${index > 0 ? ` ${index + 1}` : ''}`, figure: figureOfFact(one.fact) })),
     ],
   }
 }
@@ -82,7 +136,8 @@ function dewVerdict({ course, mix }: Mixed, floor: Floor): Verdict {
 export const dewPointMarginKept: Check = {
   id: 'dew-point-margin',
   title: 'Slab above the dew point',
-  needs: ['dewPointMargin', 'slab and air temperature, humidity of the air'],
-  source: 'the mix’s data sheet; Magnus formula, WMO No. 8',
-  run: (floor) => withMix(floor).map((laid) => dewVerdict(laid, floor)),
+  needs: ['margin above the dew point of the mix', 'slab and air temperature, humidity of the air'],
+  source: 'the mix’s data sheet; Magnus formula, WMO No. 8 (from memory)',
+  severity: 'Stop under the sheet’s margin: water settles in the film. Caution where the instruments cannot tell.',
+  run: (floor) => mixCourses(floor).map((laid) => dewVerdict(laid, floor)),
 }

@@ -1,31 +1,33 @@
-import { icriEdition, profileForThickness, profileOfMethod } from '../../reference/icri.ts'
+import { type ProfileBand, type ProfileRange, icriEdition, profileForThickness, profileOfMethod } from '../../reference/icri.ts'
+import type { Course } from '../build-up.ts'
 import { factOf, rangeOf } from '../fact.ts'
-import { formatNumber, formatRange } from '../format.ts'
-import { figureOfFact, notStated } from '../figure.ts'
-import { leastOf } from '../working.ts'
-import { valueIn } from '../units.ts'
-import { type Check, type Floor, type Laid, type Verdict, resinCourses, unknown } from './check.ts'
+import { type KnownFigure, figureOfFact } from '../figure.ts'
+import { formatRange } from '../format.ts'
+import type { Range } from '../property.ts'
+import { sumOf } from '../working.ts'
+import { type Check, type Floor, type Laid, type Verdict, capital, fieldCourses, unchosen, unknown } from './check.ts'
 
-const csp = ({ from, to }: { from: number; to: number }) => (from === to ? `CSP ${from}` : `CSP ${from}–${to}`)
+const csp = ({ from, to }: ProfileRange) => (from === to ? `CSP ${from}` : `CSP ${from}–${to}`)
 
-/** The preparation that a floor stands on: the last one before the first mix is laid. */
-function preparationOf({ laid }: Floor): Laid | undefined {
-  const first = laid.findIndex(({ course }) => course.stage !== 'prep' && course.stage !== 'grind')
-  return laid.slice(0, first === -1 ? laid.length : first).findLast(({ course }) => course.preparation !== null)
+/** Preparing that comes before the field of the floor is laid, bottom up. */
+function preparationsOf({ laid }: Floor): Course[] {
+  const first = laid.findIndex(({ course }) => !['prep', 'grind', 'fill', 'cove'].includes(course.stage))
+  return laid.slice(0, first === -1 ? laid.length : first).flatMap(({ course }) => (course.preparation ? [course] : []))
 }
 
-/** Total thickness in mil of what is laid over the field of the floor, with the courses whose film is not known. */
-function thicknessOf(floor: Floor): { mil: number; open: Laid[] } {
-  const counted = resinCourses(floor).filter(({ course }) => course.stage !== 'fill' && course.stage !== 'cove')
-  const open = counted.filter(({ result }) => result.dryFilm.kind === 'not-stated' && result.wetFilm.kind === 'not-stated')
-  const mil = counted.reduce((sum, { result }) => {
-    const film = result.dryFilm.kind === 'not-stated' ? result.wetFilm : result.dryFilm
-    return film.kind === 'not-stated' ? sum : sum + valueIn(leastOf(film.value), 'mil')
-  }, 0)
-  return { mil, open }
+/** The profile that the floor stands on: what the last preparation that names one asks for. */
+function preparedProfile(floor: Floor): { course: Course; profile: number } | undefined {
+  return preparationsOf(floor)
+    .flatMap((course) => (course.preparation?.profile === undefined ? [] : [{ course, profile: course.preparation.profile }]))
+    .at(-1)
 }
 
-/** What the first mix's own sheet asks of the profile; its word goes before the standard's table. */
+/** Dry film of a course, or its wet film where the solids are not stated: what the standard's thickness comes nearest to. */
+function filmOf({ result }: Laid): KnownFigure | undefined {
+  return [result.dryFilm, result.wetFilm].find((film) => film.kind !== 'not-stated')
+}
+
+/** What the first mix's own sheet asks of the profile. A stop: its maker knows what it holds to. */
 function againstSheet(profile: number, { course, mix }: Laid): Verdict | undefined {
   const fact = mix && factOf(mix.facts, 'surfaceProfile')
   const range = rangeOf(fact)
@@ -37,65 +39,108 @@ function againstSheet(profile: number, { course, mix }: Laid): Verdict | undefin
     says: `CSP ${profile} is prepared; the sheet of ${mix.name} asks for ${formatRange(range)}.`,
     todo: `Prepare to ${formatRange(range)}, or choose another first coat.`,
     figures: [{ label: 'profile the sheet asks for', figure: figureOfFact(fact) }],
+    source: 'the data sheet of the first mix',
   }
 }
 
-function againstStandard(profile: number, floor: Floor): Verdict {
-  const { mil, open } = thicknessOf(floor)
-  const courseId = preparationOf(floor)?.course.id ?? null
-  if (open.length > 0) return unknown(courseId, `The thickness of ${open.map(({ course }) => course.title).join(', ')} is not known.`, open.map(({ result }) => result.wetFilm))
-  const band = profileForThickness.find(({ above, upTo }) => mil > above && mil <= upTo)
-  if (!band) return unknown(courseId, 'Nothing with a thickness is laid.', [notStated('filmThickness', { of: 'the floor', subject: null, ask: 'whoever builds this up' })])
-  const { profile: asked, what } = band
-  const status = profile < asked.from ? 'stop' : profile > asked.to ? 'caution' : 'met'
+/** Bands that a thickness falls into; between two bands the thicker one's, which asks for more. */
+function bandsAt({ min = 0, max = min }: Range, system: 'mil' | 'mm'): ProfileBand[] {
+  const hit = profileForThickness.filter((band) => max >= band[system].from - 1e-9 && min <= band[system].to + 1e-9)
+  return hit.length > 0 ? hit : profileForThickness.filter((band) => band[system].from > max).slice(0, 1)
+}
+
+function againstStandard({ course, profile }: { course: Course; profile: number }, floor: Floor, sheetMet: boolean): Verdict {
+  const field = fieldCourses(floor)
+  const open = field.filter((laid) => !filmOf(laid))
+  if (open.length > 0) {
+    const titles = open.map((laid) => laid.course.title).join(', ')
+    return unknown(
+      course.id,
+      `The thickness of ${titles} is not known.`,
+      open.map(({ result }) => result.wetFilm),
+    )
+  }
+  const films = field.flatMap((laid) => filmOf(laid) ?? [])
+  const system = films.some(({ value }) => value.unit === 'mil' || value.unit === 'in') ? 'mil' : 'mm'
+  const total = sumOf(
+    films.map(({ value }) => value),
+    system,
+  )
+  const bands = bandsAt(total, system)
+  const asked = { from: Math.min(...bands.map((band) => band.profile.from)), to: Math.max(...bands.map((band) => band.profile.to)) }
+  const place = profile < asked.from ? 'smoother' : profile > asked.to ? 'rougher' : 'within'
+  const says = `CSP ${profile} is prepared; ${formatRange(total)} in all (${bands.map(({ what }) => what).join(' or ')}) asks for ${csp(asked)}.`
+  const figures = field.flatMap((laid, index) => {
+    const figure = filmOf(laid)
+    return figure ? [{ label: `film ${index + 1}, ${laid.course.title}`, figure }] : []
+  })
+  if (place === 'within') return { courseId: course.id, status: 'met', says, figures }
+  if (place === 'rougher') {
+    const todo = `Prepare to ${csp(asked)}, or allow for the resin that the deeper texture takes and for marks that show.`
+    return { courseId: course.id, status: 'caution', says, todo, figures }
+  }
+  const more = sheetMet ? ' The sheet of the first mix asks for less than the standard does.' : ''
   return {
-    courseId,
-    status,
-    says: `CSP ${profile} is prepared; ${formatNumber(mil)} mil in all (${what}) asks for ${csp(asked)}.`,
-    todo: status === 'stop' ? `Prepare to ${csp(asked)}: a smoother surface does not hold a floor this thick.` : `Prepare to ${csp(asked)}, or allow for the resin that the deeper texture takes and for marks that show.`,
+    courseId: course.id,
+    status: sheetMet ? 'caution' : 'stop',
+    says: `${says}${more}`,
+    todo: sheetMet
+      ? 'Ask the maker, in writing, whether its profile holds under the whole floor.'
+      : `Prepare to ${csp(asked)}: a smoother surface does not hold a floor this thick.`,
+    figures,
   }
 }
 
 export const profileForFilm: Check = {
   id: 'profile-for-film',
   title: 'Profile for what follows',
-  needs: ['preparation.profile', 'filmThickness'],
+  needs: ['profile of the preparation', 'film of every course over the field'],
   source: icriEdition,
+  severity:
+    'Stop when too smooth: the floor peels. Caution when too rough: it costs resin and shows. Caution when the first mix’s sheet is content with less.',
   run(floor) {
-    const prep = preparationOf(floor)
-    const profile = prep?.course.preparation?.profile
-    const [first] = resinCourses(floor)
+    const [first] = fieldCourses(floor)
     if (!first) return []
-    if (profile === undefined) {
-      const missing = notStated('surfaceProfile', { of: prep?.course.title ?? 'the slab', subject: null, ask: 'whoever builds this up', because: 'no preparation with a profile stands before the first mix' })
-      return [unknown(prep?.course.id ?? null, 'No profile is asked for before the first mix.', [missing])]
+    const prepared = preparedProfile(floor)
+    if (!prepared) {
+      const prep = preparationsOf(floor).at(-1)
+      const because = 'no preparation with a profile stands before the first course over the field'
+      return [
+        unknown(prep?.id ?? null, 'No profile is asked for before the first course.', [
+          unchosen('surfaceProfile', prep?.title ?? 'the slab', because),
+        ]),
+      ]
     }
-    const bySheet = againstSheet(profile, first)
-    return bySheet ? [bySheet, againstStandard(profile, floor)] : [againstStandard(profile, floor)]
+    const bySheet = againstSheet(prepared.profile, first)
+    return [...(bySheet ? [bySheet] : []), againstStandard(prepared, floor, bySheet?.status === 'met')]
   },
+}
+
+/** Cleaning before the cut, which leaves no profile of its own: it need not name one when a later preparation does. */
+const cleaning: readonly string[] = ['detergent scrubbing', 'low-pressure water cleaning']
+
+function reachVerdict(course: Course, floor: Floor): Verdict[] {
+  const { method, profile } = course.preparation ?? {}
+  const last = preparationsOf(floor).at(-1)
+  if (profile === undefined && method && cleaning.includes(method) && last && last.id !== course.id) return []
+  const reach = method && profileOfMethod[method]
+  if (!reach || profile === undefined) {
+    const because = method ? 'the profile asked for is not given' : 'the method of preparation is not given'
+    return [unknown(course.id, 'Method and profile are not both given.', [unchosen('surfaceProfile', course.title, because)])]
+  }
+  const status = profile > reach.to ? 'stop' : profile < reach.from ? 'caution' : 'met'
+  const todo =
+    status === 'stop'
+      ? 'Choose a method that cuts deeper, or work it over a second time with one.'
+      : 'Choose a gentler method, or expect a rougher surface.'
+  return [{ courseId: course.id, status, says: `${capital(method)} leaves ${csp(reach)}; CSP ${profile} is asked for.`, todo }]
 }
 
 export const prepReachesProfile: Check = {
   id: 'prep-reaches-profile',
   title: 'Preparation reaches the profile',
-  needs: ['preparation.method', 'preparation.profile'],
+  needs: ['method of preparation', 'profile of the preparation'],
   source: icriEdition,
-  run: ({ laid }) =>
-    laid.flatMap(({ course }): Verdict[] => {
-      if (course.stage !== 'prep' && !course.preparation) return []
-      const { method, profile } = course.preparation ?? {}
-      const reach = method && profileOfMethod[method]
-      if (!method || !reach || profile === undefined) {
-        return [unknown(course.id, 'Method and profile are not both given.', [notStated('surfaceProfile', { of: course.title, subject: null, ask: 'whoever builds this up' })])]
-      }
-      const status = profile > reach.to ? 'stop' : profile < reach.from ? 'caution' : 'met'
-      return [
-        {
-          courseId: course.id,
-          status,
-          says: `${method[0]?.toUpperCase()}${method.slice(1)} leaves ${csp(reach)}; CSP ${profile} is asked for.`,
-          todo: status === 'stop' ? 'Choose a method that cuts deeper.' : 'Choose a gentler method, or expect a rougher surface.',
-        },
-      ]
-    }),
+  severity: 'Stop when the method cannot cut so deep: the profile asked for will not be there. Caution when it leaves more.',
+  run: (floor) => floor.laid.flatMap(({ course }) => (course.stage === 'prep' || course.preparation ? reachVerdict(course, floor) : [])),
 }
