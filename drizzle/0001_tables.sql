@@ -302,10 +302,10 @@ CREATE INDEX "sheets_title" ON "sheets" USING btree ("title","id");--> statement
 CREATE INDEX "mix_parts_product" ON "mix_parts" USING btree ("product_id");--> statement-breakpoint
 CREATE UNIQUE INDEX "mixes_maker_name" ON "mixes" USING btree (lower("maker"),lower("name"));--> statement-breakpoint
 CREATE INDEX "mixes_search" ON "mixes" USING gin ("search_text" gin_trgm_ops);--> statement-breakpoint
-CREATE INDEX "mixes_name" ON "mixes" USING btree ("name","id");--> statement-breakpoint
+CREATE INDEX "mixes_name" ON "mixes" USING btree (lower("name"),"id");--> statement-breakpoint
 CREATE UNIQUE INDEX "products_maker_name" ON "products" USING btree (lower("maker"),lower("name"));--> statement-breakpoint
 CREATE INDEX "products_search" ON "products" USING gin ("search_text" gin_trgm_ops);--> statement-breakpoint
-CREATE INDEX "products_name" ON "products" USING btree ("name","id");--> statement-breakpoint
+CREATE INDEX "products_name" ON "products" USING btree (lower("name"),"id");--> statement-breakpoint
 CREATE INDEX "property_values_product" ON "property_values" USING btree ("product_id");--> statement-breakpoint
 CREATE INDEX "property_values_mix" ON "property_values" USING btree ("mix_id");--> statement-breakpoint
 CREATE INDEX "property_values_revision" ON "property_values" USING btree ("revision_id");--> statement-breakpoint

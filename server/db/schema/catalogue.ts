@@ -27,7 +27,7 @@ export const products = pgTable(
   (table) => [
     uniqueIndex('products_maker_name').on(sql`lower(${table.maker})`, sql`lower(${table.name})`),
     index('products_search').using('gin', sql`${table.searchText} gin_trgm_ops`),
-    index('products_name').on(table.name, table.id),
+    index('products_name').on(sql`lower(${table.name})`, table.id),
   ],
 )
 
@@ -49,7 +49,7 @@ export const mixes = pgTable(
   (table) => [
     uniqueIndex('mixes_maker_name').on(sql`lower(${table.maker})`, sql`lower(${table.name})`),
     index('mixes_search').using('gin', sql`${table.searchText} gin_trgm_ops`),
-    index('mixes_name').on(table.name, table.id),
+    index('mixes_name').on(sql`lower(${table.name})`, table.id),
   ],
 )
 
