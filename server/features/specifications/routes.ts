@@ -8,7 +8,7 @@ import type { AppContext } from '../../http/context.ts'
 import { serve } from '../../http/serve.ts'
 import { issueSpecification } from './issue.ts'
 import { addSpecification, changeSpecification, listSpecifications, readIssueRow, readSummary, supersededAmong } from './queries.ts'
-import { render } from './render.ts'
+import { prepareRender, render } from './render.ts'
 import { jobToSpecify, revisionsOf, writeDocument } from './write-document.ts'
 import type { SpecInput } from '../../../shared/domain/specification/floor.ts'
 
@@ -53,7 +53,10 @@ export function specificationRoutes({ db, files, clock }: AppContext): Router {
     return live(await db.transaction((tx) => addSpecification(tx, { ...params, ...body }, user.id)))
   })
   serve(router, wire.listSpecifications, async ({ params }) => ({ items: await listSpecifications(db, params.jobId) }))
-  serve(router, wire.readSpecification, ({ params }) => live(params.specificationId))
+  serve(router, wire.readSpecification, ({ params }) => {
+    prepareRender()
+    return live(params.specificationId)
+  })
   serve(router, wire.changeSpecification, async ({ params, body, user }) => {
     await db.transaction((tx) => changeSpecification(tx, params.specificationId, { ...body, by: user }))
     return live(params.specificationId)
