@@ -1,4 +1,4 @@
-import { BorderStyle, HeadingLevel, ImageRun, Paragraph, Table, TableCell, TableLayoutType, TableRow, TextRun, WidthType } from 'docx'
+import { BorderStyle, HeadingLevel, type IRunOptions, ImageRun, Paragraph, Table, TableCell, TableLayoutType, TableRow, TextRun, WidthType } from 'docx'
 import { type Run, type SpecDocument, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
 import { numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
 import { frontList, partList, pencil } from './docx-styles.ts'
@@ -9,9 +9,12 @@ import { type Register, registersOf } from '../../../shared/domain/specification
 const pageWidth = 9360
 type Block = Paragraph | Table
 
+/** Words with a look. */
+export const runOf = (options: IRunOptions) => new TextRun(options)
+
 function inline(runs: readonly Run[]): TextRun[] {
   return runs.flatMap((run) => {
-    const words = new TextRun({ text: run.text, italics: run.kind === 'figure' && run.known === 'not-stated' })
+    const words = runOf({ text: run.text, italics: run.kind === 'figure' && run.known === 'not-stated' })
     const tag = tagText(run)
     return tag ? [words, new TextRun({ text: tag, size: 15, color: pencil })] : [words]
   })
@@ -63,7 +66,7 @@ export function grid({ columns, rows, head = true }: Grid): Table {
     width: { size: pageWidth, type: WidthType.DXA }, columnWidths: widths, layout: TableLayoutType.FIXED,
     borders: { top: hair, bottom: hair, left: none, right: none, insideHorizontal: hair, insideVertical: none },
     rows: [
-      ...(head ? [new TableRow({ tableHeader: true, cantSplit: true, children: columns.map(({ label }, index) => cell([new TextRun({ text: label, bold: true })], index)) })] : []),
+      ...(head ? [new TableRow({ tableHeader: true, cantSplit: true, children: columns.map(({ label }, index) => cell([runOf({ text: label, bold: true })], index)) })] : []),
       ...rows.map((row) => new TableRow({ cantSplit: true, children: row.map(cell) })),
     ],
   })

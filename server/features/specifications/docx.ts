@@ -1,6 +1,6 @@
 import { AlignmentType, Document, Footer, Header, Packer, PageNumber, Paragraph, Tab, TabStopType, TextRun } from 'docx'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
-import { drawingBlocks, frontBlocks, grid, headingOne, partBlocks, registerBlocks, scheduleBlocks } from './docx-content.ts'
+import { drawingBlocks, frontBlocks, grid, headingOne, partBlocks, registerBlocks, runOf, scheduleBlocks } from './docx-content.ts'
 import { numbering, pencil, styles } from './docx-styles.ts'
 import { withoutZipDates } from './same-bytes.ts'
 import { paintSection } from './section-drawing.ts'
@@ -11,7 +11,7 @@ const textEdge = 9360
 function pageEdges({ header }: SpecDocument) {
   const edge = (children: (TextRun | string)[]) => new Paragraph({ style: 'PageEdge', tabStops: [{ type: TabStopType.RIGHT, position: textEdge }], children: children.map((one) => (typeof one === 'string' ? new TextRun(one) : one)) })
   return {
-    headers: { default: new Header({ children: [edge([header.project, new TextRun({ children: [new Tab(), issueWords(header)], bold: !header.issue })])] }) },
+    headers: { default: new Header({ children: [edge([header.project, runOf({ children: [new Tab(), issueWords(header)], bold: !header.issue })])] }) },
     footers: {
       default: new Footer({
         children: [
@@ -44,7 +44,7 @@ async function bodyOf(document: SpecDocument) {
     ...drawing,
     ...scheduleBlocks(document),
     ...registerBlocks(document),
-    new Paragraph({ spacing: { before: 240 }, children: [new TextRun({ text: document.closing.join(' '), bold: true })] }),
+    new Paragraph({ spacing: { before: 240 }, children: [runOf({ text: document.closing.join(' '), bold: true })] }),
     new Paragraph({ spacing: { before: 240 }, alignment: AlignmentType.CENTER, text: `END OF SECTION ${document.header.sectionNumber}` }),
   ]
 }

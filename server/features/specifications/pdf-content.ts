@@ -7,6 +7,7 @@ import { drawSection } from './section-drawing.ts'
 export const fontName = 'SourceSans3'
 const pencil = '#55606a'
 const step = 22
+export const strong = (node: ContentNode): ContentNode => ({ ...node, bold: true })
 
 /** A heading never stands alone at the foot of a page: it goes with what comes first beneath it. */
 function together(head: Content, [first, ...rest]: readonly Content[]): Content[] {
@@ -120,7 +121,7 @@ export function contentOf(document: SpecDocument): Content[] {
     ...together(heading('SCHEDULES', 'schedules', { style: 'part' }), drawing(document)),
     ...document.schedules.flatMap(schedule),
     ...registers(document),
-    { text: document.closing.join(' '), margin: [0, 14, 0, 0], bold: true },
+    strong({ text: document.closing.join(' '), margin: [0, 14, 0, 0] }),
     { text: `END OF SECTION ${document.header.sectionNumber}`, alignment: 'center', margin: [0, 16, 0, 0] },
   ]
 }

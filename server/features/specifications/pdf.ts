@@ -1,7 +1,7 @@
 import pdfmake, { type Content } from 'pdfmake'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import { fontFiles, fontFolder } from './fonts.ts'
-import { contentOf, fontName } from './pdf-content.ts'
+import { contentOf, fontName, strong } from './pdf-content.ts'
 import { titleRows } from '../../../shared/domain/specification/title-block.ts'
 
 pdfmake.setFonts({ [fontName]: fontFiles })
@@ -37,7 +37,7 @@ function titleBlock({ header }: SpecDocument): Content[] {
   const rows = titleRows(header)
   return [
     { text: `SECTION ${header.sectionNumber}`, fontSize: 12, alignment: 'center' },
-    { text: header.sectionTitle.toUpperCase(), fontSize: 16, bold: true, alignment: 'center', margin: [0, 2, 0, 12] },
+    strong({ text: header.sectionTitle.toUpperCase(), fontSize: 16, alignment: 'center', margin: [0, 2, 0, 12] }),
     { table: { widths: [70, '*'], body: rows.map(([label, value]) => [{ text: label, color: pencil }, value]) }, layout: 'hairlines' },
   ]
 }

@@ -38,23 +38,23 @@ export function createRegister(): Register {
     if (origin.kind === 'stated') return sheetTag(lists.sources, origin.citation)
     if (origin.kind === 'entered') {
       const { reason, by, at } = origin
-      return once(lists.entered, 'E', { reason, by, at }, (one) => one.reason === reason && one.by === by)
+      return once(lists.entered, 'E', { entry: { reason, by, at }, same: (one) => one.reason === reason && one.by === by })
     }
     const { source, dated } = origin
-    return once(lists.typicals, 'T', { source, dated }, (one) => one.source === source && one.dated === dated)
+    return once(lists.typicals, 'T', { entry: { source, dated }, same: (one) => one.source === source && one.dated === dated })
   }
   const cited = (text: string, origin: Origin): Run => ({
     kind: 'figure', text, known: knownOf[origin.kind], tags: [tagOf(origin)], citation: origin.kind === 'stated' ? origin.citation : null,
   })
   const working: Register['working'] = (text, { formula, sum, source }) => ({
     kind: 'figure', text, known: 'computed', citation: null,
-    tags: [once(lists.workings, 'W', { formula, sum, source, from: [] as string[] }, (one) => one.formula === formula && one.sum === sum)],
+    tags: [once(lists.workings, 'W', { entry: { formula, sum, source, from: [] as string[] }, same: (one) => one.formula === formula && one.sum === sum })],
   })
   const computedRun = (figure: Extract<KnownFigure, { kind: 'computed' }>, text: string): Run => {
     if (figure.working.formula === chosenFormula) return { kind: 'figure', text, known: 'chosen', tags: [], citation: null }
     const from = [...new Set(figure.from.flatMap(({ origin }) => (origin ? [tagOf(origin)] : [])))]
     const { formula, sum, source } = figure.working
-    const tag = once(lists.workings, 'W', { formula, sum, source, from }, (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from))
+    const tag = once(lists.workings, 'W', { entry: { formula, sum, source, from }, same: (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from) })
     return { kind: 'figure', text, known: isTypical(figure) ? 'typical' : 'computed', tags: [tag], citation: null }
   }
   const cite: Register['cite'] = (text, facts) => {
@@ -91,9 +91,9 @@ export function createRegister(): Register {
 }
 
 /** Finds the same entry or adds it under the next tag of its letter. */
-function once<T extends object>(list: ({ tag: string } & T)[], letter: string, entry: T, same: (one: T) => boolean): string {
-  const found = list.find(same)
-  if (found) return found.tag
+function once<T extends object>(list: ({ tag: string } & T)[], letter: string, { entry, same }: { entry: T; same: (one: T) => boolean }): string {
+  const known = list.find(same)
+  if (known) return known.tag
   const tag = `${letter}${list.length + 1}`
   list.push({ tag, ...entry })
   return tag
