@@ -13,7 +13,6 @@ const labels: readonly ((index: number) => string)[] = [
   (index) => `${index + 1})`,
   (index) => `${letters(index).toLowerCase()})`,
 ]
-export const deepestLevel = labels.length - 1
 
 /** Label of a paragraph by its level (0 for `A.`) and place. @throws RangeError below the deepest level */
 export function labelOf(level: number, index: number): string {
