@@ -15,6 +15,8 @@ import { addMix, addProduct } from '../../features/catalogue/write-queries.ts'
 import { hashPassword } from '../../features/people/password.ts'
 import { addPerson, makeFirm } from '../../features/people/queries.ts'
 import { addRevision, addSheet } from '../../features/sheets/queries.ts'
+import { issueSpecification } from '../../features/specifications/issue.ts'
+import { addSpecification } from '../../features/specifications/queries.ts'
 import type { FileStore } from '../../files/store.ts'
 import { type DemoBuildUp, type Known, demoBuildUps } from './build-ups.ts'
 import { type DemoSheet, demoFolder } from './draw-sheets.ts'
@@ -40,7 +42,7 @@ export async function fillDemo({ db, files, now }: Filling): Promise<void> {
     await files.adopt(incoming, sheet.sha256)
   }
   const passwordHash = await hashPassword(demoPassword)
-  await db.transaction(async (tx) => {
+  const begun = await db.transaction(async (tx) => {
     await makeFirm(tx, { ...demoFirm, isDemo: true })
     const people: User[] = []
     for (const person of demoPeople) {
@@ -53,10 +55,16 @@ export async function fillDemo({ db, files, now }: Filling): Promise<void> {
     const versions = new Map<string, string>()
     for (const buildUp of demoBuildUps) versions.set(buildUp.name, await fillBuildUp(tx, buildUp, { known, lead, now }))
     const crewIds = people.filter(({ role }) => role === 'crew').map(({ id }) => id)
+    const jobIds: string[] = []
     for (const [index, { buildUp, body }] of demoJobs.entries()) {
-      await addJob(tx, { ...body, buildUpVersionId: versions.get(buildUp) ?? null, crewIds: index === 0 ? crewIds.slice(0, 1) : crewIds }, lead.id)
+      const jobId = await addJob(tx, { ...body, buildUpVersionId: versions.get(buildUp) ?? null, crewIds: index === 0 ? crewIds.slice(0, 1) : crewIds }, lead.id)
+      jobIds.push(jobId)
     }
+    const title = 'Resinous flooring, filling hall'
+    return { lead, specificationId: await addSpecification(tx, { jobId: jobIds[0] ?? '', title, sectionNumber: '09 67 23' }, lead.id) }
   })
+  const { lead, specificationId } = begun
+  await issueSpecification({ db, files, now }, { specificationId, version: 1, by: { id: lead.id, name: lead.name } })
 }
 
 async function fillCatalogue(tx: Transaction, sheets: readonly DemoSheet[], lead: Writer): Promise<Known> {
