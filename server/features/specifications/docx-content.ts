@@ -82,11 +82,11 @@ export function registerBlocks(document: SpecDocument): Block[] {
   return registersOf(document).flatMap(({ title, columns, rows }: Register) => [headingTwo(title), grid({ columns, rows: rows.map((row) => row.map((text) => [new TextRun({ text })])) })])
 }
 
-/** The section drawing as a picture with its words, for those who do not see it. */
-export function drawingBlocks({ png, width, height, alternative }: Awaited<ReturnType<typeof paintSection>>): Block[] {
+/** The section drawing, as lines and as a picture for word processors that draw no SVG, with its words for those who do not see it. */
+export function drawingBlocks({ svg, png, width, height, alternative }: Awaited<ReturnType<typeof paintSection>>): Block[] {
   const wide = 600
   const image = new ImageRun({
-    type: 'png', data: png, transformation: { width: wide, height: Math.round((height * wide) / width) },
+    type: 'svg', data: Buffer.from(svg), fallback: { type: 'png', data: png }, transformation: { width: wide, height: Math.round((height * wide) / width) },
     altText: { id: '1', name: 'Section through the floor', title: 'Section through the floor', description: alternative },
   })
   return [headingTwo('Section through the floor'), new Paragraph({ children: [image] }), ...note(alternative)]

@@ -12,7 +12,7 @@ export function drawSection({ section }: SpecDocument, fontFamily: string) {
   return { svg: sectionSvg(model, { fontFamily }), width: model.width, height: model.height, alternative: model.alternative }
 }
 
-const family = 'Wearcourse Sans'
+const family = 'Source Sans 3'
 
 /** The same as a picture, at three points a pixel: for word processors that draw no SVG. */
 export async function paintSection(document: SpecDocument) {
