@@ -68,10 +68,21 @@ export function shownUnit(unit: Unit, system: ShownSystem, property?: Property):
 const writers = Array.from({ length: 13 }, (_, maximumFractionDigits) => new Intl.NumberFormat('en-US', { maximumFractionDigits }))
 const cents = new Intl.NumberFormat('en-US', { minimumFractionDigits: 2, maximumFractionDigits: 2 })
 
+/** What `Intl.NumberFormat('en-US')` writes for a number that is rounded already, several times as fast. */
+function written(rounded: number): string {
+  const size = Math.abs(rounded)
+  const text = String(size)
+  const [whole = '', fraction] = size < 1000 ? [text] : text.split('.')
+  const grouped = size < 1000 ? whole : whole.replace(/\B(?=(\d{3})+$)/g, ',')
+  return `${rounded < 0 ? '−' : ''}${grouped}${fraction ? `.${fraction}` : ''}`
+}
+
 /** A number as people write it: thousands with commas, no trailing zeros that mean nothing, a minus that is one. At most twelve decimals. */
 export function formatNumber(value: number, decimals = decimalsFor(value)): string {
   const rounded = roundHalfEven(value, decimals)
-  const text = writers[decimals]?.format(rounded === 0 ? 0 : rounded) ?? String(value)
+  const size = Math.abs(rounded)
+  if (size === 0 || (size >= 1e-6 && size * 10 ** decimals < 1e15)) return written(rounded)
+  const text = writers[decimals]?.format(rounded) ?? String(value)
   return text.replace('-', '−')
 }
 

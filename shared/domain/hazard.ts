@@ -16,7 +16,8 @@ const leftOut: Record<string, string> = { H318: 'H314', H400: 'H410', H401: 'H41
 const acute = /^H3(02|12|32)/
 const skinOrEye = new Set(['H315', 'H319'])
 const sensitised = new Set(['H315', 'H317', 'H319'])
-const singles = (codes: readonly string[]) => codes.flatMap((code) => code.split('+'))
+const singles = (codes: readonly string[]): readonly string[] =>
+  codes.some((code) => code.includes('+')) ? codes.flatMap((code) => code.split('+')) : codes
 
 /** Statements that are said on one label: without duplicates and without those that go without saying, in the order of their numbers. */
 export function statementsOf(codes: readonly string[]): string[] {
@@ -44,18 +45,32 @@ export function signalWordOf(words: readonly (string | undefined)[]): 'Danger' |
   return said.some((word) => word.startsWith('danger')) ? 'Danger' : said.some((word) => word.startsWith('warning')) ? 'Warning' : null
 }
 
-const allOf = (facts: readonly Fact[], property: Property) => facts.filter((fact) => fact.property === property)
-const codesIn = ({ facts }: Handled, property: Property) => allOf(facts, property).flatMap(codesOf)
+/** What one label says, read once. */
+interface Label {
+  name: string
+  /** Hazard and supplemental statements. */
+  codes: string[]
+  precautions: string[]
+  signalWords: (string | undefined)[]
+  words: Partial<Record<Property, string[]>>
+}
 
-/** The codes of one label: hazard and supplemental statements. */
-const hazardCodes = (one: Handled) => [...codesIn(one, 'hazardStatements'), ...codesIn(one, 'supplementalStatements')]
+const worded: ReadonlySet<Property> = new Set(['gloves', 'eyeProtection', 'respiratoryProtection', 'emergencyPhone'])
+
+function labelOf({ name, facts }: Handled): Label {
+  const label: Label = { name, codes: [], precautions: [], signalWords: [], words: {} }
+  for (const fact of facts) {
+    if (fact.property === 'hazardStatements' || fact.property === 'supplementalStatements') label.codes.push(...codesOf(fact))
+    else if (fact.property === 'precautionaryStatements') label.precautions.push(...codesOf(fact))
+    else if (fact.property === 'signalWord') label.signalWords.push(textOf(fact))
+    else if (worded.has(fact.property)) (label.words[fact.property] ??= []).push(textOf(fact)?.trim() ?? '')
+  }
+  return label
+}
 
 /** Words of a property on each sheet, with whose they are. */
-function wordsOf(handled: readonly Handled[], property: Property) {
-  return handled.flatMap(({ name, facts }) => {
-    const texts = new Set(allOf(facts, property).map((fact) => textOf(fact)?.trim() ?? ''))
-    return [...texts].filter(Boolean).map((text) => ({ text, from: name }))
-  })
+function wordsOf(labels: readonly Label[], property: Property) {
+  return labels.flatMap(({ name, words }) => [...new Set(words[property])].filter(Boolean).map((text) => ({ text, from: name })))
 }
 
 /** Codes of several labels as statements, each with whose label it stands on. */
@@ -68,17 +83,11 @@ function united(labels: readonly { name: string; codes: readonly string[] }[]) {
 }
 
 /** Precautions of everything together: of two that say one thing, the stricter. */
-function precautionsOf(handled: readonly Handled[]): HazardSummary['precautions'] {
-  const all = united(handled.map((one) => ({ name: one.name, codes: codesIn(one, 'precautionaryStatements') })))
+function precautionsOf(labels: readonly Label[]): HazardSummary['precautions'] {
+  const all = united(labels.map(({ name, precautions }) => ({ name, codes: precautions })))
   const kept = new Set(statementsOf(all.map(({ code }) => code)))
   return all.filter(({ code }) => kept.has(code))
 }
-
-/** Signal words of one label: the sheet's own, and what the standard gives to the statements it makes. */
-const wordsOfLabel = (one: Handled) => [
-  ...allOf(one.facts, 'signalWord').map(textOf),
-  ...singles(hazardCodes(one)).map(signalWordOfStatement),
-]
 
 /** True when a safety sheet has been read: it states hazards, a signal word, or that there are none. */
 export function hasHazards({ facts }: Pick<Handled, 'facts'>): boolean {
@@ -87,20 +96,21 @@ export function hasHazards({ facts }: Pick<Handled, 'facts'>): boolean {
 
 /**
  * Hazards of several things handled together: the union of their labels, each by the rules of one label, so that nothing that stands on a pail is lost
- * because another pail bears more. What arises in mixing, curing and grinding is on no sheet, and what no sheet states is listed as not stated.
+ * because another pail bears more. The signal word is the sheets' own or what the standard gives to their statements, whichever is graver. What arises in mixing, curing and grinding is on no sheet, and what no sheet states is listed as not stated.
  */
 export function unionOfHazards(all: readonly Handled[]): HazardSummary {
   const handled = [...new Map(all.map((one) => [one.id, one])).values()]
-  const labels = handled.map((one) => ({ name: one.name, codes: hazardCodes(one) }))
+  const labels = handled.map(labelOf)
+  const standard = labels.flatMap(({ codes }) => singles(codes).map(signalWordOfStatement))
   return {
-    signalWord: signalWordOf(handled.flatMap(wordsOfLabel)),
+    signalWord: signalWordOf([...labels.flatMap(({ signalWords }) => signalWords), ...standard]),
     pictograms: [...new Set(labels.flatMap(({ codes }) => pictogramsOf(codes)))].sort(),
     statements: united(labels.map(({ name, codes }) => ({ name, codes: statementsOf(codes) }))),
-    precautions: precautionsOf(handled),
-    gloves: wordsOf(handled, 'gloves'),
-    eyes: wordsOf(handled, 'eyeProtection'),
-    breathing: wordsOf(handled, 'respiratoryProtection'),
-    emergencyPhones: wordsOf(handled, 'emergencyPhone'),
+    precautions: precautionsOf(labels),
+    gloves: wordsOf(labels, 'gloves'),
+    eyes: wordsOf(labels, 'eyeProtection'),
+    breathing: wordsOf(labels, 'respiratoryProtection'),
+    emergencyPhones: wordsOf(labels, 'emergencyPhone'),
     notStated: handled.filter((one) => !hasHazards(one)).map(({ name }) => name),
   }
 }

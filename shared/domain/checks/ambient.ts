@@ -5,7 +5,7 @@ import { formatNumber, formatQuantity, formatRange } from '../format.ts'
 import type { Range } from '../property.ts'
 import { type Quantity, convert, valueIn } from '../units.ts'
 import { computed } from '../working.ts'
-import { type Check, type Floor, type LaidMix, type Verdict, mixCourses, unknown, unstatedOfMix } from './check.ts'
+import { type Check, type Floor, type LaidMix, type Verdict, capital, mixCourses, unknown, unstatedOfMix } from './check.ts'
 
 interface Asked {
   what: 'slab' | 'air'
@@ -32,6 +32,12 @@ function askedOf(facts: readonly Fact[], { input }: Floor): Asked[] {
   })
 }
 
+/** "slab 68 °F (20 °C), the sheet allows 5–30 °C": told in the limit's unit too where that is another. */
+function inWords({ what, at, range }: Asked): string {
+  const other = range.unit === at.unit ? '' : ` (${formatQuantity(convert(at, range.unit))})`
+  return `${what} ${formatQuantity(at)}${other}, the sheet allows ${formatRange(range)}`
+}
+
 function temperatureVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
   const facts = factsOf(mix.facts, 'applicationTemperature')
   if (facts.length === 0) {
@@ -44,8 +50,7 @@ function temperatureVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
     const because = 'the sheet speaks of the material’s temperature only, which is not among the conditions'
     return unknown(course.id, 'The sheet states no temperature of slab or air.', [unstatedOfMix('applicationTemperature', mix, because)])
   }
-  const said = (list: readonly Asked[]) =>
-    list.map(({ what, at, range }) => `${what} ${formatQuantity(at)}, the sheet allows ${formatRange(range)}`).join('; ')
+  const said = (list: readonly Asked[]) => capital(list.map(inWords).join('; '))
   const figures = facts.map((fact, index) => ({
     label: `the sheet’s range${facts.length > 1 ? ` ${index + 1}` : ''}${fact.of ? `, ${fact.of}` : ''}`,
     figure: figureOfFact(fact),

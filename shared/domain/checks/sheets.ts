@@ -133,11 +133,14 @@ function withdrawnOf({ course, mix }: Laid, { input }: Floor): string[] {
 /** Titles of superseded revisions that facts of the course still cite. */
 function citedSuperseded({ course, mix }: Laid, { input }: Floor): string[] {
   const holders = [...(mix ? [mix] : []), ...productsOf(course, input)]
-  const inForce = new Map(
-    holders.flatMap(({ sheets }) => sheets.filter((sheet) => !sheet.superseded).map((sheet) => [sheet.id, sheet.revisionId] as const)),
+  const inForce = new Map<string, string>()
+  for (const { sheets } of holders) for (const sheet of sheets) if (!sheet.superseded) inForce.set(sheet.id, sheet.revisionId)
+  const stale = holders.flatMap(({ facts }) =>
+    facts.flatMap(({ origin }) => {
+      const now = origin.kind === 'stated' ? inForce.get(origin.citation.sheetId) : undefined
+      return origin.kind === 'stated' && now !== undefined && now !== origin.citation.revisionId ? [origin.citation] : []
+    }),
   )
-  const cited = holders.flatMap(({ facts }) => facts.flatMap(({ origin }) => (origin.kind === 'stated' ? [origin.citation] : [])))
-  const stale = cited.filter(({ sheetId, revisionId }) => inForce.has(sheetId) && inForce.get(sheetId) !== revisionId)
   return [...new Set(stale.map(({ sheetTitle, revisionDate }) => `${sheetTitle}${revisionDate ? ` of ${writtenDate(revisionDate)}` : ''}`))]
 }
 
