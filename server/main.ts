@@ -28,7 +28,9 @@ async function start(): Promise<void> {
   await new Promise<void>((resolve, reject) => server.once('error', reject).listen(env.port, env.host, resolve))
   await mkdir(env.dataDir, { recursive: true, mode: 0o700 })
   say('Opening the database …')
-  const database = await openDatabase({ dataDir: env.dataDir, ...(env.databaseUrl ? { databaseUrl: env.databaseUrl } : {}), log })
+  // What is lost is told by the log; a process that cannot answer any more ends, for whoever keeps it running to start it again.
+  const onLost = () => setTimeout(() => process.exit(1), 1000)
+  const database = await openDatabase({ dataDir: env.dataDir, ...(env.databaseUrl ? { databaseUrl: env.databaseUrl } : {}), log, onLost })
   const files = env.s3 ? await (await import('./files/s3-store.ts')).openS3Store(env.dataDir, env.s3) : await openDiskStore(env.dataDir)
   const mail = env.smtp ? smtpMailer(env.smtp) : await outboxMailer(env.dataDir, clock)
   if (env.demo === 'auto' && !(await hasPeople(database.db))) {

@@ -12,5 +12,7 @@ export interface Change {
 
 /** Writes who changed what, from what, to what. Called in the transaction of the change, never outside one. */
 export async function recordChange(tx: Transaction, { personId, action, subject, from, to }: Change): Promise<void> {
-  await tx.insert(auditTrail).values({ personId, action, subjectKind: subject.kind, subjectId: subject.id, from: from ?? null, to: to ?? null })
+  await tx
+    .insert(auditTrail)
+    .values({ personId, action, subjectKind: subject.kind, subjectId: subject.id, from: from ?? null, to: to ?? null })
 }

@@ -10,7 +10,9 @@ const format = 1
 /** The version of PGlite that runs here. */
 export const pgliteVersion = z
   .object({ version: z.string() })
-  .parse(JSON.parse(readFileSync(join(dirname(createRequire(import.meta.url).resolve('@electric-sql/pglite')), '../package.json'), 'utf8'))).version
+  .parse(
+    JSON.parse(readFileSync(join(dirname(createRequire(import.meta.url).resolve('@electric-sql/pglite')), '../package.json'), 'utf8')),
+  ).version
 
 /**
  * Checks that a data folder was written by this version of PGlite, and marks an empty one. Another version may read it wrongly without an error.

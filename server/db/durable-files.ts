@@ -27,7 +27,17 @@ export function watchWrites(folder: string): DurableFiles {
   const dirtyLog = new Set<string>()
   const dirtyData = new Set<string>()
   const dirtyFolders = new Set<string>()
-  const original = { openSync: fs.openSync, closeSync: fs.closeSync, writeSync: fs.writeSync, ftruncateSync: fs.ftruncateSync, truncateSync: fs.truncateSync, renameSync: fs.renameSync, unlinkSync: fs.unlinkSync, mkdirSync: fs.mkdirSync, rmdirSync: fs.rmdirSync }
+  const original = {
+    openSync: fs.openSync,
+    closeSync: fs.closeSync,
+    writeSync: fs.writeSync,
+    ftruncateSync: fs.ftruncateSync,
+    truncateSync: fs.truncateSync,
+    renameSync: fs.renameSync,
+    unlinkSync: fs.unlinkSync,
+    mkdirSync: fs.mkdirSync,
+    rmdirSync: fs.rmdirSync,
+  }
 
   const isOurs = (path: string) => path.startsWith(`${root}/`)
   const isLog = (path: string) => path.startsWith(`${logFolder}/`)
@@ -91,33 +101,33 @@ export function watchWrites(folder: string): DurableFiles {
     dirtyFolders.add(dirname(name))
   }
 
-  fs.openSync = ((path: fs.PathLike, flags?: fs.OpenMode, mode?: fs.Mode | null) => {
+  fs.openSync = (path: fs.PathLike, flags?: fs.OpenMode, mode?: fs.Mode | null) => {
     const creates = typeof flags === 'number' ? (flags & fs.constants.O_CREAT) !== 0 : typeof flags === 'string' && /[wa]/.test(flags)
     const isNew = creates && isOurs(String(path)) && !fs.existsSync(path)
     const descriptor = original.openSync(path, flags ?? 'r', mode)
     paths.set(descriptor, String(path))
     if (isNew) dirtyFolders.add(dirname(String(path)))
     return descriptor
-  })
-  fs.closeSync = ((descriptor: number) => {
+  }
+  fs.closeSync = (descriptor: number) => {
     paths.delete(descriptor)
     original.closeSync(descriptor)
-  })
+  }
   fs.writeSync = ((descriptor: number, ...rest: [never]) => {
     const path = pathOf(descriptor)
     if (isOurs(path)) beforeWrite(path)
     return original.writeSync(descriptor, ...rest)
   }) as typeof fs.writeSync
-  fs.ftruncateSync = ((descriptor: number, length?: number | null) => {
+  fs.ftruncateSync = (descriptor: number, length?: number | null) => {
     const path = pathOf(descriptor)
     if (isOurs(path)) beforeWrite(path)
     original.ftruncateSync(descriptor, length ?? 0)
-  })
-  fs.truncateSync = ((path: fs.PathLike, length?: number | null) => {
+  }
+  fs.truncateSync = (path: fs.PathLike, length?: number | null) => {
     if (isOurs(String(path))) beforeWrite(String(path))
     original.truncateSync(path, length ?? 0)
-  })
-  fs.renameSync = ((from: fs.PathLike, to: fs.PathLike) => {
+  }
+  fs.renameSync = (from: fs.PathLike, to: fs.PathLike) => {
     if (dirtyLog.delete(String(from))) dirtyLog.add(String(to))
     if (dirtyData.delete(String(from))) {
       syncPath(String(from), false)
@@ -125,19 +135,19 @@ export function watchWrites(folder: string): DurableFiles {
     entryChanged(from)
     entryChanged(to)
     original.renameSync(from, to)
-  })
-  fs.unlinkSync = ((path: fs.PathLike) => {
+  }
+  fs.unlinkSync = (path: fs.PathLike) => {
     entryChanged(path)
     original.unlinkSync(path)
-  })
+  }
   fs.mkdirSync = ((path: fs.PathLike, options?: fs.MakeDirectoryOptions) => {
     entryChanged(path)
     return original.mkdirSync(path, options)
   }) as typeof fs.mkdirSync
-  fs.rmdirSync = ((path: fs.PathLike) => {
+  fs.rmdirSync = (path: fs.PathLike) => {
     entryChanged(path)
     original.rmdirSync(path)
-  })
+  }
   syncBuiltinESMExports()
 
   return {

@@ -12,7 +12,11 @@ export async function lockFolder(folder: string): Promise<{ release: () => Promi
   const lock: Server = createServer((socket) => socket.destroy())
   await new Promise<void>((resolve, reject) => {
     lock.once('error', (error: NodeJS.ErrnoException) =>
-      reject(error.code === 'EADDRINUSE' ? new Error(`The data folder ${folder} is in use by another Wearcourse. Stop that one first, or set another DATA_DIR.`) : error),
+      reject(
+        error.code === 'EADDRINUSE'
+          ? new Error(`The data folder ${folder} is in use by another Wearcourse. Stop that one first, or set another DATA_DIR.`)
+          : error,
+      ),
     )
     lock.listen(`\0wearcourse-${name}`, resolve)
   })

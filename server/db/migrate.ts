@@ -20,4 +20,3 @@ export async function migrateDatabase(db: NodePgDatabase<typeof schema>, pool: p
     client.release()
   }
 }
-

@@ -1,8 +1,10 @@
 import { mkdirSync } from 'node:fs'
 import { type NodePgDatabase, drizzle } from 'drizzle-orm/node-postgres'
 import pg from 'pg'
+import { AskingPool, markTransactions } from './asking-pool.ts'
 import { startEmbedded } from './embedded.ts'
 import { migrateDatabase } from './migrate.ts'
+import type { Order } from './pglite-worker.ts'
 import * as schema from './schema/index.ts'
 
 export type Database = NodePgDatabase<typeof schema>
@@ -15,7 +17,7 @@ export interface OpenDatabase {
   /** Does it answer, within two seconds. */
   isAnswering(): Promise<boolean>
   checkpoint(): Promise<void>
-  /** Writes a copy of the embedded data folder to a file; refused on a server. */
+  /** Writes a copy of the embedded data folder to a file, for tests to begin with; only this version of PGlite reads it. Nothing on a server. */
   dumpTo(file: string): Promise<void>
   close(): Promise<void>
 }
@@ -26,6 +28,10 @@ export interface OpenOptions {
   log?: (line: string) => void
   /** After this the caller gets an error and the database counts as not answering until it does again. */
   queryTimeLimitMs?: number
+  /** After so long without a sign of life the thread of the embedded database counts as lost. */
+  silenceLimitMs?: number
+  /** The embedded database has ended by itself and will not come back in this process. */
+  onLost?: (reason: string) => void
   /** A dump of a migrated data folder to begin with. */
   loadFrom?: string
 }
@@ -34,19 +40,32 @@ const defaultTimeLimit = 20_000
 
 /** Opens the database, embedded in `dataDir` or on the server of `databaseUrl`, and brings its tables up to date. */
 export async function openDatabase(options: OpenOptions): Promise<OpenDatabase> {
-  const limit = options.queryTimeLimitMs ?? defaultTimeLimit
-  const log = options.log ?? (() => undefined)
-  mkdirSync(options.dataDir, { recursive: true, mode: 0o700 })
-  const embedded = options.databaseUrl ? undefined : await startEmbedded({ dataDir: options.dataDir, loadFrom: options.loadFrom, log })
+  const { dataDir, databaseUrl, queryTimeLimitMs = defaultTimeLimit, silenceLimitMs = 60_000, log = () => undefined } = options
+  mkdirSync(dataDir, { recursive: true, mode: 0o700 })
+  const onLost = (reason: string) => {
+    log(`The embedded database stopped: ${reason}. Nothing that was saved is lost; see that the disk has room and start Wearcourse again.`)
+    options.onLost?.(reason)
+  }
+  const embedded = databaseUrl ? undefined : await startEmbedded({ dataDir, loadFrom: options.loadFrom, silenceLimitMs, onLost })
   // One connection to the embedded database: pglite-socket queues single protocol messages, so the parse, bind and execute of two connections
   // outside transactions mix (seen: "bind supplies 2 parameters, requires 3", "portal does not exist", a session lost).
-  const pool = new pg.Pool({
-    ...(embedded ? { ...embedded.connection, max: 1 } : { connectionString: options.databaseUrl, max: 10, statement_timeout: limit }),
+  const pool = new AskingPool({
+    ...(embedded ? { ...embedded.connection, max: 1 } : { connectionString: databaseUrl, max: 10, statement_timeout: queryTimeLimitMs }),
     connectionTimeoutMillis: 10_000,
-    query_timeout: limit,
+    query_timeout: queryTimeLimitMs,
   })
   pool.on('error', (error) => log(`database ${error.message}`))
-  const db = drizzle(pool, { schema })
+  const db = markTransactions(drizzle(pool, { schema }))
+  /** While it holds the one connection no query is under way. */
+  const alone = async (order: Order) => {
+    if (!embedded) return
+    const client = await pool.connect()
+    try {
+      await embedded.order(order)
+    } finally {
+      client.release()
+    }
+  }
   const close = async () => {
     await pool.end()
     await embedded?.close()
@@ -62,8 +81,8 @@ export async function openDatabase(options: OpenOptions): Promise<OpenDatabase> 
     pool,
     kind: embedded ? 'embedded' : 'server',
     isAnswering: () => answers(pool),
-    checkpoint: () => embedded?.order('checkpoint') ?? Promise.resolve(),
-    dumpTo: (file) => embedded?.order({ dumpTo: file }) ?? Promise.reject(new Error('A PostgreSQL server is backed up with pg_dump.')),
+    checkpoint: () => alone('checkpoint'),
+    dumpTo: (file) => alone({ dumpTo: file }),
     close,
   }
 }
@@ -74,7 +93,10 @@ async function answers(pool: pg.Pool): Promise<boolean> {
   const late = new Promise<boolean>((resolve) => {
     timer = setTimeout(() => resolve(false), 2000)
   })
-  const answered = pool.query('select 1').then(() => true, () => false)
+  const answered = pool.query('select 1').then(
+    () => true,
+    () => false,
+  )
   try {
     return await Promise.race([answered, late])
   } finally {

@@ -13,22 +13,28 @@ afterAll(() => rm(folder, { recursive: true, force: true }))
 const rounds = Number(process.env['DURABILITY_ROUNDS'] ?? 2)
 
 describe('an acknowledged commit of the embedded database', () => {
-  it.skipIf(!existsSync('/usr/bin/strace'))('is preceded by an fdatasync of the write-ahead log, each one of them', () => {
-    const trace = join(folder, 'trace')
-    const dataDir = join(folder, 'traced')
-    const run = spawnSync('/usr/bin/strace', ['-f', '-y', '-s', '40', '-e', 'trace=fdatasync,write', '-o', trace, process.execPath, ...writerCommand, dataDir, '40'], {
-      cwd: join(import.meta.dirname, '../..'), encoding: 'utf8',
-    })
-    expect(run.status, run.stderr).toBe(0)
-    const lines = readFileSync(trace, 'utf8').split('\n')
-    const events = lines.flatMap((line) => (/"ack \d+/.test(line) ? ['ack'] : /fdatasync\(\d+<[^>]*pg_wal/.test(line) ? ['sync'] : []))
-    const acknowledged = events.flatMap((event, index) => (event === 'ack' ? [index] : []))
-    expect(acknowledged).toHaveLength(40)
-    for (const [order, index] of acknowledged.entries()) {
-      const since = events.slice((acknowledged[order - 1] ?? -1) + 1, index)
-      expect(since, `before acknowledgement ${order + 1}`).toContain('sync')
-    }
-  }, 120_000)
+  it.skipIf(!existsSync('/usr/bin/strace'))(
+    'is preceded by an fdatasync of the write-ahead log, each one of them',
+    () => {
+      const trace = join(folder, 'trace')
+      const dataDir = join(folder, 'traced')
+      const run = spawnSync(
+        '/usr/bin/strace',
+        ['-f', '-y', '-s', '40', '-e', 'trace=fdatasync,write', '-o', trace, process.execPath, ...writerCommand, dataDir, '40'],
+        { cwd: join(import.meta.dirname, '../..'), encoding: 'utf8' },
+      )
+      expect(run.status, run.stderr).toBe(0)
+      const lines = readFileSync(trace, 'utf8').split('\n')
+      const events = lines.flatMap((line) => (/"ack \d+/.test(line) ? ['ack'] : /fdatasync\(\d+<[^>]*pg_wal/.test(line) ? ['sync'] : []))
+      const acknowledged = events.flatMap((event, index) => (event === 'ack' ? [index] : []))
+      expect(acknowledged).toHaveLength(40)
+      for (const [order, index] of acknowledged.entries()) {
+        const since = events.slice((acknowledged[order - 1] ?? -1) + 1, index)
+        expect(since, `before acknowledgement ${order + 1}`).toContain('sync')
+      }
+    },
+    120_000,
+  )
 
   it('is found again after kill -9', async () => {
     const dataDir = join(folder, 'killed')
@@ -44,21 +50,25 @@ describe('an acknowledged commit of the embedded database', () => {
 
   const why = whyNoCutDisk()
   if (why) process.stdout.write(`No power is cut in this run: ${why}\n`)
-  it.skipIf(why !== undefined)('is found again after the power of its disk is cut', async () => {
-    for (let round = 0; round < rounds; round++) {
-      await onCutDisk(join(folder, `disk-${round}`), async (disk) => {
-        const writer = startWriter(join(disk.mountedAt, 'data'))
-        await writer.reached(150 + 130 * round)
-        writer.child.kill('SIGSTOP')
-        const last = writer.last()
-        disk.cut()
-        writer.child.kill('SIGKILL')
-        await writer.ended
-        const found = disk.powerUp()
-        expect(await missingRows(join(found, 'data'), last)).toEqual([])
-      })
-    }
-  }, 300_000)
+  it.skipIf(why !== undefined)(
+    'is found again after the power of its disk is cut',
+    async () => {
+      for (let round = 0; round < rounds; round++) {
+        await onCutDisk(join(folder, `disk-${round}`), async (disk) => {
+          const writer = startWriter(join(disk.mountedAt, 'data'))
+          await writer.reached(150 + 130 * round)
+          writer.child.kill('SIGSTOP')
+          const last = writer.last()
+          disk.cut()
+          writer.child.kill('SIGKILL')
+          await writer.ended
+          const found = disk.powerUp()
+          expect(await missingRows(join(found, 'data'), last)).toEqual([])
+        })
+      }
+    },
+    300_000,
+  )
 })
 
 describe('a data folder', () => {
