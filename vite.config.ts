@@ -21,6 +21,7 @@ export default defineConfig({
           globalSetup: ['tests/setup/database-template.ts'],
         },
       },
+      { test: { name: 'journeys', environment: 'node', testTimeout: 180_000, hookTimeout: 60_000, fileParallelism: false, include: ['tests/journeys/**/*.test.ts'] } },
     ],
   },
 })

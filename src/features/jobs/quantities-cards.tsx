@@ -1,9 +1,10 @@
 import type { Job, JobBody } from '../../../shared/api/jobs.ts'
-import { formatRange } from '../../../shared/domain/format.ts'
+import { formatFigure, formatRange } from '../../../shared/domain/format.ts'
 import { orderList } from '../../../shared/domain/order-list.ts'
 import type { CourseQuantity } from '../../../shared/domain/quantities.ts'
 import { FigureView, QuantityText } from '../../ui/figure-view.tsx'
 import { Card, Notice } from '../../ui/page.tsx'
+import { useUnitSystem } from '../../ui/unit-system.tsx'
 import { useEvaluated } from './evaluated.ts'
 import { OrderCard } from './order-card.tsx'
 
@@ -35,6 +36,7 @@ const terms = ['film', 'texture', 'joints', 'spalls', 'loss'] as const
 const termNames = { film: 'Film', texture: 'Texture', joints: 'Joints', spalls: 'Spalls', loss: 'Loss' } as const
 
 function CourseTable({ course }: { course: CourseQuantity }) {
+  const { system } = useUnitSystem()
   const shown = terms.filter((term) => course.bays.some((bay) => bay[term] !== null))
   return (
     <details className="border-b border-rule px-4 py-3 last:border-b-0">
@@ -43,7 +45,7 @@ function CourseTable({ course }: { course: CourseQuantity }) {
           <span className="font-semibold">{course.title}</span> <span className="text-pencil">{course.mix.name}</span>
         </span>
         <span className="text-right">
-          <FigureView figure={course.total} /> <span className="text-pencil">mixed</span>
+          {formatFigure(course.total, system)} <span className="text-pencil">mixed</span>
         </span>
       </summary>
       <div className="mt-2 overflow-x-auto">

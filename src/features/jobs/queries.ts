@@ -1,5 +1,4 @@
 import { keepPreviousData, useQuery, useQueryClient } from '@tanstack/react-query'
-import type * as z from 'zod'
 import { buildUpEndpoints } from '../../../shared/api/build-ups.ts'
 import { type Job, type JobBody, jobEndpoints as wire } from '../../../shared/api/jobs.ts'
 import { call } from '../../lib/api.ts'

@@ -12,7 +12,7 @@ export function RunsView({ runs }: { runs: readonly Run[] }) {
       <Fragment key={index}>
         {run.citation ? <CitationLink citation={run.citation}>{figure}</CitationLink> : figure}
         {tag && (
-          <a href={`#${tag}`} className="text-small whitespace-nowrap text-pencil hover:text-resin">
+          <a href={`#${tag}`} className="inline-block min-h-6 text-small text-pencil underline decoration-rule underline-offset-2 hover:text-resin">
             {tagText(run)}
           </a>
         )}

@@ -1,5 +1,6 @@
 import { useState } from 'react'
 import { Link, useParams } from 'react-router'
+import { writtenDate } from '../../../shared/domain/sheet-age.ts'
 import { issueWords } from '../../../shared/domain/specification/document.ts'
 import type { Specification } from '../../../shared/api/specifications.ts'
 import { sentenceOf } from '../../lib/api.ts'
@@ -16,7 +17,7 @@ import { files, useIssue, useSpecification } from './queries.ts'
 import { SectionForm } from './section-form.tsx'
 import { SupersededNotice } from './superseded-notice.tsx'
 
-const linkClass = 'text-resin underline-offset-4 hover:underline'
+const linkClass = 'text-resin underline underline-offset-4'
 
 function Exports({ address }: { address: (kind: 'docx' | 'pdf') => string }) {
   return (
@@ -100,7 +101,7 @@ export function IssuePage() {
               <Link to={paths.job(issue.jobId)} className={linkClass}>
                 {issue.jobName}
               </Link>
-              . Issue {issue.number}, {issue.document.header.date}, by {issue.issuedByName}. It never changes.{' '}
+              . Issue {issue.number}, {writtenDate(issue.document.header.date)}, by {issue.issuedByName}. It never changes.{' '}
               <Link to={paths.specification(specificationId)} className={linkClass}>
                 The specification today
               </Link>
