@@ -14,9 +14,10 @@ export const runOf = (options: IRunOptions) => new TextRun(options)
 
 function inline(runs: readonly Run[]): TextRun[] {
   return runs.flatMap((run) => {
-    const words = runOf({ text: run.text, italics: run.kind === 'figure' && run.known === 'not-stated' })
+    const italics = run.kind === 'figure' && run.known === 'not-stated'
+    const words = run.text.split('\n').map((text, index) => runOf({ text, italics, ...(index > 0 ? { break: 1 } : {}) }))
     const tag = tagText(run)
-    return tag ? [words, new TextRun({ text: tag, size: 15, color: pencil })] : [words]
+    return tag ? [...words, new TextRun({ text: tag, size: 15, color: pencil })] : words
   })
 }
 

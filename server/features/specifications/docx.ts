@@ -1,4 +1,5 @@
 import { AlignmentType, Document, Footer, Header, Packer, PageNumber, Paragraph, Tab, TabStopType, TextRun } from 'docx'
+import { writtenDate } from '../../../shared/domain/sheet-age.ts'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import { drawingBlocks, frontBlocks, grid, headingOne, partBlocks, registerBlocks, runOf, scheduleBlocks } from './docx-content.ts'
 import { numbering, pencil, styles } from './docx-styles.ts'
@@ -16,7 +17,7 @@ function pageEdges({ header }: SpecDocument) {
       default: new Footer({
         children: [
           edge([
-            `${header.sectionNumber} ${header.sectionTitle}, ${header.date}`,
+            `${header.sectionNumber} ${header.sectionTitle}, ${writtenDate(header.date)}`,
             new TextRun({ children: [new Tab(), 'Page ', PageNumber.CURRENT, ' of ', PageNumber.TOTAL_PAGES] }),
           ]),
         ],

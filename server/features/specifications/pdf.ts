@@ -1,4 +1,5 @@
 import pdfmake, { type Content } from 'pdfmake'
+import { writtenDate } from '../../../shared/domain/sheet-age.ts'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import { fontFiles, fontFolder } from './fonts.ts'
 import { contentOf, fontName, strong } from './pdf-content.ts'
@@ -55,7 +56,7 @@ function pageHead({ header }: SpecDocument): Content {
 
 const pageFoot = ({ header }: SpecDocument, page: number, pages: number): Content => ({
   columns: [
-    { width: '*', text: `${header.sectionNumber} ${header.sectionTitle}, ${header.date}` },
+    { width: '*', text: `${header.sectionNumber} ${header.sectionTitle}, ${writtenDate(header.date)}` },
     { width: 'auto', text: `Page ${page} of ${pages}`, alignment: 'right' },
   ],
   fontSize: 8.5, color: pencil, margin: [side, 20, side, 0],

@@ -1,7 +1,7 @@
 import { dryStages } from '../build-up.ts'
 import { formatQuantity } from '../format.ts'
 import type { Article, Item } from './document.ts'
-import type { Floor, SpecCourse } from './floor.ts'
+import { type Floor, type SpecCourse, fillsByVolume } from './floor.ts'
 import { moistureTests } from './moisture-tests.ts'
 import { chosen, item, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
 import { statedOfEach } from './stated.ts'
@@ -54,12 +54,14 @@ const mixing = (): Item[] => [
   ),
 ]
 
-function laying(floor: Floor, { course, mix, broadcast, result }: SpecCourse): Item {
+function laying(floor: Floor, one: SpecCourse): Item {
   const { register } = floor
+  const { course, mix, broadcast, result } = one
   const window = line`${register.figure(result.window, { window: true })}`
   return item(line`${quoted(course.title)}: apply ${mix ? quoted(mix.name) : notStatedRun()}.`, [
-    item(line`Spread rate: ${register.figure(result.spreadRate)}.`),
-    item(line`Wet film: ${register.figure(result.wetFilm)}. Dry film: ${register.figure(result.dryFilm)}.`),
+    ...(fillsByVolume(one)
+      ? [item(line`Amount: what the joints and cracks of the bays take, in the schedule of areas.`)]
+      : [item(line`Spread rate: ${register.figure(result.spreadRate)}.`), item(line`Wet film: ${register.figure(result.wetFilm)}. Dry film: ${register.figure(result.dryFilm)}.`)]),
     broadcast && course.broadcast
       ? item(line`Broadcast ${quoted(broadcast.name)} into the wet film at ${chosen(formatQuantity(course.broadcast.rate))}${course.broadcast.toRefusal ? line`, to refusal. Remove the excess after cure` : []}.`)
       : null,

@@ -74,6 +74,11 @@ export function readFloor({ input }: SpecInput, evaluation: Evaluation): Pick<Fl
   }
 }
 
+/** A fill without a film of its own: it takes what the joints and cracks hold. */
+export function fillsByVolume({ course }: SpecCourse): boolean {
+  return course.stage === 'fill' && course.thickness === null && course.spreadRate === null
+}
+
 /** The three temperatures that windows are told at, in the unit that most of the sheets use; the slab's where they are even. */
 export function threeTemperatures({ mixes, given }: Pick<Floor, 'mixes' | 'given'>): Quantity[] {
   const stated = mixes.flatMap(({ facts }) => facts.find(({ property, at }) => property === 'recoatWindow' && at?.temperature)?.at?.temperature?.unit ?? [])

@@ -1,8 +1,8 @@
 import { factOf } from '../fact.ts'
 import { formatQuantity } from '../format.ts'
 import type { Article, Item, Runs } from './document.ts'
+import { hazardItems } from './cautions.ts'
 import { type Floor, areaOf } from './floor.ts'
-import { firstAidItems } from './hazards.ts'
 import { chosen, item, joined, line, measured, notStatedRun, plain, quoted, standard } from './runs.ts'
 import { statedOfEach } from './stated.ts'
 
@@ -99,21 +99,6 @@ function siteConditions(floor: Floor): Item[] {
   ]
 }
 
-function hazards(floor: Floor): Item[] {
-  const union = floor.evaluation.hazards
-  return [
-    ...plain('This section informs. The sheet, the label, the law and the competent person decide.'),
-    item(line`Hazards and protective equipment by course: see the schedule of hazards. Signal word of all materials together: ${union.signalWord ? quoted(union.signalWord) : notStatedRun()}.`),
-    ...(union.notStated.length > 0 ? [item(line`No hazard statement is loaded for: ${joined(union.notStated.map((name) => [quoted(name)]), ', ')}. Treat the hazards as unknown until the safety sheet is read.`)] : []),
-    item(line`First aid as the safety sheets state it:`, firstAidItems(floor)),
-    item(line`Silica: control dust of grinding, blasting and sand tipping after ${standard('29 CFR 1926.1153')}: its table of controls, or an exposure assessment. Do not sweep dry. Do not blow with compressed air.`),
-    item(line`Skin and breathing: sensitization to resins, hardeners and isocyanates is permanent. Leave gloves and respirators to the safety sheets and a competent person; a new rash or breathing trouble ends the work for that person.`),
-    item(line`Hot pail: empty each mix at once. A mix left in the pail heats by itself, can smoke and burn. Keep clear of a smoking pail, do not cap it, do not pour water into it.`),
-    item(line`Fire: remove ignition sources before solvents or flammable mixes are opened. A competent person designs the ventilation.`),
-    item(line`Old floors: presume asbestos in old tile and mastic and lead in old paint until a laboratory has tested them. Only a licensed contractor removes them.`),
-  ]
-}
-
 const warranty = (): Item[] => plain('Warranty: as the contract states. No term, scope or exclusion is stated on the sheets loaded here.')
 
 /** PART 1 GENERAL, articles in the order of SectionFormat; warranty comes last. */
@@ -127,7 +112,7 @@ export function generalArticles(floor: Floor): Article[] {
     { id: 'quality', title: 'Quality assurance', items: quality() },
     { id: 'delivery', title: 'Delivery, storage and handling', items: delivery(floor) },
     { id: 'conditions', title: 'Site conditions', items: siteConditions(floor) },
-    { id: 'hazards', title: 'Hazards and cautions', items: hazards(floor) },
+    { id: 'hazards', title: 'Hazards and cautions', items: hazardItems(floor) },
     { id: 'warranty', title: 'Warranty', items: warranty() },
   ]
 }

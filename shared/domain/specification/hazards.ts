@@ -21,8 +21,8 @@ function statementRun({ register }: Floor, products: readonly ProductFacts[], { 
 
 /** Words of a property as each product's safety sheet has them. */
 function told({ register }: Floor, products: readonly ProductFacts[], property: Property): Runs {
-  const lines = products.flatMap(({ name, facts }) => facts.filter((fact) => fact.property === property).map((fact) => line`${register.fact(fact)} (${quoted(name)})`))
-  return lines.length > 0 ? joined(lines, '; ') : notStatedRun()
+  const lines = products.flatMap(({ name, facts }) => facts.filter((fact) => fact.property === property).map((fact) => line`${quoted(name)}: ${register.fact(fact)}`))
+  return lines.length > 0 ? joined(lines, '\n') : notStatedRun()
 }
 
 const shows = (code: string) => (code in pictograms ? pictograms[code as keyof typeof pictograms].shows : code)
@@ -36,7 +36,7 @@ function hazardCell(floor: Floor, { products, result }: SpecCourse): Runs {
     ...sum.statements.map((statement) => [statementRun(floor, products, statement)]),
     ...(sum.notStated.length > 0 ? [line`not stated for ${quoted(sum.notStated.join('; '))}`] : []),
   ]
-  return said.length > 0 ? joined(said, '; ') : notStatedRun()
+  return said.length > 0 ? joined(said, '\n') : notStatedRun()
 }
 
 function row(floor: Floor, one: SpecCourse): Runs[] {

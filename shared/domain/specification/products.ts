@@ -1,5 +1,7 @@
-import { factOf, factsOf } from '../fact.ts'
+import { factOf, factsOf, ratioOf } from '../fact.ts'
+import { formatValue } from '../format.ts'
 import type { MixFacts } from '../mix.ts'
+import { densityFactOf } from '../proportion.ts'
 import { type Property, properties } from '../property.ts'
 import type { ProductFacts } from '../product.ts'
 import type { Article, Item } from './document.ts'
@@ -53,6 +55,18 @@ function materials(floor: Floor): Item[] {
   )
 }
 
+/** What a floor needs besides its courses; what the build-up does not hold is said not to be in it. */
+function accessories({ courses }: Floor): Item[] {
+  const fills = courses.filter(({ course, mix }) => course.stage === 'fill' && mix)
+  const coves = courses.filter(({ course, mix }) => course.stage === 'cove' && mix)
+  const named = (all: readonly SpecCourse[]) => joined(all.map(({ course, mix }) => line`${quoted(mix?.name ?? '')} in ${quoted(course.title)}`), ', ')
+  return [
+    item(line`Joint, crack and patching material: ${fills.length > 0 ? named(fills) : line`none is part of this build-up`}.`),
+    item(line`Cove base: ${coves.length > 0 ? named(coves) : line`none is part of this build-up`}.`),
+    ...plain('Sealant of moving joints, edge strips and keys: as the drawings show. Ask the maker of the course in writing whether they go together.'),
+  ]
+}
+
 function aggregateItem(floor: Floor, product: ProductFacts): Item {
   const uses = floor.courses.flatMap(({ course, filler, broadcast }) => [
     ...(filler?.id === product.id ? [line`in the mix of ${quoted(course.title)}`] : []),
@@ -66,11 +80,25 @@ function ratios(floor: Floor, mix: MixFacts): Item {
   return item(line`Ratio: ${single ? line`one component, nothing to proportion` : stated(floor, mix, ['mixRatio'])}.`)
 }
 
-function mixItem(floor: Floor, { mix, result, course, filler }: SpecCourse & { mix: MixFacts }): Item {
+/** The ratio by the other basis, through the stated densities; nothing where a sheet states both or a density is missing. */
+function otherRatio({ register }: Floor, { mix, result }: SpecCourse & { mix: MixFacts }): Item | null {
+  const bases = factsOf(mix.facts, 'mixRatio').map((fact) => ratioOf(fact)?.basis)
+  const densities = mix.parts.flatMap((part) => densityFactOf(mix, part) ?? [])
+  const basis = bases.includes('volume') && !bases.includes('weight') ? 'weight' : bases.includes('weight') && !bases.includes('volume') ? 'volume' : null
+  const ratio = basis === 'weight' ? result.ratioByWeight : result.ratioByVolume
+  if (!basis || !ratio || densities.length < mix.parts.length) return null
+  const sum = `${basis === 'weight' ? result.ratioByVolume : result.ratioByWeight}, ${basis === 'weight' ? '×' : '÷'} ${densities.map((fact) => formatValue(fact)).join(' : ')} = ${ratio}`
+  const facts = [...factsOf(mix.facts, 'mixRatio'), ...densities]
+  return item(line`By ${quoted(basis)}, through the densities: ${register.working(ratio, { formula: `parts by ${basis}`, sum, source: 'conservation of mass', facts })}.`)
+}
+
+function mixItem(floor: Floor, one: SpecCourse & { mix: MixFacts }): Item {
+  const { mix, result, course, filler } = one
   const split = factOf(mix.facts, 'splitKit')
   const induction = factsOf(mix.facts, 'inductionTime')
   return item(line`${quoted(course.title)}, ${quoted(mix.name)}:`, [
     ratios(floor, mix),
+    otherRatio(floor, one),
     filler && course.filler ? item(line`Aggregate in the mix: ${quoted(filler.name)}, loading in the system schedule.`) : null,
     item(line`Pot life at the slab temperature of this section: ${floor.register.figure(result.potLife)}. Other temperatures: schedule of pot life.`),
     induction.length > 0 ? item(line`Induction time: ${joined(induction.map((fact) => floor.register.factAt(fact)), '; ')}.`) : null,
@@ -88,6 +116,7 @@ export function productArticles(floor: Floor): Article[] {
     { id: 'system', title: 'System description', items: floor.mixes.length > 0 ? system(floor) : [] },
     { id: 'performance', title: 'Performance', items: floor.mixes.length > 0 ? performance(floor) : [] },
     { id: 'materials', title: 'Materials', items: materials(floor) },
+    { id: 'accessories', title: 'Accessories', items: floor.mixes.length > 0 ? accessories(floor) : [] },
     { id: 'aggregates', title: 'Aggregates', items: floor.aggregates.map((product) => aggregateItem(floor, product)) },
     { id: 'mixes', title: 'Mixes', items: mixesOf(floor) },
   ]

@@ -1,11 +1,12 @@
-import { formatNumber, formatQuantity } from '../format.ts'
+import { factsOf } from '../fact.ts'
+import { formatFigure, formatNumber, formatQuantity } from '../format.ts'
 import { writtenDate } from '../sheet-age.ts'
 import { valueAt } from '../sheet-table.ts'
 import type { SheetSummary } from '../sheet.ts'
 import { windowAt } from '../window.ts'
 import type { Runs, SpecTable } from './document.ts'
 import { fieldQualityTable } from './field-quality.ts'
-import { type Floor, type SpecCourse, threeTemperatures } from './floor.ts'
+import { type Floor, type SpecCourse, fillsByVolume, threeTemperatures } from './floor.ts'
 import { hazardTable } from './hazards.ts'
 import { chosen, joined, line, measured, notStatedRun, plainFigure, quoted } from './runs.ts'
 
@@ -45,6 +46,7 @@ function systemSchedule({ courses, register }: Floor): SpecTable {
       const work = method ? line`${quoted(method)}${profile === undefined ? [] : line`, ${chosen(`CSP ${profile}`)}`}` : notStatedRun()
       return [numbered(one), work, [quoted('–')], [quoted('–')], [quoted('–')], nothing]
     }
+    if (fillsByVolume(one)) return [numbered(one), [quoted(mix.name)], line`as the joints and cracks take: schedule of areas`, [quoted('–')], [quoted('–')], aggregateCell(one)]
     return [numbered(one), [quoted(mix.name)], register.figure(result.spreadRate), register.figure(result.wetFilm), register.figure(result.dryFilm), aggregateCell(one)]
   })
   return table('system', {
@@ -82,9 +84,12 @@ const potLives = (floor: Floor): SpecTable => byTemperature(floor, 'pot-life', {
 function areas({ given, quantities, register }: Floor): SpecTable {
   const bays = given.bays.map((bay): Runs[] => [[quoted(bay.name)], [measured(formatQuantity(bay.area))], [quoted('bay')]])
   const needs = quantities.flatMap(({ title, mix, total, packing, aggregates }): Runs[][] => {
-    const packs = packing.plan ? packing.plan.lines.map(({ pack, count: many }) => `${many} × ${formatQuantity(pack.size)}`).join(', ') : undefined
+    const packs = packing.plan?.lines.map(({ pack, count: many }) => `${many} × ${formatQuantity(pack.size)}`).join(', ')
+    const kits = packs && register.working(packs, {
+      formula: 'whole kits', sum: `${formatFigure(total)}: ${packs}`, source: packing.perBay ? 'packs of the sheet, counted bay by bay' : 'packs of the sheet', facts: factsOf(given.input.mixes[mix.id]?.facts ?? [], 'packSize'),
+    })
     return [
-      [line`${quoted(title)}: ${quoted(mix.name)}`, register.figure(total), packs ? line`whole kits: ${plainFigure(packs, 'computed')}` : line`kits: ${notStatedRun()}`],
+      [line`${quoted(title)}: ${quoted(mix.name)}`, register.figure(total), kits ? line`whole kits: ${kits}` : line`kits: ${notStatedRun()}`],
       ...aggregates.map(({ product, mass, use }): Runs[] => [line`${quoted(title)}: ${quoted(product.name)}`, register.figure(mass), [quoted(use === 'filler' ? 'in the mix' : 'broadcast')]]),
     ]
   })
@@ -95,15 +100,25 @@ function areas({ given, quantities, register }: Floor): SpecTable {
   })
 }
 
-function sheetCell(sheets: readonly SheetSummary[], kind: SheetSummary['kind']): Runs {
+function sheetCell(sheets: readonly SheetSummary[], kind: SheetSummary['kind'], elsewhere: string | false): Runs {
   const found = sheets.filter((sheet) => sheet.kind === kind)
-  if (found.length === 0) return [plainFigure('no sheet loaded', 'not-stated')]
+  if (found.length === 0) return [elsewhere ? quoted(elsewhere) : plainFigure('no sheet loaded', 'not-stated')]
   return joined(found.map((sheet) => line`${quoted(sheet.title)}, ${measured(writtenDate(sheet.revisionDate))}${sheet.superseded ? line` (superseded)` : []}`), '; ')
 }
 
+const hasSheet = ({ sheets }: { sheets: readonly SheetSummary[] }, kind: SheetSummary['kind']) => sheets.some((sheet) => sheet.kind === kind)
+
 const sheetSchedule = ({ mixes, products }: Floor): SpecTable => table('sheets', {
   columns: [['Product or mix', 24], ['Maker', 12], ['Data sheet, revision', 32], ['Safety sheet, revision', 32]],
-  rows: [...mixes, ...products].map(({ name, maker, sheets }) => [[quoted(name)], [quoted(maker)], sheetCell(sheets, 'data'), sheetCell(sheets, 'safety')]),
+  rows: [
+    ...mixes.map(({ name, maker, sheets, parts }) => [[quoted(name)], [quoted(maker)], sheetCell(sheets, 'data', false), sheetCell(sheets, 'safety', parts.every(({ product }) => hasSheet(product, 'safety')) && 'one for each part, below')]),
+    ...products.map((product) => {
+      const ofMixes = mixes.filter(({ parts }) => parts.some((part) => part.product.id === product.id))
+      const parts = ofMixes.length > 0 && ofMixes.every((mix) => hasSheet(mix, 'data'))
+      const covered = ofMixes.length > 0 && ofMixes.every((mix) => hasSheet(mix, 'safety'))
+      return [[quoted(product.name)], [quoted(product.maker)], sheetCell(product.sheets, 'data', parts && 'that of the mix, above'), sheetCell(product.sheets, 'safety', covered && 'that of the mix, above')]
+    }),
+  ],
   note: 'Sheets at the revision that this section rests on.',
 })
 

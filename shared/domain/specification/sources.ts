@@ -22,7 +22,7 @@ export interface Register {
   /** Words that several facts state together, with the tags of all. */
   cite(text: string, facts: readonly Fact[]): Run
   /** A number worked out for the document itself. */
-  working(text: string, working: { formula: string; sum: string; source: string }): Run
+  working(text: string, working: { formula: string; sum: string; source: string; facts?: readonly Fact[] }): Run
   lists(): Lists
 }
 
@@ -46,9 +46,9 @@ export function createRegister(): Register {
   const cited = (text: string, origin: Origin): Run => ({
     kind: 'figure', text, known: knownOf[origin.kind], tags: [tagOf(origin)], citation: origin.kind === 'stated' ? origin.citation : null,
   })
-  const working: Register['working'] = (text, { formula, sum, source }) => ({
+  const working: Register['working'] = (text, { formula, sum, source, facts = [] }) => ({
     kind: 'figure', text, known: 'computed', citation: null,
-    tags: [once(lists.workings, 'W', { entry: { formula, sum, source, from: [] as string[] }, same: (one) => one.formula === formula && one.sum === sum })],
+    tags: [once(lists.workings, 'W', { entry: { formula, sum, source, from: [...new Set(facts.map(({ origin }) => tagOf(origin)))] }, same: (one) => one.formula === formula && one.sum === sum && one.source === source })],
   })
   const computedRun = (figure: Extract<KnownFigure, { kind: 'computed' }>, text: string): Run => {
     if (figure.working.formula === chosenFormula) return { kind: 'figure', text, known: 'chosen', tags: [], citation: null }

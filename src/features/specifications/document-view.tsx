@@ -137,7 +137,7 @@ function TableView({ title, columns, rows, note }: TableViewProps) {
             {rows.map(({ key, id, cells }) => (
               <tr key={key} id={id} className="break-inside-avoid border-b border-rule align-top target:bg-resin-wash">
                 {cells.map((cell, index) => (
-                  <td key={index} className="py-1 pr-2 break-words">
+                  <td key={index} className="py-1 pr-2 break-words whitespace-pre-line">
                     {cell}
                   </td>
                 ))}
