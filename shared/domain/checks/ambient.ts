@@ -1,7 +1,7 @@
 import { condensationPoint, dewPointMargin, marginBounds } from '../dew-point.ts'
 import { type Fact, factsOf, rangeOf } from '../fact.ts'
 import { figureOfFact } from '../figure.ts'
-import { formatNumber, formatQuantity, formatRange } from '../format.ts'
+import { formatNumber, formatQuantity, formatRange, unitText } from '../format.ts'
 import type { Range } from '../property.ts'
 import { type Quantity, convert, valueIn } from '../units.ts'
 import { computed } from '../working.ts'
@@ -110,6 +110,12 @@ function marginAgainst(fact: Fact, floor: Floor) {
   return [{ fact, limit, margin, least, status } as const]
 }
 
+/** In tenths, or in as many more places as it takes to tell a margin that is short of its limit from one that is not. */
+function marginInWords({ value, unit }: Quantity<MarginUnit>, limit: number): string {
+  const places = [1, 2, 3].find((decimals) => Number(value.toFixed(decimals)) < limit === value < limit) ?? 4
+  return `${formatNumber(Math.abs(value), places)} ${unitText(unit)} ${value < 0 ? 'below' : 'above'}`
+}
+
 function dewVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
   const margins = factsOf(mix.facts, 'dewPointMargin').flatMap((fact) => marginAgainst(fact, floor))
   const severest = (['stop', 'caution', 'met'] as const).flatMap((status) => margins.find((one) => one.status === status) ?? [])[0]
@@ -120,7 +126,7 @@ function dewVerdict({ course, mix }: LaidMix, floor: Floor): Verdict {
   const { status, margin, limit, least } = severest
   const { airTemperature: temperature, relativeHumidity, slabTemperature } = floor.input.conditions
   const { name } = condensationPoint({ temperature, relativeHumidity })
-  const place = margin.value < 0 ? `${formatQuantity({ ...margin, value: -margin.value })} below` : `${formatQuantity(margin)} above`
+  const place = marginInWords(margin, limit.min ?? 0)
   const says = `The slab at ${formatQuantity(slabTemperature)} is ${place} the ${name}; the sheet asks for ${formatRange(limit)}.`
   const unsure = `With common instruments (±0.5 °C, ±3 % RH) it may be ${formatQuantity(least)}.`
   return {
