@@ -2,7 +2,7 @@ import * as z from 'zod'
 import { mixFactsSchema } from './mix.ts'
 import { productFactsSchema } from './product.ts'
 import { quantitySchema } from './property.ts'
-import { type Dimension, dimensionOf, valueIn } from './units.ts'
+import { type Dimension, type Quantity, dimensionOf, valueIn } from './units.ts'
 
 /** Stages of a floor, from the slab upward. */
 export const stages = ['prep', 'fill', 'slurry', 'grind', 'prime', 'body', 'broadcast', 'seal', 'top', 'cove'] as const
@@ -36,9 +36,11 @@ export const preparationSchema = z.strictObject({
 
 const wrongUnit = { error: 'This unit measures something else.' }
 const measured = (dimension: Dimension) => quantitySchema.refine(({ unit }) => dimensionOf(unit) === dimension, wrongUnit)
-/** An amount of a dimension, above nothing. */
-const amount = (dimension: Dimension) =>
-  measured(dimension).refine(({ value }) => value >= 1e-6, { error: 'Give an amount above nothing.' })
+/** An amount above nothing, and not more than anybody could mean: what is worked out from it must be a number too. */
+const amount = (dimension: Dimension, most: Quantity) =>
+  measured(dimension)
+    .refine(({ value }) => value >= 1e-6, { error: 'Give an amount above nothing.' })
+    .refine((given) => dimensionOf(given.unit) !== dimension || valueIn(given, most.unit) <= most.value, { error: 'This is too much.' })
 /** Slab and air: wider than any place a floor is laid in, and short of where the formulae of vapour end. */
 const temperature = measured('temperature').refine(
   (given) => dimensionOf(given.unit) !== 'temperature' || (valueIn(given, '°C') >= -60 && valueIn(given, '°C') <= 100),
@@ -56,16 +58,19 @@ export const courseSchema = z.strictObject({
   mixId: z.string().nullable(),
   thickness: z
     .strictObject({
-      value: z.number().positive().min(1e-6).max(100_000),
+      value: z.number().positive().min(0.001).max(100_000),
       unit: z.enum(['mil', 'µm', 'mm', 'in']),
       film: z.enum(['wet', 'dry']),
     })
+    .refine((thickness) => valueIn(thickness, 'm') <= 1, { path: ['value'], error: 'No course is a meter thick.' })
     .nullable(),
-  spreadRate: z.strictObject({ value: z.number().positive().min(1e-6).max(100_000), unit: z.enum(['ft²/gal', 'm²/L']) }).nullable(),
+  spreadRate: z.strictObject({ value: z.number().positive().min(0.001).max(100_000), unit: z.enum(['ft²/gal', 'm²/L']) }).nullable(),
   /** Sand in the pail: mass per volume of mixed liquid resin. */
-  filler: z.strictObject({ productId: z.string(), loading: amount('density') }).nullable(),
+  filler: z.strictObject({ productId: z.string(), loading: amount('density', { value: 100, unit: 'kg/L' }) }).nullable(),
   /** Sand thrown on the wet film: mass per area. */
-  broadcast: z.strictObject({ productId: z.string(), rate: amount('consumption'), toRefusal: z.boolean() }).nullable(),
+  broadcast: z
+    .strictObject({ productId: z.string(), rate: amount('consumption', { value: 10_000, unit: 'kg/m²' }), toRefusal: z.boolean() })
+    .nullable(),
   preparation: preparationSchema.nullable(),
   /** Hours from the start of the floor's first course to the start of this one; null: as soon as the course beneath allows. */
   startsAfter: z.number().min(0).max(8760).nullable(),

@@ -30,6 +30,7 @@ const conditionEntries = Object.entries(conditionDimensions) as [keyof typeof co
 /** What no thing of this world has, by property and in a unit: solids of nothing, a density beyond that of metals. From memory. */
 const possible: Partial<Record<Property, Range>> = {
   density: { min: 0.01, max: 23, unit: 'kg/L' },
+  voc: { min: 0, max: 23, unit: 'kg/L' },
   volumeSolids: { min: 0.1, max: 100, unit: '%' },
   weightSolids: { min: 0, max: 100, unit: '%' },
   substrateRelativeHumidity: { min: 0, max: 100, unit: '%' },
@@ -38,13 +39,18 @@ const possible: Partial<Record<Property, Range>> = {
   spreadRate: { min: 1e-6, unit: 'm²/L' },
 }
 
+/** Hours: a century and more, longer than any floor. */
+const longest = 1e6
+
 /** True when every end of a range lies where the property can lie; only temperatures go below nothing. */
 function isPossible(property: Property, range: Range): boolean {
   const limits = possible[property]
   const signed = dimensionOf(range.unit) === 'temperature'
   return [range.min, range.max].every((end) => {
     if (end === undefined) return true
-    if (!limits) return signed ? valueIn({ value: end, unit: range.unit }, '°C') > -273.15 : end >= 0
+    if (signed) return valueIn({ value: end, unit: range.unit }, '°C') > -273.15
+    if (dimensionOf(range.unit) === 'time' && valueIn({ value: end, unit: range.unit }, 'h') > longest) return false
+    if (!limits) return end >= 0
     const value = valueIn({ value: end, unit: range.unit }, limits.unit)
     return value >= (limits.min ?? -Infinity) * (1 - 1e-12) && value <= (limits.max ?? Infinity) * (1 + 1e-12)
   })
