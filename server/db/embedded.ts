@@ -4,7 +4,6 @@ import { join } from 'node:path'
 import type { Worker } from 'node:worker_threads'
 import { startThread } from '../thread.ts'
 import { checkDataVersion } from './data-version.ts'
-import { lockFolder } from './folder-lock.ts'
 import type { Order, PgliteWorkerData } from './pglite-worker.ts'
 
 export interface Embedded {
@@ -22,16 +21,12 @@ export interface EmbeddedOptions {
   onLost: (reason: string) => void
 }
 
-/** Starts PGlite on `DATA_DIR/database` in a thread of its own, behind a socket in a folder that only this user may enter. */
+/** Starts PGlite on `DATA_DIR/database`, which the caller has locked, in a thread of its own, behind a socket in a folder that only this user may enter. */
 export async function startEmbedded({ dataDir, loadFrom, silenceLimitMs, onLost }: EmbeddedOptions): Promise<Embedded> {
   const folder = join(dataDir, 'database')
-  const lock = await lockFolder(dataDir)
   const sockets = mkdtempSync(join(tmpdir(), 'wc-'))
   chmodSync(sockets, 0o700)
-  const freeFolder = async () => {
-    rmSync(sockets, { recursive: true, force: true })
-    await lock.release()
-  }
+  const removeSockets = () => rmSync(sockets, { recursive: true, force: true })
   try {
     checkDataVersion(dataDir)
     if (!existsSync(folder)) mkdirSync(folder, { mode: 0o700 })
@@ -44,12 +39,12 @@ export async function startEmbedded({ dataDir, loadFrom, silenceLimitMs, onLost 
         try {
           await thread.end()
         } finally {
-          await freeFolder()
+          removeSockets()
         }
       },
     }
   } catch (error) {
-    await freeFolder()
+    removeSockets()
     throw error
   }
 }

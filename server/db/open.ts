@@ -3,7 +3,8 @@ import { type NodePgDatabase, drizzle } from 'drizzle-orm/node-postgres'
 import pg from 'pg'
 import { AskingPool, markTransactions } from './asking-pool.ts'
 import { startEmbedded } from './embedded.ts'
-import { migrateDatabase } from './migrate.ts'
+import { lockFolder } from './folder-lock.ts'
+import { migrateDatabase, migrationsFolder } from './migrate.ts'
 import type { Order } from './pglite-worker.ts'
 import * as schema from './schema/index.ts'
 
@@ -24,7 +25,7 @@ export interface OpenDatabase {
 
 export interface OpenOptions {
   dataDir: string
-  databaseUrl?: string
+  databaseUrl?: string | undefined
   log?: (line: string) => void
   /** After this the caller gets an error and the database counts as not answering until it does again. */
   queryTimeLimitMs?: number
@@ -32,16 +33,39 @@ export interface OpenOptions {
   silenceLimitMs?: number
   /** The embedded database has ended by itself and will not come back in this process. */
   onLost?: (reason: string) => void
+  /** Another folder of migrations, or none: the tables stay as they are. */
+  migrations?: string
   /** A dump of a migrated data folder to begin with. */
   loadFrom?: string
 }
 
 const defaultTimeLimit = 20_000
 
-/** Opens the database, embedded in `dataDir` or on the server of `databaseUrl`, and brings its tables up to date. */
+/**
+ * Opens the database, embedded in `dataDir` or on the server of `databaseUrl`, and brings its tables up to date.
+ * The data folder is locked meanwhile, whichever it is: uploads and generated secrets are there too.
+ */
 export async function openDatabase(options: OpenOptions): Promise<OpenDatabase> {
-  const { dataDir, databaseUrl, queryTimeLimitMs = defaultTimeLimit, silenceLimitMs = 60_000, log = () => undefined } = options
-  mkdirSync(dataDir, { recursive: true, mode: 0o700 })
+  mkdirSync(options.dataDir, { recursive: true, mode: 0o700 })
+  const lock = await lockFolder(options.dataDir)
+  try {
+    const database = await openLocked(options)
+    return { ...database, close: () => database.close().finally(() => lock.release()) }
+  } catch (error) {
+    await lock.release()
+    throw error
+  }
+}
+
+async function openLocked(options: OpenOptions): Promise<OpenDatabase> {
+  const {
+    dataDir,
+    databaseUrl,
+    queryTimeLimitMs = defaultTimeLimit,
+    silenceLimitMs = 60_000,
+    migrations = migrationsFolder,
+    log = () => undefined,
+  } = options
   const onLost = (reason: string) => {
     log(`The embedded database stopped: ${reason}. Nothing that was saved is lost; see that the disk has room and start Wearcourse again.`)
     options.onLost?.(reason)
@@ -71,7 +95,7 @@ export async function openDatabase(options: OpenOptions): Promise<OpenDatabase> 
     await embedded?.close()
   }
   try {
-    await migrateDatabase(db, pool, embedded ? 'embedded' : 'server')
+    if (migrations !== 'none') await migrateDatabase(db, pool, { kind: embedded ? 'embedded' : 'server', folder: migrations })
   } catch (error) {
     await close()
     throw error

@@ -21,11 +21,7 @@ export function FigureView({ figure, text, withCondition = false }: FigureViewPr
   const { system } = useUnitSystem()
   if (figure.kind === 'not-stated') {
     const { of, because, ask } = figure.missing
-    return (
-      <span className="text-pencil" title={`${of}${because ? `: ${because}` : ''}. Ask ${ask}.`}>
-        {notStatedText}
-      </span>
-    )
+    return <Explained said={notStatedText} muted>{`${of}${because ? `: ${because}` : ''}. Ask ${ask}.`}</Explained>
   }
   const shown = text ?? formatFigure(figure, system)
   if (figure.kind === 'computed') return <ComputedValue working={figure.working} from={figure.from}>{shown}</ComputedValue>
@@ -46,14 +42,17 @@ export function OriginValue({ origin, children }: { origin: Origin; children: Re
         {children} <em className="text-caution not-italic">typical, verify</em>
       </span>
     )
+  return <Explained said={children}>{`Entered by ${origin.by}, ${origin.at.slice(0, 10)}: ${origin.reason}`}</Explained>
+}
+
+/** Words that tell more when they are opened, by pointer or by keyboard. */
+function Explained({ said, muted = false, children }: { said: ReactNode; muted?: boolean; children: string }) {
   return (
     <details className="inline-block text-left align-top">
-      <summary className="cursor-pointer list-none text-right [&::-webkit-details-marker]:hidden" title="Entered by hand. Open for the reason.">
-        {children}
+      <summary className={`cursor-pointer list-none [&::-webkit-details-marker]:hidden ${muted ? 'text-pencil' : ''}`} title={children}>
+        {said}
       </summary>
-      <span className="block max-w-72 text-small text-pencil">
-        Entered by {origin.by}, {origin.at.slice(0, 10)}: {origin.reason}
-      </span>
+      <span className="block max-w-72 text-small text-pencil">{children}</span>
     </details>
   )
 }

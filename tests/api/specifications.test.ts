@@ -9,6 +9,12 @@ import type { Job } from '../../shared/api/jobs.ts'
 import type { SpecIssue, Specification } from '../../shared/api/specifications.ts'
 import { auditTrail } from '../../server/db/schema/firm.ts'
 import { sheetRevisions } from '../../server/db/schema/sheets.ts'
+import { evaluate } from '../../shared/domain/evaluate.ts'
+import { phaseOf } from '../../shared/domain/hazard-phases.ts'
+import { numberedArticles } from '../../shared/domain/specification/numbering.ts'
+import { registersOf } from '../../shared/domain/specification/registers.ts'
+import { titleRows } from '../../shared/domain/specification/title-block.ts'
+import { ghsStatement } from '../../shared/reference/ghs.ts'
 import { type Run, type SpecDocument, plainText, specDocumentSchema } from '../../shared/domain/specification/document.ts'
 import { type TestApp, testApp } from '../setup/app.ts'
 import { specifiedJob } from '../setup/specified-job.ts'
@@ -121,6 +127,30 @@ describe('specifications', () => {
     expect(allLines(document).map(plainText).find((line) => line.includes('ASTM F2170 or'))).toContain('10 tests [W')
     // 1604.17 ft²·mil/gal ÷ 150 ft²/gal = 10.7 mil
     expect(document.workings.map(({ sum }) => sum)).toContainEqual('1,604.17 ft²·mil/gal ÷ 150 ft²/gal = 10.7 mil')
+  })
+
+  it.runIf(poppler)('prints no number that is not a fact, a working, a rule named or a number of its own paragraphs and pages', async () => {
+    const { document } = await read()
+    const { body } = await bytes('draft.pdf')
+    const text = poppled('pdftotext', body, ['-'])
+    if (!job.buildUp) throw new Error('no build-up')
+    const { input } = job.buildUp
+    const { findings } = evaluate(input)
+    const rules = input.courses.map((course) => phaseOf(course, input))
+    const statements = allLines(document).flat().flatMap(({ text: words }) => (/^(EUH|H|P)\d{3}/.test(words) ? [words] : []))
+    expect(statements.length).toBeGreaterThan(0)
+    for (const words of statements) expect(`${ghsStatement(words.split(' ')[0] ?? '') ?? ''}`, words).toContain(words.slice(words.indexOf(' ') + 1))
+    const standards = allLines(document).flat().flatMap((run) => (run.kind === 'figure' && run.known === 'standard' ? [run.text] : []))
+    const own = document.parts.flatMap((part) => numberedArticles(part)).flatMap(({ number, items }) => [number, ...items.map(({ label }) => label)])
+    const temperatures = document.schedules.find(({ id }) => id === 'windows')?.columns.map(({ label }) => label)
+    const pages = Number(/Pages:\s+(\d+)/.exec(poppled('pdfinfo', body))?.[1])
+    const kept = [job, input, document.header, document.sources, document.workings, document.typicals, findings, rules, standards, own, temperatures, registersOf(document), titleRows(document.header)]
+    const numbersOf = (words: string) => (words.match(/\d[\d,]*(\.\d+)?/g) ?? []).map((one) => Number(one.replaceAll(',', '')))
+    const known = new Set([...numbersOf(JSON.stringify(kept).replace(/[\da-f]{8}(-[\da-f]{4}){3}-[\da-f]{12}/g, '')), ...Array.from({ length: pages }, (_, index) => index + 1)])
+    const strange = numbersOf(text).filter((number) => !known.has(number))
+    expect(strange).toEqual([])
+    expect([777, 12.5, 33].filter((number) => known.has(number))).toEqual([])
+    expect(numbersOf(text).length).toBeGreaterThan(500)
   })
 
   it('changes title and number, and tells of a change made meanwhile', async () => {

@@ -1,21 +1,22 @@
 import { type SubmitEvent, useState } from 'react'
 import { useNavigate, useParams } from 'react-router'
 import { type MixRecord, mixBody, newMixBody } from '../../../shared/api/catalogue.ts'
-import type { ComponentPart } from '../../../shared/domain/mix.ts'
 import { chemistries } from '../../../shared/domain/product.ts'
 import { sentenceOf } from '../../lib/api.ts'
 import { useSubmit } from '../../lib/form.ts'
+import { useLeaveGuard } from '../../lib/leave-guard.ts'
 import { paths } from '../../lib/paths.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { Button } from '../../ui/button.tsx'
 import { AreaField, SelectField, TextField } from '../../ui/field.tsx'
+import { LeaveDialog } from '../../ui/leave-dialog.tsx'
 import { Card, Page } from '../../ui/page.tsx'
 import { ProblemSummary } from '../../ui/problem-summary.tsx'
-import { ProductPicker } from './product-picker.tsx'
+import { ConflictNotice, useConflict } from './conflict.tsx'
+import { type MixDraft, type MixFormPart, bodyOfMix, draftOfMix, mixDifferences, mixFields } from './mix-draft.ts'
+import { PartsFields } from './parts-fields.tsx'
 import { useCatalogueChanges, useMakers, useRecord } from './queries.ts'
-import { ratioFrom } from './value-text.ts'
-
-const partNames = ['A', 'B', 'C'] as const satisfies readonly ComponentPart[]
+import { RatioFields } from './ratio-fields.tsx'
 
 export function NewMixPage() {
   return <MixForm mix={undefined} />
@@ -31,55 +32,45 @@ export function EditMixPage() {
   )
 }
 
-type Chosen = { id: string; name: string } | null
-
 /** Name, parts and, for a new mix of several parts, the ratio with its basis and how it is known. */
 function MixForm({ mix }: { mix: MixRecord | undefined }) {
-  const { addMix, changeMix } = useCatalogueChanges()
-  const makers = useMakers()
+  const { addMix, changeMix, readMix } = useCatalogueChanges()
   const navigate = useNavigate()
-  const [parts, setParts] = useState<Chosen[]>(mix?.parts.map(({ product }) => ({ id: product.id, name: product.name })) ?? [null, null])
-  const { submit, problems, busy } = useSubmit(mix ? mixBody : newMixBody, (body) => (mix ? changeMix(mix.id, { ...mixBody.parse(body), version: mix.version }) : addMix(newMixBody.parse(body))))
-  const { fields } = problems
+  const { base, theirs, watch, settle } = useConflict(mix, readMix)
+  const [began] = useState(() => draftOfMix(mix))
+  const [draft, setDraft] = useState(began)
+  const change = (part: Partial<MixDraft>) => setDraft((before) => ({ ...before, ...part }))
+  const guard = useLeaveGuard(JSON.stringify(draft) !== JSON.stringify(began))
+  const { submit, problems, busy } = useSubmit(mix ? mixBody : newMixBody, (body) =>
+    watch(base ? changeMix(base.id, { ...mixBody.parse(body), version: base.version }) : addMix(newMixBody.parse(body))),
+  )
+  const shown = { ...problems, fields: mixFields(problems.fields) }
   const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
-    const { ratioText, ratioBasis, ratioReason, name, maker, chemistry, color, note } = Object.fromEntries(new FormData(event.currentTarget))
-    const chosen = parts.map((part, index) => ({ part: partNames[index], productId: part?.id ?? '' }))
-    const ratio = parts.length > 1 ? { value: { parts: ratioFrom(typeof ratioText === 'string' ? ratioText : ''), ...(ratioBasis ? { basis: ratioBasis } : {}) }, reason: ratioReason } : null
-    const kept = await submit({ name, maker, chemistry, color, note, parts: chosen, ...(mix ? {} : { ratio }) })
-    if (kept) await navigate(paths.mix(kept.id))
+    const kept = await submit(bodyOfMix(draft, !mix))
+    if (!kept) return
+    guard.pass()
+    await navigate(paths.mix(kept.id))
   }
-  const put = (index: number, product: Chosen) => setParts(parts.map((part, at) => (at === index ? product : part)))
+  const takeTheirs = () => {
+    if (theirs) setDraft(draftOfMix(theirs))
+    settle()
+  }
   return (
     <Page title={mix ? `Edit ${mix.name}` : 'Add a mix'}>
-      <Card className="max-w-3xl">
-        <form onSubmit={onSubmit} className="grid gap-4 p-4 sm:grid-cols-2">
-          <div className="sm:col-span-2">
-            <ProblemSummary problems={problems} />
-            <TextField label="Name" name="name" defaultValue={mix?.name} error={fields['name']} />
+      <LeaveDialog guard={guard} />
+      <Card className="max-w-2xl">
+        <form onSubmit={(event) => void onSubmit(event)} className="grid gap-4 p-4 sm:grid-cols-2" noValidate>
+          <div className="empty:hidden sm:col-span-2">
+            {theirs ? <ConflictNotice differences={mixDifferences(draftOfMix(theirs), draft)} onMine={settle} onTheirs={takeTheirs} /> : <ProblemSummary problems={shown} />}
           </div>
-          <TextField label="Maker" name="maker" list="makers" defaultValue={mix?.maker} error={fields['maker']} autoComplete="off" />
-          <datalist id="makers">{makers.data?.items.map((maker) => <option key={maker} value={maker} />)}</datalist>
-          <SelectField label="Chemistry" name="chemistry" defaultValue={mix?.chemistry ?? 'epoxy'} error={fields['chemistry']}>
-            {chemistries.map((chemistry) => (
-              <option key={chemistry}>{chemistry}</option>
-            ))}
-          </SelectField>
-          <TextField label="Colour it cures to" name="color" type="color" defaultValue={mix?.color ?? '#8f9a98'} error={fields['color']} help="For the drawing of the floor." />
-          <AreaField label="Note" name="note" defaultValue={mix?.note} error={fields['note']} />
-          <fieldset className="grid gap-4 sm:col-span-2 sm:grid-cols-3">
-            <legend className="mb-1 font-semibold">Parts</legend>
-            {parts.map((part, index) => (
-              <ProductPicker key={index} label={`Part ${partNames[index]}`} name={`parts.${index}.productId`} chosen={part} onChoose={(product) => put(index, product)} error={fields[`parts.${index}.productId`]} />
-            ))}
-          </fieldset>
+          <MixFields draft={draft} change={change} fields={shown.fields} />
+          <PartsFields draft={draft} change={change} fields={shown.fields} mix={base} />
+          {!mix && draft.parts.length > 1 && <RatioFields draft={draft} change={change} fields={shown.fields} />}
           <div className="flex gap-2 sm:col-span-2">
-            {parts.length < 3 && <Button onClick={() => setParts([...parts, null])}>Add part {partNames[parts.length]}</Button>}
-            {parts.length > 1 && <Button onClick={() => setParts(parts.slice(0, -1))}>Remove part {partNames[parts.length - 1]}</Button>}
-          </div>
-          {!mix && parts.length > 1 && <RatioFields fields={fields} />}
-          <div className="flex gap-2 sm:col-span-2">
-            <Button type="submit" look="primary" busy={busy}>{mix ? 'Save' : 'Add'}</Button>
+            <Button type="submit" look="primary" busy={busy}>
+              {mix ? 'Save' : 'Add the mix'}
+            </Button>
             <Button onClick={() => void navigate(mix ? paths.mix(mix.id) : paths.mixes)}>Cancel</Button>
           </div>
         </form>
@@ -88,17 +79,23 @@ function MixForm({ mix }: { mix: MixRecord | undefined }) {
   )
 }
 
-function RatioFields({ fields }: { fields: Record<string, string> }) {
+function MixFields({ draft, change, fields }: MixFormPart) {
+  const makers = useMakers()
+  const field = (name: 'name' | 'maker' | 'chemistry' | 'color' | 'note', label: string) => ({
+    label, name, value: draft[name], error: fields[name], onChange: (event: { target: { value: string } }) => change({ [name]: event.target.value }),
+  })
   return (
-    <fieldset className="grid gap-4 sm:col-span-2 sm:grid-cols-3">
-      <legend className="mb-1 font-semibold">Ratio</legend>
-      <TextField label="A : B" name="ratioText" placeholder="2 : 1" error={fields['ratio.value.parts'] ?? fields['ratio.value']} help="In the order of the parts." />
-      <SelectField label="Basis" name="ratioBasis" defaultValue="volume" error={fields['ratio.value.basis']}>
-        <option value="volume">by volume</option>
-        <option value="weight">by weight</option>
-        <option value="">not stated</option>
+    <>
+      <TextField {...field('name', 'Name')} help="As on the data sheet, without the component." className="sm:col-span-2" autoComplete="off" />
+      <TextField {...field('maker', 'Maker')} list="makers" autoComplete="off" />
+      <datalist id="makers">{makers.data?.items.map((maker) => <option key={maker} value={maker} />)}</datalist>
+      <SelectField {...field('chemistry', 'Chemistry')}>
+        {chemistries.map((chemistry) => (
+          <option key={chemistry}>{chemistry}</option>
+        ))}
       </SelectField>
-      <TextField label="How it is known" name="ratioReason" error={fields['ratio.reason']} placeholder="Label of the kit" help="Once its data sheet is attached, tie the ratio to its page." />
-    </fieldset>
+      <AreaField {...field('note', 'Note')} />
+      <TextField {...field('color', 'Colour it cures to')} type="color" help="For the drawing of the floor." />
+    </>
   )
 }

@@ -8,8 +8,8 @@ import { Asking } from '../../ui/asking.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { type ListColumns, ListTable } from '../../ui/list-table.tsx'
 import { Card, Notice, Page } from '../../ui/page.tsx'
-import { ListFilters } from './list-filters.tsx'
-import { useMixes } from './queries.ts'
+import { ListFilters, filtersOf } from './list-filters.tsx'
+import { exportAddress, useMixes } from './queries.ts'
 
 const columns: ListColumns<MixRow> = [
   {
@@ -30,7 +30,7 @@ const columns: ListColumns<MixRow> = [
   },
   { id: 'maker', header: 'Maker', accessorKey: 'maker' },
   { id: 'chemistry', header: 'Chemistry', accessorKey: 'chemistry' },
-  { id: 'parts', header: 'Parts', accessorKey: 'parts', enableSorting: false, meta: { numeric: true } },
+  { id: 'parts', header: 'Parts', enableSorting: false, cell: ({ row: { original } }) => <span className="text-small text-pencil">{original.parts.join(' + ')}</span> },
   { id: 'facts', header: 'Values', accessorKey: 'facts', enableSorting: false, meta: { numeric: true } },
   { id: 'sheets', header: 'Sheets', accessorKey: 'sheets', enableSorting: false, meta: { numeric: true } },
 ]
@@ -38,12 +38,24 @@ const columns: ListColumns<MixRow> = [
 /** All mixes: what goes on the floor. */
 export function MixesPage() {
   const address = useListAddress('name')
-  const filters = Object.fromEntries(['maker', 'chemistry', 'status'].map((name) => [name, address.filter(name) || undefined]))
+  const filters = filtersOf(address, false)
   const mixes = useMixes({ q: address.q, sort: address.sort, cursor: address.cursor, ...filters })
   const mayWrite = useCan('catalogue:write')
   const filtered = address.q !== '' || Object.values(filters).some(Boolean)
   return (
-    <Page title="Mixes" under="What goes on the floor: one product alone, or parts at a ratio." actions={mayWrite && <Link to={paths.newMix} className={buttonClass('primary')}>Add a mix</Link>}>
+    <Page title="Mixes" under="What goes on the floor: one product alone, or parts at a ratio." actions={
+        <>
+          <a href={exportAddress('mixes', { q: address.q, sort: address.sort, ...filters })} download className={buttonClass()}>
+            Export CSV
+          </a>
+          {mayWrite && (
+            <Link to={paths.newMix} className={buttonClass('primary')}>
+              Add a mix
+            </Link>
+          )}
+        </>
+      }
+    >
       <Card>
         <ListFilters address={address} withKind={false} />
         <Asking query={mixes} says={sentenceOf}>

@@ -1,63 +1,108 @@
 import Fuse from 'fuse.js'
-import { useMemo, useState } from 'react'
+import { type KeyboardEvent, useId, useMemo, useState } from 'react'
 import type { ProductRow } from '../../../shared/api/catalogue.ts'
 import { TextField } from '../../ui/field.tsx'
 import { useProducts } from './queries.ts'
 
+export interface Chosen {
+  id: string
+  name: string
+  maker: string
+}
+
 interface ProductPickerProps {
   label: string
   name: string
-  chosen: { id: string; name: string } | null
-  onChoose: (product: { id: string; name: string } | null) => void
+  chosen: Chosen | null
+  onChoose: (product: Chosen | null) => void
+  /** Products that are chosen elsewhere in the form. */
+  without: readonly string[]
   error?: string | undefined
 }
 
 /** Letters typed wrong still find it; 0.3 lets about one in three differ. */
-const likeness = { keys: ['name', 'maker', 'kind'], threshold: 0.3, ignoreLocation: true }
+const likeness = { keys: ['name', 'maker', 'kind', 'chemistry'], threshold: 0.3, ignoreLocation: true }
+const most = 8
 
-/** Finds a product by a few letters. What the server found is put in order here on every key. */
-export function ProductPicker({ label, name, chosen, onChoose, error }: ProductPickerProps) {
-  const [typed, setTyped] = useState('')
+/** What the server found for the letters typed, put in order here on every key. */
+function useFound(typed: string, without: readonly string[]): { rows: ProductRow[]; waiting: boolean } {
   const products = useProducts({ q: typed, sort: 'name', limit: '100', status: 'active' })
   const items = products.data?.items
-  const found = useMemo(() => {
-    const rows: ProductRow[] = items ?? []
-    return typed === '' ? rows.slice(0, 8) : new Fuse(rows, likeness).search(typed, { limit: 8 }).map(({ item }) => item)
-  }, [items, typed])
-  if (chosen)
-    return (
-      <div>
-        <p className="font-semibold">{label}</p>
-        <p className="flex min-h-9 items-center gap-3">
-          {chosen.name}
-          <button type="button" name={name} className="text-resin underline" onClick={() => onChoose(null)}>
-            Choose another
-          </button>
-        </p>
-        {error && <p className="font-semibold text-stop">{error}</p>}
-      </div>
-    )
+  const rows = useMemo(() => {
+    const offered = (items ?? []).filter(({ id }) => !without.includes(id))
+    if (typed.trim() === '') return offered.slice(0, most)
+    const alike = new Fuse(offered, likeness).search(typed, { limit: most }).map(({ item }) => item)
+    return alike.length > 0 ? alike : offered.slice(0, most)
+  }, [items, typed, without])
+  return { rows, waiting: products.isPending }
+}
+
+/** Finds a product by a few letters: arrow keys and Enter choose, Escape closes. */
+export function ProductPicker({ label, name, chosen, onChoose, without, error }: ProductPickerProps) {
+  if (!chosen) return <ProductSearch label={label} name={name} onChoose={onChoose} without={without} error={error} />
   return (
     <div>
-      <TextField label={label} name={name} autoComplete="off" value={typed} error={error} placeholder="Type a few letters" onChange={(event) => setTyped(event.target.value)} />
-      <ul className="border border-t-0 border-rule">
-        {found.map((product) => (
-          <li key={product.id}>
-            <button
-              type="button" className="flex min-h-9 w-full items-center justify-between gap-3 px-2 py-1 text-left hover:bg-resin-wash focus:bg-resin-wash"
-              onClick={() => {
-                onChoose({ id: product.id, name: product.name })
-                setTyped('')
-              }}
-            >
-              <span>{product.name}</span>
-              <span className="text-pencil">
-                {product.maker}, {product.kind}
-              </span>
-            </button>
+      <p className="mb-1 font-semibold">{label}</p>
+      <p className="flex min-h-9 flex-wrap items-center justify-between gap-x-4 border border-rule px-2 py-1">
+        <span>
+          {chosen.name} <span className="text-pencil">{chosen.maker}</span>
+        </span>
+        <button type="button" name={name} className="text-resin underline" aria-label={`Choose another product for ${label}`} onClick={() => onChoose(null)}>
+          Choose another
+        </button>
+      </p>
+      {error && <p className="mt-1 font-semibold text-stop">{error}</p>}
+    </div>
+  )
+}
+
+function ProductSearch({ label, name, onChoose, without, error }: Omit<ProductPickerProps, 'chosen'>) {
+  const listId = useId()
+  const [typed, setTyped] = useState('')
+  const [open, setOpen] = useState(false)
+  const [at, setAt] = useState(0)
+  const { rows, waiting } = useFound(typed, without)
+  const lit = Math.min(at, rows.length - 1)
+  const choose = (row: ProductRow | undefined) => row && onChoose({ id: row.id, name: row.name, maker: row.maker })
+  const onKeyDown = (event: KeyboardEvent) => {
+    const step = { ArrowDown: 1, ArrowUp: -1 }[event.key]
+    if (step !== undefined) {
+      setOpen(true)
+      setAt(open ? Math.max(0, Math.min(rows.length - 1, lit + step)) : 0)
+    } else if (event.key === 'Enter' && open && rows.length > 0) choose(rows[lit])
+    else if (event.key === 'Escape' && open) setOpen(false)
+    else return
+    event.preventDefault()
+  }
+  return (
+    <div onBlur={(event) => !event.currentTarget.contains(event.relatedTarget) && setOpen(false)}>
+      <TextField
+        label={label} name={name} autoComplete="off" value={typed} error={error} placeholder="Name, maker or kind" role="combobox" aria-expanded={open} aria-controls={listId} aria-autocomplete="list"
+        aria-activedescendant={open && rows.length > 0 ? `${listId}-${lit}` : undefined} onFocus={() => setOpen(true)} onKeyDown={onKeyDown}
+        onChange={(event) => {
+          setTyped(event.target.value)
+          setAt(0)
+          setOpen(true)
+        }}
+      />
+      <ul id={listId} role="listbox" aria-label={`Products for ${label}`} className={open ? 'border border-t-0 border-pencil bg-card' : 'hidden'}>
+        {rows.map((product, index) => (
+          // eslint-disable-next-line jsx-a11y/click-events-have-key-events -- the keys are the input's: focus stays there
+          <li
+            key={product.id} id={`${listId}-${index}`} role="option" aria-selected={index === lit} tabIndex={-1} onMouseDown={(event) => event.preventDefault()} onClick={() => choose(product)}
+            className={`flex min-h-9 cursor-pointer flex-wrap items-center justify-between gap-x-3 px-2 py-1 hover:bg-resin-wash ${index === lit ? 'bg-resin-wash' : ''}`}
+          >
+            <span>{product.name}</span>
+            <span className="text-pencil">
+              {product.maker}, {product.kind}
+            </span>
           </li>
         ))}
-        {found.length === 0 && <li className="px-2 py-1 text-pencil">Nothing found. Add the product first.</li>}
+        {rows.length === 0 && (
+          <li role="option" aria-selected="false" aria-disabled="true" className="px-2 py-1 text-pencil">
+            {waiting ? 'Looking …' : 'Nothing found. Add the product first.'}
+          </li>
+        )}
       </ul>
     </div>
   )

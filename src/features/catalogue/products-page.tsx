@@ -8,8 +8,8 @@ import { Asking } from '../../ui/asking.tsx'
 import { buttonClass } from '../../ui/button.tsx'
 import { type ListColumns, ListTable } from '../../ui/list-table.tsx'
 import { Card, Notice, Page } from '../../ui/page.tsx'
-import { ListFilters } from './list-filters.tsx'
-import { useProducts } from './queries.ts'
+import { ListFilters, filtersOf } from './list-filters.tsx'
+import { exportAddress, useProducts } from './queries.ts'
 
 const columns: ListColumns<ProductRow> = [
   {
@@ -35,12 +35,24 @@ const columns: ListColumns<ProductRow> = [
 /** All products, with search that forgives typing errors. */
 export function ProductsPage() {
   const address = useListAddress('name')
-  const filters = Object.fromEntries(['kind', 'maker', 'chemistry', 'status'].map((name) => [name, address.filter(name) || undefined]))
+  const filters = filtersOf(address, true)
   const products = useProducts({ q: address.q, sort: address.sort, cursor: address.cursor, ...filters })
   const mayWrite = useCan('catalogue:write')
   const filtered = address.q !== '' || Object.values(filters).some(Boolean)
   return (
-    <Page title="Products" actions={mayWrite && <Link to={paths.newProduct} className={buttonClass('primary')}>Add a product</Link>}>
+    <Page title="Products" actions={
+        <>
+          <a href={exportAddress('products', { q: address.q, sort: address.sort, ...filters })} download className={buttonClass()}>
+            Export CSV
+          </a>
+          {mayWrite && (
+            <Link to={paths.newProduct} className={buttonClass('primary')}>
+              Add a product
+            </Link>
+          )}
+        </>
+      }
+    >
       <Card>
         <ListFilters address={address} withKind />
         <Asking query={products} says={sentenceOf}>

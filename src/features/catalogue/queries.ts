@@ -1,7 +1,7 @@
 import { keepPreviousData, useQuery, useQueryClient } from '@tanstack/react-query'
 import type * as z from 'zod'
 import { type FactBody, type MixRecord, type ProductRecord, catalogueEndpoints as wire } from '../../../shared/api/catalogue.ts'
-import { call } from '../../lib/api.ts'
+import { addressOf, call } from '../../lib/api.ts'
 
 export type RecordKind = 'product' | 'mix'
 type ListQuery = Record<string, string | undefined>
@@ -35,6 +35,11 @@ export function useRecord(kind: RecordKind, id: string) {
   })
 }
 
+/** The address of the list as CSV, with the same search, filters and order. */
+export function exportAddress(kind: 'products' | 'mixes', query: ListQuery): string {
+  return addressOf(kind === 'products' ? wire.exportProducts : wire.exportMixes, { query })
+}
+
 /** Everything that changes the catalogue; what rests on it is asked for anew. */
 export function useCatalogueChanges() {
   const client = useQueryClient()
@@ -44,6 +49,8 @@ export function useCatalogueChanges() {
     return answer
   }
   return {
+    readProduct: (productId: string) => call(wire.readProduct, { params: { productId } }),
+    readMix: (mixId: string) => call(wire.readMix, { params: { mixId } }),
     addProduct: (body: z.input<typeof wire.addProduct.body>) => done(call(wire.addProduct, { body })),
     changeProduct: (productId: string, body: z.input<typeof wire.changeProduct.body>) => done(call(wire.changeProduct, { params: { productId }, body })),
     addMix: (body: z.input<typeof wire.addMix.body>) => done(call(wire.addMix, { body })),

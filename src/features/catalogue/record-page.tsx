@@ -8,7 +8,7 @@ import { useCan } from '../../lib/user.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { Notice, Page } from '../../ui/page.tsx'
-import { HazardsCard } from './hazards-card.tsx'
+import { HazardsCard, TransportCard } from './hazards-card.tsx'
 import { HistoryCard } from './history-card.tsx'
 import { NotStatedCard } from './not-stated-card.tsx'
 import { PartsCard } from './parts-card.tsx'
@@ -66,6 +66,7 @@ function RecordView({ kind, record }: { kind: RecordKind; record: ProductRecord 
         <div className="grid content-start gap-5">
           <SheetsCard record={record} />
           <HazardsCard record={record} />
+          <TransportCard record={record} />
           <UsesCard uses={record.usedIn} />
           <HistoryCard kind={kind} id={record.id} />
         </div>
