@@ -82,7 +82,3 @@ export const silicaTasks = {
     indoors: none,
   },
 } as const satisfies Record<string, SilicaTask>
-export type SilicaTaskName = keyof typeof silicaTasks
-
-/** Air that the collector of a handheld grinder must move: 25 cfm per inch of wheel. Source: 29 CFR 1926.1153 Table 1, row (xii). */
-export const collectorAir = { cfmPerInch: 25 } as const
