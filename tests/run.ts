@@ -34,9 +34,36 @@ function browser(): void {
 browser()
 step('Types', process.execPath, node('typescript/bin/tsc', '-p', '.'))
 step('Lint', process.execPath, node('eslint/bin/eslint.js', '.', '--max-warnings', '0'))
-step('Format', process.execPath, node('prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '**/*.{ts,tsx,js,cjs,mjs,css,html,json,md}'))
+step(
+  'Format',
+  process.execPath,
+  node('prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '**/*.{ts,tsx,js,cjs,mjs,css,html,json,md}'),
+)
 step('Dead code', process.execPath, node('knip/bin/knip.js'))
-step('Directions', process.execPath, node('dependency-cruiser/bin/dependency-cruise.mjs', 'src', 'server', 'shared', 'tests', '--config', '.dependency-cruiser.cjs', '--output-type', 'err'))
+step(
+  'Directions',
+  process.execPath,
+  node(
+    'dependency-cruiser/bin/dependency-cruise.mjs',
+    'src',
+    'server',
+    'shared',
+    'tests',
+    '--config',
+    '.dependency-cruiser.cjs',
+    '--output-type',
+    'err',
+  ),
+)
 step('Unit, reference and API tests', process.execPath, node('vitest/vitest.mjs', 'run', '--project', 'unit'))
+// The quick ones of `npm run test:postgres`, which runs them all.
+const onServer = ['catalogue', 'build-ups', 'session', 'every-endpoint', 'one-connection'].map((name) => `tests/api/${name}.test.ts`)
+step('The same on a PostgreSQL server', process.execPath, [
+  '--import',
+  'tsx',
+  join(root, 'tests/setup/postgres.ts'),
+  ...onServer,
+  'server/db/backup.test.ts',
+])
 step('Build', process.execPath, [join(root, 'server/start.mjs'), 'build'])
 step('Journeys in the browser', process.execPath, node('vitest/vitest.mjs', 'run', '--project', 'journeys'))

@@ -3,6 +3,7 @@ import { readFileSync, writeFileSync } from 'node:fs'
 import { cp, mkdtemp, readdir, rm, stat } from 'node:fs/promises'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
+import pg from 'pg'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { openDiskStore } from '../files/store.ts'
 import { fillDemo } from './demo/fill.ts'
@@ -13,6 +14,7 @@ import { restoreBackup } from './restore-backup.ts'
 const folder = await mkdtemp(join(tmpdir(), 'wearcourse-backup-'))
 afterAll(() => rm(folder, { recursive: true, force: true }))
 const place = (name: string) => ({ dataDir: join(folder, name), databaseUrl: undefined, s3: undefined })
+const server = process.env['TEST_DATABASE_URL']
 const file = join(folder, 'backup.tar.gz')
 
 /** Every row of every table as PostgreSQL prints it, and where the counters stand. */
@@ -30,10 +32,10 @@ async function filesOf(dataDir: string): Promise<string[]> {
   const entries = await readdir(join(dataDir, 'files'), { recursive: true, withFileTypes: true })
   return entries
     .filter((entry) => entry.isFile())
-    .map(({ name, parentPath, path }) => {
+    .map(({ name, parentPath }) => {
       expect(
         createHash('sha256')
-          .update(readFileSync(join(parentPath ?? path, name)))
+          .update(readFileSync(join(parentPath, name)))
           .digest('hex'),
       ).toBe(name)
       return name
@@ -52,7 +54,7 @@ describe('a backup', () => {
     await database.pool.query("select setval(pg_get_serial_sequence('jobs', 'number'), 4711)")
     before = await everything(database)
     await database.close()
-  }, 120_000)
+  }, 240_000)
 
   it('carries all rows, files and counters into an empty folder', async () => {
     const made = await makeBackup(place('first'), file)
@@ -70,7 +72,34 @@ describe('a backup', () => {
     )
     expect(Number(rows[0]?.id)).toBeGreaterThan(0)
     await database.close()
-  }, 120_000)
+  }, 240_000)
+
+  it.runIf(server)(
+    'goes into an empty database on a server and back, and is refused by one that is not empty',
+    async () => {
+      const admin = new pg.Client({ connectionString: server })
+      await admin.connect()
+      await admin.query('create database from_backup')
+      const onServer = { ...place('of-the-server'), databaseUrl: Object.assign(new URL(server ?? ''), { pathname: '/from_backup' }).href }
+      try {
+        await restoreBackup(onServer, file)
+        const database = await openDatabase(onServer)
+        expect(await everything(database)).toEqual(before)
+        await database.close()
+        await expect(restoreBackup({ ...onServer, dataDir: join(folder, 'another') }, file)).rejects.toThrow(/DATABASE_URL is not empty/)
+        const again = join(folder, 'from-server')
+        await makeBackup(onServer, again)
+        await restoreBackup(place('from-server-again'), again)
+        const back = await openDatabase(place('from-server-again'))
+        expect(await everything(back)).toEqual(before)
+        await back.close()
+      } finally {
+        await admin.query('drop database from_backup with (force)')
+        await admin.end()
+      }
+    },
+    240_000,
+  )
 
   it('is not written over a file, nor made of nothing, nor beside a running Wearcourse', async () => {
     await expect(makeBackup(place('first'), file)).rejects.toThrow(/is there already/)
@@ -79,7 +108,7 @@ describe('a backup', () => {
     const running = await openDatabase(place('first'))
     await expect(makeBackup(place('first'), join(folder, 'other'))).rejects.toThrow(/in use by another Wearcourse/)
     await running.close()
-  }, 120_000)
+  }, 240_000)
 
   it('is refused by a folder that is not empty, which stays as it was', async () => {
     await cp(place('second').dataDir, place('third').dataDir, { recursive: true })

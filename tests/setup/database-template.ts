@@ -11,8 +11,12 @@ declare module 'vitest' {
   }
 }
 
-/** Makes the migrated database once for a run; every test file begins with a copy. */
+/** Makes the migrated database once for a run; every test file begins with a copy. Not needed on a server. */
 export async function setup(project: TestProject): Promise<() => Promise<void>> {
+  if (process.env['TEST_DATABASE_URL']) {
+    project.provide('databaseTemplate', '')
+    return () => Promise.resolve()
+  }
   const dataDir = await mkdtemp(join(tmpdir(), 'wearcourse-template-'))
   const dump = join(dataDir, 'template.tar')
   const database = await openDatabase({ dataDir })
