@@ -76,7 +76,14 @@ export const headerSchema = z.object({
   sectionTitle: z.string(),
   /** ISO day. */
   date: z.string(),
-  buildUp: z.object({ number: z.int(), name: z.string(), version: z.int(), status: z.string(), releasedAt: z.string().nullable(), releasedByName: z.string().nullable() }),
+  buildUp: z.object({
+    number: z.int(),
+    name: z.string(),
+    version: z.int(),
+    status: z.string(),
+    releasedAt: z.string().nullable(),
+    releasedByName: z.string().nullable(),
+  }),
   issue: z.object({ number: z.int(), by: z.string() }).nullable(),
 })
 export type SpecHeader = z.infer<typeof headerSchema>

@@ -17,19 +17,31 @@ const isDry = ({ course }: SpecCourse) => (dryStages as readonly string[]).inclu
 function examination(floor: Floor): Item[] {
   const { substrateRelativeHumidity, moistureEmission } = floor.given.input.conditions
   return [
-    item(line`Examine the slab with the owner. Report in writing contamination, moving joints, cracks, weak concrete, old coatings and missing vapor retarder. Do not begin until the report is answered.`),
+    item(
+      line`Examine the slab with the owner. Report in writing contamination, moving joints, cracks, weak concrete, old coatings and missing vapor retarder. Do not begin until the report is answered.`,
+    ),
     item(line`Test moisture in the slab after ${standard('ASTM F2170')} or ${standard('ASTM F1869')}: ${moistureTests(floor)}, at least.`, [
-      item(line`Relative humidity in the slab, as known today: ${substrateRelativeHumidity === null ? line`not measured` : [measured(`${substrateRelativeHumidity} %`)]}.`),
-      item(line`Moisture emission rate, as known today: ${moistureEmission ? [measured(formatQuantity(moistureEmission))] : line`not measured`}.`),
+      item(
+        line`Relative humidity in the slab, as known today: ${substrateRelativeHumidity === null ? line`not measured` : [measured(`${substrateRelativeHumidity} %`)]}.`,
+      ),
+      item(
+        line`Moisture emission rate, as known today: ${moistureEmission ? [measured(formatQuantity(moistureEmission))] : line`not measured`}.`,
+      ),
     ]),
-    item(line`Moisture limits of the sheets. The lowest limit of the first resin course governs:`, statedOfEach(floor, floor.mixes, ['substrateRelativeHumidity', 'moistureEmission'])),
+    item(
+      line`Moisture limits of the sheets. The lowest limit of the first resin course governs:`,
+      statedOfEach(floor, floor.mixes, ['substrateRelativeHumidity', 'moistureEmission']),
+    ),
     item(line`A licensed structural engineer decides on cracks that move and on load.`),
   ]
 }
 
 function preparationLine({ course }: SpecCourse): Item {
   const { method, profile } = course.preparation ?? {}
-  return item(line`${quoted(course.title)}: ${method ? quoted(method) : notStatedRun()}, to profile ${profile === undefined ? notStatedRun() : [chosen(`CSP ${profile}`)]}.`, note(course.note))
+  return item(
+    line`${quoted(course.title)}: ${method ? quoted(method) : notStatedRun()}, to profile ${profile === undefined ? notStatedRun() : [chosen(`CSP ${profile}`)]}.`,
+    note(course.note),
+  )
 }
 
 const note = (words: string): Item[] => (words.trim() ? [item(line`Note: ${quoted(words.trim())}`)] : [])
@@ -39,8 +51,13 @@ function preparation(floor: Floor): Item[] {
   return [
     ...plain('Remove laitance, curing compound, oil and old coatings to sound concrete. Degrease before any mechanical work.'),
     ...before.map(preparationLine),
-    item(line`Compare the prepared slab with the chips of ${standard('ICRI 310.2R')} and record the profile. Profiles that the sheets ask for:`, statedOfEach(floor, floor.mixes, ['surfaceProfile'])),
-    item(line`Mean texture depth of the prepared slab: ${floor.given.texture ? [measured(formatQuantity(floor.given.texture))] : line`not measured`}.`),
+    item(
+      line`Compare the prepared slab with the chips of ${standard('ICRI 310.2R')} and record the profile. Profiles that the sheets ask for:`,
+      statedOfEach(floor, floor.mixes, ['surfaceProfile']),
+    ),
+    item(
+      line`Mean texture depth of the prepared slab: ${floor.given.texture ? [measured(formatQuantity(floor.given.texture))] : line`not measured`}.`,
+    ),
     ...plain('Vacuum the dust. Honor moving joints through all courses.'),
   ]
 }
@@ -61,12 +78,19 @@ function laying(floor: Floor, one: SpecCourse): Item {
   return item(line`${quoted(course.title)}: apply ${mix ? quoted(mix.name) : notStatedRun()}.`, [
     ...(fillsByVolume(one)
       ? [item(line`Amount: what the joints and cracks of the bays take, in the schedule of areas.`)]
-      : [item(line`Spread rate: ${register.figure(result.spreadRate)}.`), item(line`Wet film: ${register.figure(result.wetFilm)}. Dry film: ${register.figure(result.dryFilm)}.`)]),
+      : [
+          item(line`Spread rate: ${register.figure(result.spreadRate)}.`),
+          item(line`Wet film: ${register.figure(result.wetFilm)}. Dry film: ${register.figure(result.dryFilm)}.`),
+        ]),
     broadcast && course.broadcast
-      ? item(line`Broadcast ${quoted(broadcast.name)} into the wet film at ${chosen(formatQuantity(course.broadcast.rate))}${course.broadcast.toRefusal ? line`, to refusal. Remove the excess after cure` : []}.`)
+      ? item(
+          line`Broadcast ${quoted(broadcast.name)} into the wet film at ${chosen(formatQuantity(course.broadcast.rate))}${course.broadcast.toRefusal ? line`, to refusal. Remove the excess after cure` : []}.`,
+        )
       : null,
     item(line`Working time at the slab temperature of this section: ${register.figure(result.workingTime)}.`),
-    item(line`Next course: ${window}, counted from the start of this course. If the window is missed, do what the sheet states; where it states nothing, ask the maker in writing before going on.`),
+    item(
+      line`Next course: ${window}, counted from the start of this course. If the window is missed, do what the sheet states; where it states nothing, ask the maker in writing before going on.`,
+    ),
     ...note(course.note),
   ])
 }
@@ -82,14 +106,17 @@ const fieldQuality = (): Item[] => [
   item(line`Test and record as the schedule of field quality control says. Hold the work when a value is outside its limit.`),
   item(line`Before every course record slab, air and material temperature, relative humidity and dew point.`),
   item(line`Measure wet film after ${standard('ASTM D4414')}, or the yield of each pack by bay, and compare it with the system schedule.`),
-  item(line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance is by both; where no sheet states a strength, agree one in writing before work.`),
+  item(
+    line`Pull-off after ${standard('ASTM D7234')}: record stress and plane of failure. Acceptance is by both; where no sheet states a strength, agree one in writing before work.`,
+  ),
   ...plain('Mark, cut back and relay what fails. Record lots, bays, times and readings daily.'),
 ]
 
-const cleaning = (): Item[] => plain(
-  'Do not mix leftovers of different products. Keep unmixed parts apart and closed.',
-  'Let mixed remains cure in the open, in thin layers, before disposal. Local rules decide what is hazardous waste. Nothing goes into a drain.',
-)
+const cleaning = (): Item[] =>
+  plain(
+    'Do not mix leftovers of different products. Keep unmixed parts apart and closed.',
+    'Let mixed remains cure in the open, in thin layers, before disposal. Local rules decide what is hazardous waste. Nothing goes into a drain.',
+  )
 
 function protection(floor: Floor): Item[] {
   const { register, evaluation } = floor
@@ -119,5 +146,14 @@ export function executionArticles(floor: Floor): Article[] {
 
 /** The last article: the schedules that follow. */
 export function schedulesArticle(titles: readonly string[]): Article {
-  return { id: 'schedules', title: 'Schedules', items: [item(line`The schedules at the end are part of this section:`, titles.map((title) => item([quoted(title)])))] }
+  return {
+    id: 'schedules',
+    title: 'Schedules',
+    items: [
+      item(
+        line`The schedules at the end are part of this section:`,
+        titles.map((title) => item([quoted(title)])),
+      ),
+    ],
+  }
 }

@@ -61,10 +61,18 @@ export function readFloor({ input }: SpecInput, evaluation: Evaluation): Pick<Fl
     const result = evaluation.courses[index]
     if (!result) return []
     const next = mixOf(input.courses.slice(index + 1).find((one) => !isDry(one)))
-    return [{
-      number: index + 1, course, result, next, mix: mixOf(course), products: productsOf(course, input),
-      filler: productOf(course.filler?.productId), broadcast: productOf(course.broadcast?.productId),
-    }]
+    return [
+      {
+        number: index + 1,
+        course,
+        result,
+        next,
+        mix: mixOf(course),
+        products: productsOf(course, input),
+        filler: productOf(course.filler?.productId),
+        broadcast: productOf(course.broadcast?.productId),
+      },
+    ]
   })
   return {
     courses,
@@ -81,7 +89,9 @@ export function fillsByVolume({ course }: SpecCourse): boolean {
 
 /** The three temperatures that windows are told at, in the unit that most of the sheets use; the slab's where they are even. */
 export function threeTemperatures({ mixes, given }: Pick<Floor, 'mixes' | 'given'>): Quantity[] {
-  const stated = mixes.flatMap(({ facts }) => facts.find(({ property, at }) => property === 'recoatWindow' && at?.temperature)?.at?.temperature?.unit ?? [])
+  const stated = mixes.flatMap(
+    ({ facts }) => facts.find(({ property, at }) => property === 'recoatWindow' && at?.temperature)?.at?.temperature?.unit ?? [],
+  )
   const fahrenheit = stated.filter((one) => one === '°F').length
   const slab = given.input.conditions.slabTemperature.unit
   const unit: Unit = fahrenheit * 2 === stated.length ? slab : fahrenheit * 2 > stated.length ? '°F' : '°C'

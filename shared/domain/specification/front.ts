@@ -15,7 +15,20 @@ interface Unknown {
 }
 
 const figuresOf = ({ result, mix }: SpecCourse): Figure[] =>
-  mix ? [result.wetFilm, result.dryFilm, result.spreadRate, result.potLife, result.workingTime, result.window, result.footTraffic, result.vehicleTraffic, result.fullCure, result.voc] : []
+  mix
+    ? [
+        result.wetFilm,
+        result.dryFilm,
+        result.spreadRate,
+        result.potLife,
+        result.workingTime,
+        result.window,
+        result.footTraffic,
+        result.vehicleTraffic,
+        result.fullCure,
+        result.voc,
+      ]
+    : []
 
 /** What the document cannot say, each once: by the figure that is missing and whose it is. */
 function unknownsOf(floor: Floor): Unknown[] {
@@ -40,18 +53,27 @@ const equipment = ['gloves', 'eyeProtection', 'respiratoryProtection'] as const 
 /** One line a property: of which mixes and products nobody states it. */
 function silences({ products, aggregates, register }: Floor): Item[] {
   const liquids = products.filter(({ id }) => !aggregates.some((one) => one.id === id))
-  const unworn = equipment.flatMap((property) => liquids.flatMap(({ name, facts }) => (facts.some((fact) => fact.property === property) ? [] : [{ of: name, property }])))
+  const unworn = equipment.flatMap((property) =>
+    liquids.flatMap(({ name, facts }) => (facts.some((fact) => fact.property === property) ? [] : [{ of: name, property }])),
+  )
   const all = [...register.gaps().silences, ...unworn]
   return [...new Set(all.map(({ property }) => property))].map((property) => {
     const names = [...new Set(all.filter((one) => one.property === property).map(({ of }) => of))]
-    return item(line`${quoted(properties[property].label)}: not stated for ${joined(names.map((name) => [quoted(name)]), '; ')}. Ask the maker, in writing.`)
+    return item(
+      line`${quoted(properties[property].label)}: not stated for ${joined(
+        names.map((name) => [quoted(name)]),
+        '; ',
+      )}. Ask the maker, in writing.`,
+    )
   })
 }
 
 function unknowns(floor: Floor): Item[] {
   const { evaluation } = floor
   const lines = unknownsOf(floor).map(({ what, of, ask, because }) =>
-    item(line`${of.toLowerCase().includes(what.toLowerCase()) ? quoted(of) : line`${quoted(what)} of ${quoted(of)}`}: not stated${because ? line` (${quoted(because)})` : []}. Ask ${quoted(ask)}.`),
+    item(
+      line`${of.toLowerCase().includes(what.toLowerCase()) ? quoted(of) : line`${quoted(what)} of ${quoted(of)}`}: not stated${because ? line` (${quoted(because)})` : []}. Ask ${quoted(ask)}.`,
+    ),
   )
   const unsettled = evaluation.findings.filter(({ status, missing }) => status === 'unknown' && missing.length === 0)
   const silent = evaluation.hazards.notStated
@@ -59,11 +81,21 @@ function unknowns(floor: Floor): Item[] {
     ...lines,
     ...silences(floor),
     ...unsettled.map((finding) => item(line`${quoted(finding.title)}: ${quoted(finding.says)}`)),
-    ...(silent.length > 0 ? [item(line`Hazards of ${joined(silent.map((name) => [quoted(name)]), ', ')}: not stated. Read the safety sheet before a pack is opened.`)] : []),
+    ...(silent.length > 0
+      ? [
+          item(
+            line`Hazards of ${joined(
+              silent.map((name) => [quoted(name)]),
+              ', ',
+            )}: not stated. Read the safety sheet before a pack is opened.`,
+          ),
+        ]
+      : []),
   ]
 }
 
-const placeOf = (floor: Floor, { courseId }: Finding) => floor.courses.find(({ course }) => course.id === courseId)?.course.title ?? 'the floor'
+const placeOf = (floor: Floor, { courseId }: Finding) =>
+  floor.courses.find(({ course }) => course.id === courseId)?.course.title ?? 'the floor'
 
 /** What a check did not meet and a technical lead accepted, and what has come up since with the job's own conditions. */
 function overrides(floor: Floor): Item[] {
@@ -72,17 +104,25 @@ function overrides(floor: Floor): Item[] {
     const reason = floor.given.reasons[reasonKey(finding)]
     if (!reason && finding.status === 'unknown') return []
     const words = finding.status === 'stop' ? 'not met' : finding.status
-    return [item(
-      line`${quoted(finding.title)}, ${quoted(placeOf(floor, finding))}: ${quoted(words)}. ${quoted(finding.says)}`,
-      [reason ? item(line`Reason given at release: ${quoted(reason)}`) : item(line`No reason is recorded: this comes of the conditions of the job. Settle it before work. ${quoted(finding.todo)}`)],
-    )]
+    return [
+      item(line`${quoted(finding.title)}, ${quoted(placeOf(floor, finding))}: ${quoted(words)}. ${quoted(finding.says)}`, [
+        reason
+          ? item(line`Reason given at release: ${quoted(reason)}`)
+          : item(line`No reason is recorded: this comes of the conditions of the job. Settle it before work. ${quoted(finding.todo)}`),
+      ]),
+    ]
   })
 }
 
 function typical(floor: Floor): Item[] {
   return floor.courses.flatMap((one) =>
-    figuresOf(one).filter(isTypical).map((figure) =>
-      item(line`${quoted(one.course.title)}: ${{ kind: 'figure', text: formatFigure(figure), known: 'typical', tags: [], citation: null }}.`)),
+    figuresOf(one)
+      .filter(isTypical)
+      .map((figure) =>
+        item(
+          line`${quoted(one.course.title)}: ${{ kind: 'figure', text: formatFigure(figure), known: 'typical', tags: [], citation: null }}.`,
+        ),
+      ),
   )
 }
 
@@ -90,8 +130,12 @@ function assumptions({ given }: Floor): Item[] {
   const { conditions, onDate } = given.input
   const { percent, convention } = given.loss
   return [
-    item(line`Slab ${measured(formatQuantity(conditions.slabTemperature))}, air ${measured(formatQuantity(conditions.airTemperature))}, relative humidity ${measured(`${conditions.relativeHumidity} %`)}, held constant through the work.`),
-    item(line`Loss: ${measured(`${formatNumber(percent)} %`)} ${quoted(convention === 'lost' ? 'of what is mixed is lost' : 'is added to what is needed')}.`),
+    item(
+      line`Slab ${measured(formatQuantity(conditions.slabTemperature))}, air ${measured(formatQuantity(conditions.airTemperature))}, relative humidity ${measured(`${conditions.relativeHumidity} %`)}, held constant through the work.`,
+    ),
+    item(
+      line`Loss: ${measured(`${formatNumber(percent)} %`)} ${quoted(convention === 'lost' ? 'of what is mixed is lost' : 'is added to what is needed')}.`,
+    ),
     item(line`Ages of sheets and dated limits are judged on ${measured(onDate)}.`),
     ...plain('Each course starts as soon as the one beneath allows, unless the build-up says otherwise. Laying time is not counted.'),
   ]

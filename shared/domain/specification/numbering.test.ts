@@ -29,6 +29,9 @@ describe('numbering', () => {
   it('closes the gap when an article goes', () => {
     const articles = ['one', 'two', 'three'].map((id) => ({ id, title: id, items: [item(id)] }))
     const without = numberedArticles({ number: 1, title: 'General', articles: articles.filter(({ id }) => id !== 'two') })
-    expect(without.map(({ id, number }) => [id, number])).toEqual([['one', '1.01'], ['three', '1.02']])
+    expect(without.map(({ id, number }) => [id, number])).toEqual([
+      ['one', '1.01'],
+      ['three', '1.02'],
+    ])
   })
 })

@@ -34,13 +34,15 @@ export interface NumberedItem {
 
 /** Paragraphs of an article in reading order; numbering starts anew under every parent. */
 export function numberedItems(items: readonly Item[], level = 0): NumberedItem[] {
-  return items.flatMap((item, index) => [
-    { label: labelOf(level, index), level, runs: item.runs },
-    ...numberedItems(item.items, level + 1),
-  ])
+  return items.flatMap((item, index) => [{ label: labelOf(level, index), level, runs: item.runs }, ...numberedItems(item.items, level + 1)])
 }
 
 /** Articles of a part with their numbers. */
 export function numberedArticles(part: SpecPart): (Pick<Article, 'id' | 'title'> & { number: string; items: NumberedItem[] })[] {
-  return part.articles.map(({ id, title, items }, index) => ({ id, title, number: articleNumber(part.number, index), items: numberedItems(items) }))
+  return part.articles.map(({ id, title, items }, index) => ({
+    id,
+    title,
+    number: articleNumber(part.number, index),
+    items: numberedItems(items),
+  }))
 }

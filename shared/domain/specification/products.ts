@@ -10,21 +10,31 @@ import { item, joined, line, plain, quoted } from './runs.ts'
 import { type Holder, stated, statedOfEach } from './stated.ts'
 
 /** "Solids by volume: 100 % [S1]." or "…: not stated." */
-const propertyLine = (floor: Floor, holder: Holder, property: Property): Item => item(line`${quoted(properties[property].label)}: ${stated(floor, holder, [property])}.`)
+const propertyLine = (floor: Floor, holder: Holder, property: Property): Item =>
+  item(line`${quoted(properties[property].label)}: ${stated(floor, holder, [property])}.`)
 
 function manufacturers({ mixes, products }: Floor): Item[] {
   const makers = [...new Set([...mixes, ...products].map(({ maker }) => maker))].sort()
-  return makers.length === 0 ? [] : [
-    item(line`Makers of the materials specified: ${joined(makers.map((maker) => [quoted(maker)]), ', ')}.`),
-    ...plain('Do not substitute, thin or combine materials unless the maker’s sheet states it or the maker agrees in writing.'),
-  ]
+  return makers.length === 0
+    ? []
+    : [
+        item(
+          line`Makers of the materials specified: ${joined(
+            makers.map((maker) => [quoted(maker)]),
+            ', ',
+          )}.`,
+        ),
+        ...plain('Do not substitute, thin or combine materials unless the maker’s sheet states it or the maker agrees in writing.'),
+      ]
 }
 
 function system(floor: Floor): Item[] {
   const { totals } = floor.evaluation
   return [
     item(line`Courses from the slab upward: see the section drawing and the system schedule.`),
-    item(line`Dry thickness of all courses over the field: ${floor.register.figure(totals.thickness)}. Stones that stand out of a broadcast are not counted.`),
+    item(
+      line`Dry thickness of all courses over the field: ${floor.register.figure(totals.thickness)}. Stones that stand out of a broadcast are not counted.`,
+    ),
   ]
 }
 
@@ -33,22 +43,40 @@ function performance(floor: Floor): Item[] {
   const laid = courses.filter(({ mix }) => mix)
   return [
     item(line`VOC content as mixed:`, [
-      ...laid.map(({ course, mix, result }) => item(line`${quoted(course.title)}, ${quoted(mix?.name ?? '')}: ${register.figure(result.voc)}.`)),
-      item(line`Greatest of all courses: ${register.figure(evaluation.totals.vocWorst)}. Comply with the air district’s rule; the strictest category named on label or sheet applies.`),
+      ...laid.map(({ course, mix, result }) =>
+        item(line`${quoted(course.title)}, ${quoted(mix?.name ?? '')}: ${register.figure(result.voc)}.`),
+      ),
+      item(
+        line`Greatest of all courses: ${register.figure(evaluation.totals.vocWorst)}. Comply with the air district’s rule; the strictest category named on label or sheet applies.`,
+      ),
     ]),
     item(line`Pull-off strength of the slab asked for:`, statedOfEach(floor, floor.mixes, ['pullOffStrength'])),
-    ...plain('Slip resistance, chemical and fire performance: as the contract states and the approved mock-up shows. Ask the maker in writing for what no sheet states.'),
+    ...plain(
+      'Slip resistance, chemical and fire performance: as the contract states and the approved mock-up shows. Ask the maker in writing for what no sheet states.',
+    ),
   ]
 }
 
 /** Told where a sheet states them; nothing here depends on them. */
 const furtherProperties = ['density', 'viscosity', 'weightSolids'] as const satisfies readonly Property[]
-const mixProperties = ['volumeSolids', 'filmThickness', 'surfaceProfile', 'substrateRelativeHumidity', 'moistureEmission', 'shelfLife'] as const satisfies readonly Property[]
+const mixProperties = [
+  'volumeSolids',
+  'filmThickness',
+  'surfaceProfile',
+  'substrateRelativeHumidity',
+  'moistureEmission',
+  'shelfLife',
+] as const satisfies readonly Property[]
 
 function materials(floor: Floor): Item[] {
   return floor.mixes.map((mix) =>
     item(line`${quoted(mix.name)}: ${quoted(mix.chemistry)}, by ${quoted(mix.maker)}.`, [
-      item(line`Components: ${joined(mix.parts.map(({ part, product }) => line`${quoted(part)}, ${quoted(product.name)}`), '; ')}.`),
+      item(
+        line`Components: ${joined(
+          mix.parts.map(({ part, product }) => line`${quoted(part)}, ${quoted(product.name)}`),
+          '; ',
+        )}.`,
+      ),
       ...mixProperties.map((property) => propertyLine(floor, mix, property)),
       ...furtherProperties.filter((property) => factOf(mix.facts, property)).map((property) => propertyLine(floor, mix, property)),
     ]),
@@ -59,11 +87,17 @@ function materials(floor: Floor): Item[] {
 function accessories({ courses }: Floor): Item[] {
   const fills = courses.filter(({ course, mix }) => course.stage === 'fill' && mix)
   const coves = courses.filter(({ course, mix }) => course.stage === 'cove' && mix)
-  const named = (all: readonly SpecCourse[]) => joined(all.map(({ course, mix }) => line`${quoted(mix?.name ?? '')} in ${quoted(course.title)}`), ', ')
+  const named = (all: readonly SpecCourse[]) =>
+    joined(
+      all.map(({ course, mix }) => line`${quoted(mix?.name ?? '')} in ${quoted(course.title)}`),
+      ', ',
+    )
   return [
     item(line`Joint, crack and patching material: ${fills.length > 0 ? named(fills) : line`none is part of this build-up`}.`),
     item(line`Cove base: ${coves.length > 0 ? named(coves) : line`none is part of this build-up`}.`),
-    ...plain('Sealant of moving joints, edge strips and keys: as the drawings show. Ask the maker of the course in writing whether they go together.'),
+    ...plain(
+      'Sealant of moving joints, edge strips and keys: as the drawings show. Ask the maker of the course in writing whether they go together.',
+    ),
   ]
 }
 
@@ -72,7 +106,9 @@ function aggregateItem(floor: Floor, product: ProductFacts): Item {
     ...(filler?.id === product.id ? [line`in the mix of ${quoted(course.title)}`] : []),
     ...(broadcast?.id === product.id ? [line`broadcast on ${quoted(course.title)}`] : []),
   ])
-  return item(line`${quoted(product.name)}: ${quoted(product.chemistry)}, by ${quoted(product.maker)}; ${joined(uses, ', ')}.`, [propertyLine(floor, product, 'density')])
+  return item(line`${quoted(product.name)}: ${quoted(product.chemistry)}, by ${quoted(product.maker)}; ${joined(uses, ', ')}.`, [
+    propertyLine(floor, product, 'density'),
+  ])
 }
 
 function ratios(floor: Floor, mix: MixFacts): Item {
@@ -84,12 +120,19 @@ function ratios(floor: Floor, mix: MixFacts): Item {
 function otherRatio({ register }: Floor, { mix, result }: SpecCourse & { mix: MixFacts }): Item | null {
   const bases = factsOf(mix.facts, 'mixRatio').map((fact) => ratioOf(fact)?.basis)
   const densities = mix.parts.flatMap((part) => densityFactOf(mix, part) ?? [])
-  const basis = bases.includes('volume') && !bases.includes('weight') ? 'weight' : bases.includes('weight') && !bases.includes('volume') ? 'volume' : null
+  const basis =
+    bases.includes('volume') && !bases.includes('weight')
+      ? 'weight'
+      : bases.includes('weight') && !bases.includes('volume')
+        ? 'volume'
+        : null
   const ratio = basis === 'weight' ? result.ratioByWeight : result.ratioByVolume
   if (!basis || !ratio || densities.length < mix.parts.length) return null
   const sum = `${basis === 'weight' ? result.ratioByVolume : result.ratioByWeight}, ${basis === 'weight' ? '×' : '÷'} ${densities.map((fact) => formatValue(fact)).join(' : ')} = ${ratio}`
   const facts = [...factsOf(mix.facts, 'mixRatio'), ...densities]
-  return item(line`By ${quoted(basis)}, through the densities: ${register.working(ratio, { formula: `parts by ${basis}`, sum, source: 'conservation of mass', facts })}.`)
+  return item(
+    line`By ${quoted(basis)}, through the densities: ${register.working(ratio, { formula: `parts by ${basis}`, sum, source: 'conservation of mass', facts })}.`,
+  )
 }
 
 function mixItem(floor: Floor, one: SpecCourse & { mix: MixFacts }): Item {
@@ -100,8 +143,17 @@ function mixItem(floor: Floor, one: SpecCourse & { mix: MixFacts }): Item {
     ratios(floor, mix),
     otherRatio(floor, one),
     filler && course.filler ? item(line`Aggregate in the mix: ${quoted(filler.name)}, loading in the system schedule.`) : null,
-    item(line`Pot life at the slab temperature of this section: ${floor.register.figure(result.potLife)}. Other temperatures: schedule of pot life.`),
-    induction.length > 0 ? item(line`Induction time: ${joined(induction.map((fact) => floor.register.factAt(fact)), '; ')}.`) : null,
+    item(
+      line`Pot life at the slab temperature of this section: ${floor.register.figure(result.potLife)}. Other temperatures: schedule of pot life.`,
+    ),
+    induction.length > 0
+      ? item(
+          line`Induction time: ${joined(
+            induction.map((fact) => floor.register.factAt(fact)),
+            '; ',
+          )}.`,
+        )
+      : null,
     item(line`Part kits allowed: ${stated(floor, mix, ['splitKit'])}.`),
     split ? null : item(line`Mix whole kits only.`),
   ])

@@ -44,17 +44,32 @@ export function createRegister(): Register {
     return once(lists.typicals, 'T', { entry: { source, dated }, same: (one) => one.source === source && one.dated === dated })
   }
   const cited = (text: string, origin: Origin): Run => ({
-    kind: 'figure', text, known: knownOf[origin.kind], tags: [tagOf(origin)], citation: origin.kind === 'stated' ? origin.citation : null,
+    kind: 'figure',
+    text,
+    known: knownOf[origin.kind],
+    tags: [tagOf(origin)],
+    citation: origin.kind === 'stated' ? origin.citation : null,
   })
   const working: Register['working'] = (text, { formula, sum, source, facts = [] }) => ({
-    kind: 'figure', text, known: 'computed', citation: null,
-    tags: [once(lists.workings, 'W', { entry: { formula, sum, source, from: [...new Set(facts.map(({ origin }) => tagOf(origin)))] }, same: (one) => one.formula === formula && one.sum === sum && one.source === source })],
+    kind: 'figure',
+    text,
+    known: 'computed',
+    citation: null,
+    tags: [
+      once(lists.workings, 'W', {
+        entry: { formula, sum, source, from: [...new Set(facts.map(({ origin }) => tagOf(origin)))] },
+        same: (one) => one.formula === formula && one.sum === sum && one.source === source,
+      }),
+    ],
   })
   const computedRun = (figure: Extract<KnownFigure, { kind: 'computed' }>, text: string): Run => {
     if (figure.working.formula === chosenFormula) return { kind: 'figure', text, known: 'chosen', tags: [], citation: null }
     const from = [...new Set(figure.from.flatMap(({ origin }) => (origin ? [tagOf(origin)] : [])))]
     const { formula, sum, source } = figure.working
-    const tag = once(lists.workings, 'W', { entry: { formula, sum, source, from }, same: (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from) })
+    const tag = once(lists.workings, 'W', {
+      entry: { formula, sum, source, from },
+      same: (one) => one.formula === formula && one.sum === sum && String(one.from) === String(from),
+    })
     return { kind: 'figure', text, known: isTypical(figure) ? 'typical' : 'computed', tags: [tag], citation: null }
   }
   const cite: Register['cite'] = (text, facts) => {
@@ -91,7 +106,11 @@ export function createRegister(): Register {
 }
 
 /** Finds the same entry or adds it under the next tag of its letter. */
-function once<T extends object>(list: ({ tag: string } & T)[], letter: string, { entry, same }: { entry: T; same: (one: T) => boolean }): string {
+function once<T extends object>(
+  list: ({ tag: string } & T)[],
+  letter: string,
+  { entry, same }: { entry: T; same: (one: T) => boolean },
+): string {
   const known = list.find(same)
   if (known) return known.tag
   const tag = `${letter}${list.length + 1}`

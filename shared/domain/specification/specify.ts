@@ -21,7 +21,13 @@ function floorOf(given: SpecInput): Floor {
     given,
     evaluation,
     ...readFloor(given, evaluation),
-    quantities: jobQuantities({ floor: given.input, results: evaluation.courses, bays: given.bays, texture: given.texture, loss: given.loss }),
+    quantities: jobQuantities({
+      floor: given.input,
+      results: evaluation.courses,
+      bays: given.bays,
+      texture: given.texture,
+      loss: given.loss,
+    }),
     layers: sectionLayers(given.input, evaluation),
     register: createRegister(),
   }
@@ -44,7 +50,11 @@ export function specify(given: SpecInput): SpecDocument {
     parts: [
       { number: 1, title: 'General', articles: general },
       { number: 2, title: 'Products', articles: products },
-      { number: 3, title: 'Execution', articles: execution.length > 0 ? [...execution, schedulesArticle(tables.map(({ title }) => title))] : [] },
+      {
+        number: 3,
+        title: 'Execution',
+        articles: execution.length > 0 ? [...execution, schedulesArticle(tables.map(({ title }) => title))] : [],
+      },
     ],
     section: { layers: floor.layers, unit: unitOf(given) },
     schedules: tables,
@@ -55,6 +65,8 @@ export function specify(given: SpecInput): SpecDocument {
 
 /** The drawing is dimensioned in the unit of the courses. */
 function unitOf({ input }: SpecInput): 'mil' | 'µm' {
-  const si = input.courses.some(({ thickness, spreadRate }) => thickness?.unit === 'µm' || thickness?.unit === 'mm' || spreadRate?.unit === 'm²/L')
+  const si = input.courses.some(
+    ({ thickness, spreadRate }) => thickness?.unit === 'µm' || thickness?.unit === 'mm' || spreadRate?.unit === 'm²/L',
+  )
   return si ? 'µm' : 'mil'
 }

@@ -15,7 +15,12 @@ export function stated({ register }: Pick<Floor, 'register'>, { name, facts }: H
   const found = properties.flatMap((property) => factsOf(facts, property))
   const silent = properties.filter((property) => factsOf(facts, property).length === 0)
   const gaps = silent.map((property) => register.notStated(name, property))
-  return found.length > 0 ? joined(found.map((fact) => register.factAt(fact)), '; ') : (gaps[0] ?? [])
+  return found.length > 0
+    ? joined(
+        found.map((fact) => register.factAt(fact)),
+        '; ',
+      )
+    : (gaps[0] ?? [])
 }
 
 /** The same for each of several mixes, a paragraph each. */

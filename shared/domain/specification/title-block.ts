@@ -14,7 +14,13 @@ export function titleRows(header: SpecHeader): [string, string][] {
     ['Project', `${project}, J-${String(header.jobNumber).padStart(3, '0')}`],
     ['Client', client.replaceAll('\n', ', ') || 'not stated'],
     ['Site', site.replaceAll('\n', ', ') || 'not stated'],
-    ['Installer', [firm.name, ...firm.address.split('\n'), firm.phone].map((words) => words.trim()).filter(Boolean).join(', ')],
+    [
+      'Installer',
+      [firm.name, ...firm.address.split('\n'), firm.phone]
+        .map((words) => words.trim())
+        .filter(Boolean)
+        .join(', '),
+    ],
     ['Build-up', `BU-${String(buildUp.number).padStart(3, '0')} ${buildUp.name}, version ${buildUp.version}, ${released(buildUp)}`],
     ['Date', writtenDate(date)],
     ['Issue', issue ? `${issueWords(header)}, by ${issue.by}` : issueWords(header)],

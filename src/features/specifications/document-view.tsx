@@ -10,7 +10,10 @@ import { RunsView } from './runs-view.tsx'
 export function DocumentView({ document }: { document: SpecDocument }) {
   const { header, parts, section, schedules, closing } = document
   return (
-    <article aria-label={`Section ${header.sectionNumber} ${header.sectionTitle}`} className="mx-auto w-full max-w-[860px] border border-rule bg-card px-5 py-6 md:px-12 md:py-10 print:max-w-none print:border-0 print:p-0">
+    <article
+      aria-label={`Section ${header.sectionNumber} ${header.sectionTitle}`}
+      className="mx-auto w-full max-w-[860px] border border-rule bg-card px-5 py-6 md:px-12 md:py-10 print:max-w-none print:border-0 print:p-0"
+    >
       <p className="text-center">SECTION {header.sectionNumber}</p>
       <p className="mb-4 text-center text-title uppercase">{header.sectionTitle}</p>
       <TitleBlock header={header} />
@@ -24,14 +27,37 @@ export function DocumentView({ document }: { document: SpecDocument }) {
       {section.layers.length > 0 && (
         <section className="mt-4">
           <h3 className="font-semibold">Section through the floor</h3>
-          <SectionFigure layers={section.layers} width={680} height={standaloneHeight(section.layers.length)} unit={section.unit} standalone className="h-auto max-w-full" />
+          {/* eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls sideways has to be reached by keyboard */}
+          <div className="overflow-x-auto" tabIndex={0} role="region" aria-label="Section through the floor">
+            <SectionFigure
+              layers={section.layers}
+              width={680}
+              height={standaloneHeight(section.layers.length)}
+              unit={section.unit}
+              standalone
+              className="h-auto w-full max-w-[680px] min-w-[560px] print:min-w-0"
+            />
+          </div>
         </section>
       )}
       {schedules.map(({ id, title, columns, rows, note }) => (
-        <TableView key={id} title={title} columns={columns} note={note} rows={rows.map((row, at) => ({ key: String(at), cells: row.map((runs, index) => <RunsView key={index} runs={runs} />) }))} />
+        <TableView
+          key={id}
+          id={id}
+          title={title}
+          columns={columns}
+          note={note}
+          rows={rows.map((row, at) => ({ key: String(at), cells: row.map((runs, index) => <RunsView key={index} runs={runs} />) }))}
+        />
       ))}
       {registersOf(document).map(({ id, title, columns, rows }) => (
-        <TableView key={id} title={title} columns={columns} rows={rows.map((cells) => ({ key: cells[0] ?? '', id: cells[0], cells }))} />
+        <TableView
+          key={id}
+          id={id}
+          title={title}
+          columns={columns}
+          rows={rows.map((cells) => ({ key: cells[0] ?? '', id: cells[0], cells }))}
+        />
       ))}
       <p className="mt-6 font-semibold">{closing.join(' ')}</p>
       <p className="mt-4 text-center">END OF SECTION {header.sectionNumber}</p>
@@ -55,10 +81,10 @@ function TitleBlock({ header }: Pick<SpecDocument, 'header'>) {
 function Front({ front }: Pick<SpecDocument, 'front'>) {
   const kinds = Object.keys(frontTitles) as (keyof typeof frontTitles)[]
   return (
-    <section aria-label="Read first" className="border-l-4 border-caution pl-4">
+    <section id="front" aria-label="Read first" className="border-l-4 border-caution pl-4">
       <h2 className="text-section uppercase">Read first</h2>
       {kinds.map((kind) => (
-        <section key={kind} className="mt-3">
+        <section key={kind} id={`front-${kind}`} className="mt-3">
           <h3 className="font-semibold">{frontTitles[kind]}</h3>
           {front[kind].length > 0 ? <Items items={front[kind]} /> : <p>None.</p>}
         </section>
@@ -105,16 +131,17 @@ function Line({ label, level, runs }: { label: string; level: number; runs: read
 }
 
 interface TableViewProps {
+  id: string
   title: string
   columns: readonly { label: string; width: number }[]
   rows: readonly { key: string; id?: string | undefined; cells: readonly React.ReactNode[] }[]
   note?: string
 }
 
-function TableView({ title, columns, rows, note }: TableViewProps) {
+function TableView({ id: tableId, title, columns, rows, note }: TableViewProps) {
   const total = columns.reduce((sum, { width }) => sum + width, 0)
   return (
-    <section className="mt-6">
+    <section id={`table-${tableId}`} className="mt-6">
       <h3 className="mb-1 font-semibold break-after-avoid">{title}</h3>
       {/* eslint-disable-next-line jsx-a11y/no-noninteractive-tabindex -- what scrolls sideways has to be reached by keyboard */}
       <div className="overflow-x-auto" tabIndex={0} role="region" aria-label={title}>

@@ -31,11 +31,12 @@ export function IssueForm({ specification, onDone }: { specification: Specificat
     <div className="grid gap-3">
       {problem && <Notice tone="stop">{problem}</Notice>}
       <p>
-        Issue {(specification.issues[0]?.number ?? 0) + 1} will be numbered, dated today and signed by {user.name}. Its text, its facts and both files are kept as they are now and never change.
+        Issue {(specification.issues[0]?.number ?? 0) + 1} will be numbered, dated today and signed by {user.name}. Its text, its facts and
+        both files are kept as they are now and never change.
       </p>
       <p>
-        It states {unknowns.length === 1 ? 'one thing' : `${unknowns.length} things`} that no sheet says and {overrides.length === 1 ? 'one check' : `${overrides.length} checks`} not met or accepted with a
-        reason.
+        It states {unknowns.length === 1 ? 'one thing' : `${unknowns.length} things`} that no sheet says and{' '}
+        {overrides.length === 1 ? 'one check' : `${overrides.length} checks`} not met or accepted with a reason.
       </p>
       <span>
         <Button look="primary" busy={busy} onClick={() => void issue()}>

@@ -13,12 +13,18 @@ export function useSpecificationsOf(jobId: string) {
 }
 
 export function useSpecification(specificationId: string) {
-  return useQuery({ queryKey: keys.one(specificationId), queryFn: ({ signal }) => call(wire.readSpecification, { params: { specificationId }, signal }) })
+  return useQuery({
+    queryKey: keys.one(specificationId),
+    queryFn: ({ signal }) => call(wire.readSpecification, { params: { specificationId }, signal }),
+  })
 }
 
 /** An issue never changes: what was read once is kept. */
 export function useIssue(specificationId: string, number: number) {
-  return useQuery({ queryKey: keys.issue(specificationId, number), queryFn: ({ signal }) => call(wire.readIssue, { params: { specificationId, number }, signal }) })
+  return useQuery({
+    queryKey: keys.issue(specificationId, number),
+    queryFn: ({ signal }) => call(wire.readIssue, { params: { specificationId, number }, signal }),
+  })
 }
 
 /** Begins, renames and issues; every list that shows a specification asks again. */
@@ -31,7 +37,10 @@ export function useSpecificationWork() {
       await changed()
       return made
     },
-    change: async ({ id, version }: Pick<SpecSummary, 'id' | 'version'>, body: { title: string; sectionNumber: string }): Promise<Specification> => {
+    change: async (
+      { id, version }: Pick<SpecSummary, 'id' | 'version'>,
+      body: { title: string; sectionNumber: string },
+    ): Promise<Specification> => {
       const kept = await call(wire.changeSpecification, { params: { specificationId: id }, body: { ...body, version } })
       client.setQueryData(keys.one(id), kept)
       await changed()

@@ -6,15 +6,21 @@ import { CitationLink } from '../../ui/citation-link.tsx'
 export function RunsView({ runs }: { runs: readonly Run[] }) {
   return runs.map((run, index) => {
     if (run.kind !== 'figure') return <Fragment key={index}>{run.text}</Fragment>
-    const figure = run.known === 'not-stated' ? <em className="text-pencil">{run.text}</em> : <span className="font-semibold">{run.text}</span>
+    const figure = run.known === 'not-stated' ? <em className="text-pencil">{run.text}</em> : run.text
     const [tag] = run.tags
     return (
       <Fragment key={index}>
         {run.citation ? <CitationLink citation={run.citation}>{figure}</CitationLink> : figure}
         {tag && (
-          <a href={`#${tag}`} className="inline-block min-h-6 text-small text-pencil underline decoration-rule underline-offset-2 hover:text-resin">
-            {tagText(run)}
-          </a>
+          <>
+            {' '}
+            <a
+              href={`#${tag}`}
+              className="inline-block min-h-6 text-small text-pencil underline decoration-rule underline-offset-2 hover:text-resin"
+            >
+              {tagText(run).trim()}
+            </a>
+          </>
         )}
       </Fragment>
     )

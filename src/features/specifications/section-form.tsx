@@ -10,7 +10,9 @@ import { useSpecificationWork } from './queries.ts'
 export function SectionForm({ specification, onDone }: { specification: Specification; onDone: () => void }) {
   const [values, setValues] = useState({ title: specification.title, sectionNumber: specification.sectionNumber })
   const work = useSpecificationWork()
-  const { submit, problems, busy } = useSubmit(wire.changeSpecification.body.omit({ version: true }), (body) => work.change(specification, body))
+  const { submit, problems, busy } = useSubmit(wire.changeSpecification.body.omit({ version: true }), (body) =>
+    work.change(specification, body),
+  )
   const onSubmit = async (event: React.SubmitEvent) => {
     event.preventDefault()
     if (await submit(values)) onDone()
@@ -19,10 +21,20 @@ export function SectionForm({ specification, onDone }: { specification: Specific
     <form onSubmit={(event) => void onSubmit(event)} noValidate className="grid gap-3">
       <ProblemSummary problems={problems} />
       <TextField
-        label="Section number" name="sectionNumber" value={values.sectionNumber} error={problems.fields['sectionNumber']} help="Like 09 67 23."
+        label="Section number"
+        name="sectionNumber"
+        value={values.sectionNumber}
+        error={problems.fields['sectionNumber']}
+        help="Like 09 67 23."
         onChange={(event) => setValues({ ...values, sectionNumber: event.target.value })}
       />
-      <TextField label="Title" name="title" value={values.title} error={problems.fields['title']} onChange={(event) => setValues({ ...values, title: event.target.value })} />
+      <TextField
+        label="Title"
+        name="title"
+        value={values.title}
+        error={problems.fields['title']}
+        onChange={(event) => setValues({ ...values, title: event.target.value })}
+      />
       <span>
         <Button type="submit" look="primary" busy={busy}>
           Save

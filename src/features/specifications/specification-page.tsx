@@ -1,7 +1,7 @@
-import { useState } from 'react'
+import { type ReactNode, useState } from 'react'
 import { Link, useParams } from 'react-router'
 import { writtenDate } from '../../../shared/domain/sheet-age.ts'
-import { issueWords } from '../../../shared/domain/specification/document.ts'
+import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
 import type { Specification } from '../../../shared/api/specifications.ts'
 import { sentenceOf } from '../../lib/api.ts'
 import { paths } from '../../lib/paths.ts'
@@ -9,7 +9,8 @@ import { useCan } from '../../lib/user.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { Button, buttonClass } from '../../ui/button.tsx'
 import { Dialog } from '../../ui/dialog.tsx'
-import { Page } from '../../ui/page.tsx'
+import { Card, Page } from '../../ui/page.tsx'
+import { Contents } from './contents.tsx'
 import { DocumentView } from './document-view.tsx'
 import { IssueForm } from './issue-form.tsx'
 import { IssuesCard } from './issues-card.tsx'
@@ -30,6 +31,25 @@ function Exports({ address }: { address: (kind: 'docx' | 'pdf') => string }) {
       </a>
       <Button onClick={() => window.print()}>Print</Button>
     </>
+  )
+}
+
+/** The document with its contents beside it; on a phone the contents fold away above it. */
+function Reading({ document, children }: { document: SpecDocument; children?: ReactNode }) {
+  return (
+    <div className="grid grid-cols-1 gap-5 lg:grid-cols-[minmax(0,1fr)_260px]">
+      <details className="no-print border border-rule bg-card lg:hidden">
+        <summary className="cursor-pointer px-4 py-2 font-semibold">Contents</summary>
+        <Contents document={document} />
+      </details>
+      <DocumentView document={document} />
+      <div className="no-print grid content-start gap-5 lg:sticky lg:top-4 lg:max-h-[calc(100vh-2rem)] lg:self-start lg:overflow-y-auto">
+        {children}
+        <Card title="Contents" className="hidden lg:block">
+          <Contents document={document} />
+        </Card>
+      </div>
+    </div>
   )
 }
 
@@ -72,12 +92,9 @@ function Draft({ specification }: { specification: Specification }) {
       }
     >
       <SupersededNotice titles={specification.restsOnSuperseded} />
-      <div className="grid grid-cols-1 gap-5 lg:grid-cols-[minmax(0,1fr)_260px]">
-        <DocumentView document={document} />
-        <div className="no-print lg:sticky lg:top-4 lg:self-start">
-          <IssuesCard specification={specification} />
-        </div>
-      </div>
+      <Reading document={document}>
+        <IssuesCard specification={specification} />
+      </Reading>
       <Dialog title="Title and number" open={open === 'section'} onClose={close}>
         <SectionForm specification={specification} onDone={close} />
       </Dialog>
@@ -110,7 +127,7 @@ export function IssuePage() {
           actions={<Exports address={(kind) => files.issue(specificationId, issue.number, kind)} />}
         >
           <SupersededNotice titles={issue.restsOnSuperseded} />
-          <DocumentView document={issue.document} />
+          <Reading document={issue.document} />
         </Page>
       )}
     </Asking>

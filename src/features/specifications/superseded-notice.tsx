@@ -6,7 +6,8 @@ export function SupersededNotice({ titles }: { titles: readonly string[] }) {
   return (
     <div className="no-print mb-4">
       <Notice tone="caution">
-        Rests on a superseded sheet: {titles.join(', ')}. A newer revision is loaded. What is written here holds for the revision named in the schedule of products and sheets.
+        Rests on a superseded sheet: {titles.join(', ')}. A newer revision is loaded. What is written here holds for the revision named in
+        the schedule of products and sheets.
       </Notice>
     </div>
   )
