@@ -38,7 +38,16 @@ export interface AppParts {
 }
 
 /** One routes function a feature. */
-const features: ((context: AppContext) => Router)[] = [sessionRoutes, peopleRoutes, catalogueRoutes, jobRoutes, siteCardRoutes, sheetRoutes, buildUpRoutes, specificationRoutes]
+const features: ((context: AppContext) => Router)[] = [
+  sessionRoutes,
+  peopleRoutes,
+  catalogueRoutes,
+  jobRoutes,
+  siteCardRoutes,
+  sheetRoutes,
+  buildUpRoutes,
+  specificationRoutes,
+]
 
 /** The server without its socket: middleware, the features' routers, 404 and the one error handler. */
 export function createApp(parts: AppParts): Express {
@@ -51,12 +60,23 @@ export function createApp(parts: AppParts): Express {
   if (parts.pages) app.use(parts.pages)
 
   const sessions = createSessions({
-    pool, publicUrl, clock, secret: parts.sessionSecret,
+    pool,
+    publicUrl,
+    clock,
+    secret: parts.sessionSecret,
     findUser: (id) => findUser(db, id),
     checkPassword: (email, password) => checkPassword(db, { email, password, now: clock() }),
   })
   const context: AppContext = {
-    db, files: parts.files, mail: parts.mail, sessions, clock, publicUrl, firstLeadCode: parts.firstLeadCode, demo: parts.demo, log,
+    db,
+    files: parts.files,
+    mail: parts.mail,
+    sessions,
+    clock,
+    publicUrl,
+    firstLeadCode: parts.firstLeadCode,
+    demo: parts.demo,
+    log,
   }
   app.use('/api', (_request, response, next) => {
     response.setHeader('Cache-Control', 'no-store')

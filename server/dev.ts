@@ -6,7 +6,9 @@ const root = join(import.meta.dirname, '..')
 const apiPort = '4621'
 const children = [
   spawn(process.execPath, ['--watch-path=server', '--watch-path=shared', '--watch-preserve-output', '--import', 'tsx', 'server/main.ts'], {
-    cwd: root, stdio: 'inherit', env: { ...process.env, PORT: apiPort, PUBLIC_URL: 'http://localhost:4620' },
+    cwd: root,
+    stdio: 'inherit',
+    env: { ...process.env, PORT: apiPort, PUBLIC_URL: 'http://localhost:4620' },
   }),
   spawn(process.execPath, ['node_modules/vite/bin/vite.js'], { cwd: root, stdio: 'inherit', env: { ...process.env, API_PORT: apiPort } }),
 ]

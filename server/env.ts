@@ -9,11 +9,17 @@ const envSchema = z
     PORT: z.coerce.number().int().min(1).max(65535).default(4620),
     HOST: z.string().trim().min(1).default('127.0.0.1'),
     DATA_DIR: z.string().trim().min(1).default('./data'),
-    DATABASE_URL: z.string().regex(/^postgres(ql)?:\/\//, 'must begin with postgres://').optional(),
+    DATABASE_URL: z
+      .string()
+      .regex(/^postgres(ql)?:\/\//, 'must begin with postgres://')
+      .optional(),
     DEMO: z.enum(['auto', 'off']).default('auto'),
     SESSION_SECRET: z.string().min(32, 'must have at least 32 characters').optional(),
     PUBLIC_URL: z.url({ protocol: /^https?$/, error: 'must be an http or https address' }).optional(),
-    SMTP_URL: z.string().regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://').optional(),
+    SMTP_URL: z
+      .string()
+      .regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://')
+      .optional(),
     MAIL_FROM: z.string().trim().min(3).optional(),
     S3_BUCKET: optional,
     S3_ENDPOINT: optional,
@@ -24,7 +30,8 @@ const envSchema = z
   .superRefine((env, context) => {
     const given = s3.filter((name) => env[name])
     if (given.length > 0 && given.length < s3.length) {
-      for (const name of s3.filter((name) => !env[name])) context.addIssue({ code: 'custom', path: [name], message: 'is missing while other S3 values are given' })
+      for (const name of s3.filter((name) => !env[name]))
+        context.addIssue({ code: 'custom', path: [name], message: 'is missing while other S3 values are given' })
     }
     if (env.SMTP_URL && !env.MAIL_FROM) context.addIssue({ code: 'custom', path: ['MAIL_FROM'], message: 'is needed with SMTP_URL' })
   })

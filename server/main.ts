@@ -39,8 +39,17 @@ async function start(): Promise<void> {
   }
   const firstLeadCode = (await hasPeople(database.db)) ? undefined : randomBytes(5).toString('hex')
   listener = createApp({
-    db: database.db, pool: database.pool, isAnswering: () => database.isAnswering(), files, mail, clock, log, firstLeadCode,
-    publicUrl: env.publicUrl, sessionSecret: env.sessionSecret ?? (await sessionSecretIn(env.dataDir)), demo: demoAccounts,
+    db: database.db,
+    pool: database.pool,
+    isAnswering: () => database.isAnswering(),
+    files,
+    mail,
+    clock,
+    log,
+    firstLeadCode,
+    publicUrl: env.publicUrl,
+    sessionSecret: env.sessionSecret ?? (await sessionSecretIn(env.dataDir)),
+    demo: demoAccounts,
     pages: pages(join(import.meta.dirname, '../dist')),
   })
   say(`Wearcourse is open at ${env.publicUrl}`)

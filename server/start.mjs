@@ -48,12 +48,23 @@ export function install() {
   const hash = hashOf(lock)
   if (isDone(mark, hash)) return
   say('Installing packages from the lock file …')
-  run('npm', ['ci', '--no-audit', '--no-fund', '--loglevel=error'], 'The packages could not be installed. Is the npm registry within reach?')
+  run(
+    'npm',
+    ['ci', '--no-audit', '--no-fund', '--loglevel=error'],
+    'The packages could not be installed. Is the npm registry within reach?',
+  )
   writeFileSync(mark, hash)
 }
 
 export function build() {
-  const sources = [...filesIn(join(root, 'src')), ...filesIn(join(root, 'shared')), ...filesIn(join(root, 'public')), join(root, 'index.html'), join(root, 'vite.config.ts'), join(root, 'package-lock.json')]
+  const sources = [
+    ...filesIn(join(root, 'src')),
+    ...filesIn(join(root, 'shared')),
+    ...filesIn(join(root, 'public')),
+    join(root, 'index.html'),
+    join(root, 'vite.config.ts'),
+    join(root, 'package-lock.json'),
+  ]
   const mark = join(root, 'node_modules/.built')
   const hash = hashOf(...sources.filter((path) => !/\.test\.tsx?$/.test(path) && statSync(path).isFile()))
   if (existsSync(join(root, 'dist/index.html')) && isDone(mark, hash)) return
@@ -64,7 +75,11 @@ export function build() {
 
 /** Runs the server in a process of its own and passes signals and its end on. */
 function serve() {
-  const child = spawn(process.execPath, ['--import', 'tsx', join(root, 'server/main.ts')], { cwd: root, stdio: 'inherit', env: process.env })
+  const child = spawn(process.execPath, ['--import', 'tsx', join(root, 'server/main.ts')], {
+    cwd: root,
+    stdio: 'inherit',
+    env: process.env,
+  })
   for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => child.kill(signal))
   child.on('exit', (code, signal) => process.exit(code ?? (signal ? 1 : 0)))
 }

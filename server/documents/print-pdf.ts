@@ -19,7 +19,14 @@ let printer: Pdfmake | undefined
 /** pdfmake with Source Sans 3, shut off from the network and from all files but its fonts. */
 function openPrinter(): Pdfmake {
   const pdfmake = require('pdfmake') as Pdfmake
-  pdfmake.setFonts({ SourceSans3: { normal: face('400Regular'), bold: face('600SemiBold'), italics: face('400Regular_Italic'), bolditalics: face('600SemiBold_Italic') } })
+  pdfmake.setFonts({
+    SourceSans3: {
+      normal: face('400Regular'),
+      bold: face('600SemiBold'),
+      italics: face('400Regular_Italic'),
+      bolditalics: face('600SemiBold_Italic'),
+    },
+  })
   pdfmake.setUrlAccessPolicy(() => false)
   pdfmake.setLocalAccessPolicy((path) => path.startsWith(fontFolder))
   return pdfmake

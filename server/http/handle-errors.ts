@@ -32,7 +32,9 @@ export function handleErrors(log: (line: string) => void): ErrorRequestHandler {
     if (!known) {
       const cause = (error as { cause?: unknown }).cause
       const text = (part: unknown) => (part instanceof Error ? (part.stack ?? part.message).slice(0, 2000) : String(part))
-      log(`error ${request.method} ${request.path} ${JSON.stringify(text(error))}${cause ? ` caused by ${JSON.stringify(text(cause))}` : ''}`)
+      log(
+        `error ${request.method} ${request.path} ${JSON.stringify(text(error))}${cause ? ` caused by ${JSON.stringify(text(cause))}` : ''}`,
+      )
       known = new AppError('unavailable')
     }
     const body: ErrorBody = { error: { code: known.code, message: known.message, ...(known.fields ? { fields: known.fields } : {}) } }

@@ -70,7 +70,11 @@ export function createSessions(options: SessionOptions): Sessions {
     async signIn(request) {
       const user = await new Promise<User | false>((resolve, reject) => {
         const callback = (error: unknown, found?: User | false | null) => (error ? reject(asError(error)) : resolve(found || false))
-        const run = authenticator.authenticate('local', callback) as (request: Request, response: unknown, next: (error: Error) => void) => void
+        const run = authenticator.authenticate('local', callback) as (
+          request: Request,
+          response: unknown,
+          next: (error: Error) => void,
+        ) => void
         run(request, request.res, reject)
       })
       if (!user) throw new AppError('wrong-credentials')

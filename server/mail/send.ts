@@ -42,7 +42,10 @@ export async function outboxMailer(dataDir: string, clock: () => number): Promis
       await rename(`${path}.part`, path)
     },
     async outbox() {
-      const names = (await readdir(folder)).filter((name) => name.endsWith('.json')).sort().reverse()
+      const names = (await readdir(folder))
+        .filter((name) => name.endsWith('.json'))
+        .sort()
+        .reverse()
       return Promise.all(names.map(async (name) => JSON.parse(await readFile(join(folder, name), 'utf8')) as KeptMail))
     },
   }

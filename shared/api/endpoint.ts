@@ -39,6 +39,8 @@ export type Reply<E extends Endpoint> = E['response'] extends z.ZodType ? z.inpu
 export type Received<E extends Endpoint> = E['response'] extends z.ZodType ? z.output<E['response']> : undefined
 
 /** What a client passes: only the parts that the endpoint has. */
-export type CallInput<E extends Endpoint> = (E['params'] extends z.ZodType ? { params: SchemaInput<E['params']> } : { params?: undefined }) &
+export type CallInput<E extends Endpoint> = (E['params'] extends z.ZodType
+  ? { params: SchemaInput<E['params']> }
+  : { params?: undefined }) &
   (E['query'] extends z.ZodType ? { query?: SchemaInput<E['query']> } : { query?: undefined }) &
   (E['body'] extends z.ZodType ? { body: SchemaInput<E['body']> } : { body?: undefined })

@@ -86,14 +86,37 @@ export type JobBody = z.infer<typeof jobBody>
 
 export const jobEndpoints = {
   listJobs: endpoint({
-    method: 'get', path: '/api/jobs', access: 'job:read', summary: 'List the jobs',
+    method: 'get',
+    path: '/api/jobs',
+    access: 'job:read',
+    summary: 'List the jobs',
     query: listQuery(['number', 'name', 'client', 'startsAt', 'updatedAt']).extend({ status: jobStatusSchema.optional() }),
     response: listOf(jobSummarySchema),
   }),
-  addJob: endpoint({ method: 'post', path: '/api/jobs', access: 'job:write', summary: 'Open a job', status: 201, body: jobBody, response: jobSchema }),
-  readJob: endpoint({ method: 'get', path: '/api/jobs/:jobId', access: 'job:read', summary: 'Read a job with its build-up', params: jobId, response: jobSchema }),
+  addJob: endpoint({
+    method: 'post',
+    path: '/api/jobs',
+    access: 'job:write',
+    summary: 'Open a job',
+    status: 201,
+    body: jobBody,
+    response: jobSchema,
+  }),
+  readJob: endpoint({
+    method: 'get',
+    path: '/api/jobs/:jobId',
+    access: 'job:read',
+    summary: 'Read a job with its build-up',
+    params: jobId,
+    response: jobSchema,
+  }),
   changeJob: endpoint({
-    method: 'put', path: '/api/jobs/:jobId', access: 'job:write', summary: 'Change a job', params: jobId,
-    body: jobBody.extend({ version: versionSchema }), response: jobSchema,
+    method: 'put',
+    path: '/api/jobs/:jobId',
+    access: 'job:write',
+    summary: 'Change a job',
+    params: jobId,
+    body: jobBody.extend({ version: versionSchema }),
+    response: jobSchema,
   }),
 }

@@ -23,11 +23,19 @@ export type SiteCard = z.infer<typeof siteCardSchema>
 
 export const siteCardEndpoints = {
   listSiteCards: endpoint({
-    method: 'get', path: '/api/site-cards', access: 'site-card:read', summary: 'Site cards one may open: all for the office, those of the own jobs for the crew',
+    method: 'get',
+    path: '/api/site-cards',
+    access: 'site-card:read',
+    summary: 'Site cards one may open: all for the office, those of the own jobs for the crew',
     query: listQuery(['number', 'name', 'startsAt']),
     response: listOf(jobSummarySchema.pick({ id: true, number: true, name: true, site: true, startsAt: true, bays: true })),
   }),
   readSiteCard: endpoint({
-    method: 'get', path: '/api/site-cards/:jobId', access: 'site-card:read', summary: 'The site card of a job', params: z.object({ jobId: idSchema }), response: siteCardSchema,
+    method: 'get',
+    path: '/api/site-cards/:jobId',
+    access: 'site-card:read',
+    summary: 'The site card of a job',
+    params: z.object({ jobId: idSchema }),
+    response: siteCardSchema,
   }),
 }

@@ -10,7 +10,10 @@ const jobId = z.object({ jobId: idSchema })
 const specificationId = z.object({ specificationId: idSchema })
 const issueNumber = specificationId.extend({ number: z.coerce.number().int().min(1).max(100_000) })
 
-const sectionNumberSchema = z.string().trim().regex(/^\d{2} \d{2} \d{2}(\.\d{2})?$/, 'A section number reads like 09 67 23 or 09 67 23.13.')
+const sectionNumberSchema = z
+  .string()
+  .trim()
+  .regex(/^\d{2} \d{2} \d{2}(\.\d{2})?$/, 'A section number reads like 09 67 23 or 09 67 23.13.')
 const titleSchema = line(120)
 
 export const specIssueSchema = z.object({ number: z.int(), issuedAt: z.string(), issuedByName: z.string() })
@@ -54,43 +57,91 @@ const docx = 'application/vnd.openxmlformats-officedocument.wordprocessingml.doc
 
 export const specificationEndpoints = {
   addSpecification: endpoint({
-    method: 'post', path: '/api/jobs/:jobId/specifications', access: 'specification:write', summary: 'Begin a specification for a job', status: 201, params: jobId,
-    body: z.strictObject({ title: titleSchema.default(usualSection.title), sectionNumber: sectionNumberSchema.default(usualSection.sectionNumber) }),
+    method: 'post',
+    path: '/api/jobs/:jobId/specifications',
+    access: 'specification:write',
+    summary: 'Begin a specification for a job',
+    status: 201,
+    params: jobId,
+    body: z.strictObject({
+      title: titleSchema.default(usualSection.title),
+      sectionNumber: sectionNumberSchema.default(usualSection.sectionNumber),
+    }),
     response: specificationSchema,
   }),
   listSpecifications: endpoint({
-    method: 'get', path: '/api/jobs/:jobId/specifications', access: 'specification:read', summary: 'List the specifications of a job', params: jobId,
+    method: 'get',
+    path: '/api/jobs/:jobId/specifications',
+    access: 'specification:read',
+    summary: 'List the specifications of a job',
+    params: jobId,
     response: z.object({ items: z.array(specSummarySchema) }),
   }),
   readSpecification: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId', access: 'specification:read', summary: 'Read a specification as it stands now', params: specificationId,
+    method: 'get',
+    path: '/api/specifications/:specificationId',
+    access: 'specification:read',
+    summary: 'Read a specification as it stands now',
+    params: specificationId,
     response: specificationSchema,
   }),
   changeSpecification: endpoint({
-    method: 'put', path: '/api/specifications/:specificationId', access: 'specification:write', summary: 'Change title and section number', params: specificationId,
-    body: z.strictObject({ title: titleSchema, sectionNumber: sectionNumberSchema, version: versionSchema }), response: specificationSchema,
+    method: 'put',
+    path: '/api/specifications/:specificationId',
+    access: 'specification:write',
+    summary: 'Change title and section number',
+    params: specificationId,
+    body: z.strictObject({ title: titleSchema, sectionNumber: sectionNumberSchema, version: versionSchema }),
+    response: specificationSchema,
   }),
   issueSpecification: endpoint({
-    method: 'post', path: '/api/specifications/:specificationId/issues', access: 'specification:write', summary: 'Issue: number, date, sign and freeze', status: 201, params: specificationId,
-    body: z.strictObject({ version: versionSchema }), response: issueSchema,
+    method: 'post',
+    path: '/api/specifications/:specificationId/issues',
+    access: 'specification:write',
+    summary: 'Issue: number, date, sign and freeze',
+    status: 201,
+    params: specificationId,
+    body: z.strictObject({ version: versionSchema }),
+    response: issueSchema,
   }),
   readIssue: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId/issues/:number', access: 'specification:read', summary: 'Read an issue as it was frozen', params: issueNumber,
+    method: 'get',
+    path: '/api/specifications/:specificationId/issues/:number',
+    access: 'specification:read',
+    summary: 'Read an issue as it was frozen',
+    params: issueNumber,
     response: issueSchema,
   }),
   downloadDraftDocx: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId/draft.docx', access: 'specification:read', summary: 'Export the draft as DOCX', params: specificationId, response: { file: docx },
+    method: 'get',
+    path: '/api/specifications/:specificationId/draft.docx',
+    access: 'specification:read',
+    summary: 'Export the draft as DOCX',
+    params: specificationId,
+    response: { file: docx },
   }),
   downloadDraftPdf: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId/draft.pdf', access: 'specification:read', summary: 'Export the draft as PDF', params: specificationId,
+    method: 'get',
+    path: '/api/specifications/:specificationId/draft.pdf',
+    access: 'specification:read',
+    summary: 'Export the draft as PDF',
+    params: specificationId,
     response: { file: 'application/pdf' },
   }),
   downloadIssueDocx: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId/issues/:number/files/docx', access: 'specification:read', summary: 'The DOCX of an issue, as frozen', params: issueNumber,
+    method: 'get',
+    path: '/api/specifications/:specificationId/issues/:number/files/docx',
+    access: 'specification:read',
+    summary: 'The DOCX of an issue, as frozen',
+    params: issueNumber,
     response: { file: docx },
   }),
   downloadIssuePdf: endpoint({
-    method: 'get', path: '/api/specifications/:specificationId/issues/:number/files/pdf', access: 'specification:read', summary: 'The PDF of an issue, as frozen', params: issueNumber,
+    method: 'get',
+    path: '/api/specifications/:specificationId/issues/:number/files/pdf',
+    access: 'specification:read',
+    summary: 'The PDF of an issue, as frozen',
+    params: issueNumber,
     response: { file: 'application/pdf' },
   }),
 }

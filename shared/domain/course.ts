@@ -18,7 +18,17 @@ export const stageNames: Record<Stage, { name: string; title: string }> = {
 /** A course that says nothing yet but its stage. */
 export function newCourse(stage: Stage, id: string): Course {
   return {
-    id, stage, title: stageNames[stage].title, mixId: null, thickness: null, spreadRate: null, filler: null, broadcast: null, preparation: null, startsAfter: null, note: '',
+    id,
+    stage,
+    title: stageNames[stage].title,
+    mixId: null,
+    thickness: null,
+    spreadRate: null,
+    filler: null,
+    broadcast: null,
+    preparation: null,
+    startsAfter: null,
+    note: '',
   }
 }
 

@@ -9,9 +9,7 @@ export const baySchema = z.strictObject({
   id: z.string().min(1).max(40),
   name: z.string().trim().min(1).max(80),
   area: z.strictObject({ value: z.number().positive().max(10_000_000), unit: z.enum(['ft²', 'm²']) }),
-  joints: z
-    .array(z.strictObject({ length: quantitySchema, width: quantitySchema, depth: quantitySchema }))
-    .max(200),
+  joints: z.array(z.strictObject({ length: quantitySchema, width: quantitySchema, depth: quantitySchema })).max(200),
   spalls: z.strictObject({ area: quantitySchema, meanDepth: quantitySchema }).nullable(),
 })
 export type Bay = z.infer<typeof baySchema>

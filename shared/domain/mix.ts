@@ -15,7 +15,10 @@ export const mixFactsSchema = z.object({
   /** Colour it cures to, `#rrggbb`, for the drawing. */
   color: z.string(),
   status: recordStatusSchema,
-  parts: z.array(z.object({ part: componentPartSchema, product: productFactsSchema })).min(1).max(3),
+  parts: z
+    .array(z.object({ part: componentPartSchema, product: productFactsSchema }))
+    .min(1)
+    .max(3),
   facts: z.array(factSchema),
   sheets: z.array(sheetSummarySchema),
 })

@@ -37,11 +37,25 @@ const shown = (amount: Quantity) => formatRange(point(amount))
 function liquidOf({ mix, pack, share }: PailGiven): Figure {
   const unit = pack.size.unit === 'gal' || pack.size.unit === 'lb' || pack.size.unit === 'oz' ? 'gal' : 'L'
   const whole = inDimension(pack.size, { unit, mix })
-  if (!whole) return notStated('density', { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing', because: 'the kit is stated by weight' })
+  if (!whole)
+    return notStated('density', {
+      of: mix.name,
+      subject: { kind: 'mix', id: mix.id },
+      ask: 'the maker, in writing',
+      because: 'the kit is stated by weight',
+    })
   const amount = quantity(whole.value * share, unit)
   const facts = factsOf(mix.facts, 'packSize').filter((fact) => pack.items.some(({ factId }) => factId === fact.id))
   const part = share === 1 ? '' : ` × ${formatNumber(share * 100, 1)} %`
-  return computed(amount, { formula: share === 1 ? 'full kit' : 'share of a kit', sum: `${shown(pack.size)}${part} = ${shown(amount)}`, source: 'the pack sizes stated' }, facts.map((fact) => sourceOf('pack size', fact)))
+  return computed(
+    amount,
+    {
+      formula: share === 1 ? 'full kit' : 'share of a kit',
+      sum: `${shown(pack.size)}${part} = ${shown(amount)}`,
+      source: 'the pack sizes stated',
+    },
+    facts.map((fact) => sourceOf('pack size', fact)),
+  )
 }
 
 /** Floor covered: liquid ÷ liquid per area. */
@@ -53,7 +67,11 @@ function coversOf(liquid: Figure, { resinPerArea }: CourseResult): Figure {
   const amount = valueIn(greatestOf(liquid.value), per.unit)
   const area = quantity((amount / per.value) * (us ? 1000 : 100), us ? 'ft²' : 'm²')
   const sum = `${formatRange(liquid.value)} ÷ ${shown(per)} per ${us ? '1,000 ft²' : '100 m²'} = ${shown(area)}`
-  return computed(area, { formula: 'area = liquid resin ÷ liquid resin per area', sum, source: 'the build-up, before loss and texture' }, sourcesOf('kit', liquid))
+  return computed(
+    area,
+    { formula: 'area = liquid resin ÷ liquid resin per area', sum, source: 'the build-up, before loss and texture' },
+    sourcesOf('kit', liquid),
+  )
 }
 
 /** The mix for one pail: each part by volume and on the scale, the sand, and how far it must go. */

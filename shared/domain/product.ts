@@ -7,7 +7,15 @@ export const productKindSchema = z.enum(productKinds)
 export type ProductKind = z.infer<typeof productKindSchema>
 
 export const chemistries = [
-  'epoxy', 'polyurethane', 'polyurea', 'polyaspartic', 'urethane cement', 'methacrylate', 'silica', 'other mineral', 'other',
+  'epoxy',
+  'polyurethane',
+  'polyurea',
+  'polyaspartic',
+  'urethane cement',
+  'methacrylate',
+  'silica',
+  'other mineral',
+  'other',
 ] as const
 export const chemistrySchema = z.enum(chemistries)
 

@@ -39,10 +39,22 @@ export const properties = {
   filmThickness: { label: 'Film thickness per coat', form: 'quantity', source: 'data', dimensions: ['length'], repeats: true },
   spreadRate: { label: 'Spread rate', form: 'quantity', source: 'data', dimensions: ['spread'], repeats: true },
   consumption: { label: 'Consumption', form: 'quantity', source: 'data', dimensions: ['consumption'], repeats: true },
-  applicationTemperature: { label: 'Application temperature', form: 'quantity', source: 'data', dimensions: ['temperature'], repeats: true },
+  applicationTemperature: {
+    label: 'Application temperature',
+    form: 'quantity',
+    source: 'data',
+    dimensions: ['temperature'],
+    repeats: true,
+  },
   maxRelativeHumidity: { label: 'Relative humidity of the air', form: 'quantity', source: 'data', dimensions: ['fraction'] },
   dewPointMargin: { label: 'Slab above dew point', form: 'quantity', source: 'data', dimensions: ['temperatureDifference'] },
-  substrateRelativeHumidity: { label: 'Relative humidity in the slab', form: 'quantity', source: 'data', dimensions: ['fraction'], repeats: true },
+  substrateRelativeHumidity: {
+    label: 'Relative humidity in the slab',
+    form: 'quantity',
+    source: 'data',
+    dimensions: ['fraction'],
+    repeats: true,
+  },
   moistureEmission: { label: 'Moisture emission rate', form: 'quantity', source: 'data', dimensions: ['emission'], repeats: true },
   surfaceProfile: { label: 'Surface profile', form: 'quantity', source: 'data', dimensions: ['profile'] },
   pullOffStrength: { label: 'Pull-off strength', form: 'quantity', source: 'data', dimensions: ['pressure'] },
@@ -112,7 +124,10 @@ const codesSchema = z.strictObject({ codes: z.array(codeSchema).min(1, 'Write at
 const percent = z.number('This is not a number.').min(0, 'A share is not below 0 %.').max(100, 'A share is not above 100 %.')
 const substanceSchema = z.strictObject({
   name: someWords(200),
-  cas: z.string().regex(/^\d{2,7}-\d{2}-\d$/, 'A CAS number looks like 100-51-6.').optional(),
+  cas: z
+    .string()
+    .regex(/^\d{2,7}-\d{2}-\d$/, 'A CAS number looks like 100-51-6.')
+    .optional(),
   min: percent.optional(),
   max: percent.optional(),
   unit: z.literal('%'),
@@ -151,7 +166,6 @@ export const conditionsSchema = z.strictObject({
 export type ValueConditions = z.infer<typeof conditionsSchema>
 
 export const partSchema = z.enum(['mixed', 'A', 'B', 'C'])
-export type Part = z.infer<typeof partSchema>
 
 /** What is said, before where it was said: the property, of which part, its value and conditions. */
 export const statementSchema = z.strictObject({

@@ -17,7 +17,12 @@ function densityFigure(mix: MixFacts, part: Part): Figure {
   const fact = densityFactOf(mix, part)
   const range = rangeOf(fact)
   if (fact && range) return { kind: 'fact', value: range, factId: fact.id, origin: fact.origin }
-  return notStated('density', { of: part.product.name, part: part.part, subject: { kind: 'product', id: part.product.id }, ask: 'the maker, in writing' })
+  return notStated('density', {
+    of: part.product.name,
+    part: part.part,
+    subject: { kind: 'product', id: part.product.id },
+    ask: 'the maker, in writing',
+  })
 }
 
 /** kg/L of a component, the middle of a stated range; undefined when not stated. */
@@ -31,7 +36,8 @@ function densityOf(mix: MixFacts, part: Part): number | undefined {
 /** The ratio of a mix by both bases: as stated where it is, through the densities where they are stated, else null. */
 export function ratiosOf(mix: MixFacts): { volume: number[] | null; weight: number[] | null } {
   const ratios = factsOf(mix.facts, 'mixRatio').map(ratioOf)
-  const stated = (basis: 'volume' | 'weight') => ratios.find((ratio) => ratio?.basis === basis && ratio.parts.length === mix.parts.length)?.parts ?? null
+  const stated = (basis: 'volume' | 'weight') =>
+    ratios.find((ratio) => ratio?.basis === basis && ratio.parts.length === mix.parts.length)?.parts ?? null
   const [volume, weight] = [stated('volume'), stated('weight')]
   const densities = mix.parts.map((part) => densityOf(mix, part))
   const known = densities.filter((density) => density !== undefined)

@@ -2,25 +2,60 @@ import { describe, expect, it } from 'vitest'
 import { type Property, propertyNames } from './property.ts'
 import { type LooseStatement, statementProblems } from './statement.ts'
 
-const of = (property: Property, value: unknown, more: Partial<LooseStatement> = {}): LooseStatement => ({ property, part: 'mixed', value, ...more })
+const of = (property: Property, value: unknown, more: Partial<LooseStatement> = {}): LooseStatement => ({
+  property,
+  part: 'mixed',
+  value,
+  ...more,
+})
 const wrongAt = (statement: LooseStatement) => statementProblems(statement).map(({ path }) => path.join('.'))
 
 /** One value of each property as a sheet may state it. Invented, common for the trade. */
 const sound: Record<Property, unknown> = {
-  productName: { text: 'Ostrel 110 Clear' }, revisionDate: { date: '2024-03' }, mixRatio: { parts: [2, 1], basis: 'volume' }, splitKit: { is: false },
-  packSize: { min: 3, max: 3, unit: 'gal' }, density: { min: 9.4, max: 9.4, unit: 'lb/gal' }, viscosity: { min: 600, max: 900, unit: 'mPa·s' },
-  volumeSolids: { min: 100, max: 100, unit: '%' }, weightSolids: { min: 96, max: 100, unit: '%' }, voc: { max: 0, unit: 'g/L' },
-  inductionTime: { min: 5, max: 5, unit: 'min' }, potLife: { min: 25, max: 30, unit: 'min' }, workingTime: { min: 20, max: 20, unit: 'min' },
-  recoatWindow: { min: 8, max: 24, unit: 'h' }, tackFree: { min: 6, max: 6, unit: 'h' }, footTraffic: { min: 12, max: 12, unit: 'h' },
-  vehicleTraffic: { min: 48, max: 48, unit: 'h' }, fullCure: { min: 7, max: 7, unit: 'd' }, filmThickness: { min: 8, max: 20, unit: 'mil' },
-  spreadRate: { min: 100, max: 160, unit: 'ft²/gal' }, consumption: { min: 0.5, max: 1, unit: 'lb/ft²' }, applicationTemperature: { min: -10, max: 90, unit: '°F' },
-  maxRelativeHumidity: { max: 85, unit: '%' }, dewPointMargin: { min: 5, unit: 'Δ°F' }, substrateRelativeHumidity: { max: 85, unit: '%' },
-  moistureEmission: { max: 5, unit: 'lb/1000 ft²·24 h' }, surfaceProfile: { min: 2, max: 4, unit: 'CSP' }, pullOffStrength: { min: 250, unit: 'psi' },
-  shelfLife: { min: 12, max: 12, unit: 'month' }, storageTemperature: { min: 50, max: 90, unit: '°F' }, emergencyPhone: { text: '1-800-555-0141' },
-  signalWord: { text: 'Danger' }, hazardStatements: { codes: ['H314', 'H317'] }, supplementalStatements: { codes: ['EUH205'] },
-  precautionaryStatements: { codes: ['P280', 'P305+P351+P338'] }, ingredient: { name: 'Benzyl alcohol', cas: '100-51-6', min: 10, max: 30, unit: '%' },
-  flashPoint: { min: 93, unit: '°C' }, gloves: { text: 'Butyl rubber, 0.5 mm' }, eyeProtection: { text: 'Goggles' }, respiratoryProtection: { text: 'Not needed with good air.' },
-  unNumber: { text: 'UN2735' }, properShippingName: { text: 'Amines, liquid, corrosive, n.o.s.' }, transportClass: { text: '8' }, packingGroup: { text: 'II' },
+  productName: { text: 'Ostrel 110 Clear' },
+  revisionDate: { date: '2024-03' },
+  mixRatio: { parts: [2, 1], basis: 'volume' },
+  splitKit: { is: false },
+  packSize: { min: 3, max: 3, unit: 'gal' },
+  density: { min: 9.4, max: 9.4, unit: 'lb/gal' },
+  viscosity: { min: 600, max: 900, unit: 'mPa·s' },
+  volumeSolids: { min: 100, max: 100, unit: '%' },
+  weightSolids: { min: 96, max: 100, unit: '%' },
+  voc: { max: 0, unit: 'g/L' },
+  inductionTime: { min: 5, max: 5, unit: 'min' },
+  potLife: { min: 25, max: 30, unit: 'min' },
+  workingTime: { min: 20, max: 20, unit: 'min' },
+  recoatWindow: { min: 8, max: 24, unit: 'h' },
+  tackFree: { min: 6, max: 6, unit: 'h' },
+  footTraffic: { min: 12, max: 12, unit: 'h' },
+  vehicleTraffic: { min: 48, max: 48, unit: 'h' },
+  fullCure: { min: 7, max: 7, unit: 'd' },
+  filmThickness: { min: 8, max: 20, unit: 'mil' },
+  spreadRate: { min: 100, max: 160, unit: 'ft²/gal' },
+  consumption: { min: 0.5, max: 1, unit: 'lb/ft²' },
+  applicationTemperature: { min: -10, max: 90, unit: '°F' },
+  maxRelativeHumidity: { max: 85, unit: '%' },
+  dewPointMargin: { min: 5, unit: 'Δ°F' },
+  substrateRelativeHumidity: { max: 85, unit: '%' },
+  moistureEmission: { max: 5, unit: 'lb/1000 ft²·24 h' },
+  surfaceProfile: { min: 2, max: 4, unit: 'CSP' },
+  pullOffStrength: { min: 250, unit: 'psi' },
+  shelfLife: { min: 12, max: 12, unit: 'month' },
+  storageTemperature: { min: 50, max: 90, unit: '°F' },
+  emergencyPhone: { text: '1-800-555-0141' },
+  signalWord: { text: 'Danger' },
+  hazardStatements: { codes: ['H314', 'H317'] },
+  supplementalStatements: { codes: ['EUH205'] },
+  precautionaryStatements: { codes: ['P280', 'P305+P351+P338'] },
+  ingredient: { name: 'Benzyl alcohol', cas: '100-51-6', min: 10, max: 30, unit: '%' },
+  flashPoint: { min: 93, unit: '°C' },
+  gloves: { text: 'Butyl rubber, 0.5 mm' },
+  eyeProtection: { text: 'Goggles' },
+  respiratoryProtection: { text: 'Not needed with good air.' },
+  unNumber: { text: 'UN2735' },
+  properShippingName: { text: 'Amines, liquid, corrosive, n.o.s.' },
+  transportClass: { text: '8' },
+  packingGroup: { text: 'II' },
   packPrice: { min: 210, max: 210, unit: 'USD' },
 }
 
@@ -30,7 +65,18 @@ describe('what a sheet can say', () => {
   })
 
   it.each(propertyNames)('takes for %s no value of another form, and no nothing', (property) => {
-    for (const wrong of [undefined, null, 7, 'seven', [], {}, { unit: 'mil' }, { min: 1, max: 1, unit: 'N', more: 1 }, { is: 'yes' }, { parts: [1] }]) {
+    for (const wrong of [
+      undefined,
+      null,
+      7,
+      'seven',
+      [],
+      {},
+      { unit: 'mil' },
+      { min: 1, max: 1, unit: 'N', more: 1 },
+      { is: 'yes' },
+      { parts: [1] },
+    ]) {
       expect(wrongAt(of(property, wrong))[0], JSON.stringify(wrong)).toMatch(/^value/)
     }
   })
@@ -90,9 +136,14 @@ describe('what a sheet can say', () => {
 
   it('asks each condition in its own units, and only what a property can say beside its value', () => {
     const potLife = (at: LooseStatement['at']) => wrongAt(of('potLife', sound.potLife, { at }))
-    expect(potLife({ temperature: { value: 75, unit: '°F' }, mass: { value: 150, unit: 'g' }, relativeHumidity: { value: 50, unit: '%' } })).toEqual([])
+    expect(
+      potLife({ temperature: { value: 75, unit: '°F' }, mass: { value: 150, unit: 'g' }, relativeHumidity: { value: 50, unit: '%' } }),
+    ).toEqual([])
     expect(potLife({ temperature: { value: 75, unit: 'mil' } })).toEqual(['at.temperature.value'])
-    expect(potLife({ mass: { value: -1, unit: 'g' }, relativeHumidity: { value: 101, unit: '%' } })).toEqual(['at.mass.value', 'at.relativeHumidity.value'])
+    expect(potLife({ mass: { value: -1, unit: 'g' }, relativeHumidity: { value: 101, unit: '%' } })).toEqual([
+      'at.mass.value',
+      'at.relativeHumidity.value',
+    ])
     expect(wrongAt(of('potLife', sound.potLife, { part: 'A' }))).toEqual(['part'])
     expect(wrongAt(of('density', sound.density, { part: 'A' }))).toEqual([])
     expect(wrongAt(of('potLife', sound.potLife, { film: 'wet', of: 'slab', thinned: true }))).toEqual(['film', 'of', 'thinned'])

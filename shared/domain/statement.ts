@@ -73,7 +73,9 @@ function substanceProblems({ cas, min, max }: Substance): StatementProblem[] {
     ...(cas !== undefined && !isCasNumber(cas)
       ? [{ path: ['value', 'cas'], message: 'This CAS number is not right: its check digit does not fit.' }]
       : []),
-    ...(min !== undefined && max !== undefined && min > max ? [{ path: ['value', 'min'], message: 'The least value is above the greatest.' }] : []),
+    ...(min !== undefined && max !== undefined && min > max
+      ? [{ path: ['value', 'min'], message: 'The least value is above the greatest.' }]
+      : []),
   ]
 }
 
@@ -120,7 +122,8 @@ function conditionProblems(at: ValueConditions): StatementProblem[] {
   return Object.entries(conditionDimensions).flatMap(([name, dimension]) => {
     const given = at[name as keyof typeof conditionDimensions]
     if (!given) return []
-    const message = dimensionOf(given.unit) === dimension ? impossible(given) : `Give this in ${unitsOf(dimension).map(unitText).join(', ')}.`
+    const message =
+      dimensionOf(given.unit) === dimension ? impossible(given) : `Give this in ${unitsOf(dimension).map(unitText).join(', ')}.`
     return message ? [{ path: ['at', name, 'value'], message }] : []
   })
 }
@@ -131,7 +134,9 @@ function besideProblems({ property, part, film, of, thinned }: LooseStatement): 
   return [
     ...(part !== 'mixed' && !byPart ? [{ path: ['part'], message: `${label} is said of the whole, not of one part.` }] : []),
     ...(film && property !== 'filmThickness' ? [{ path: ['film'], message: 'Only a film thickness is wet or dry.' }] : []),
-    ...(of && property !== 'applicationTemperature' ? [{ path: ['of'], message: 'Only an application temperature is asked of air, slab or material.' }] : []),
+    ...(of && property !== 'applicationTemperature'
+      ? [{ path: ['of'], message: 'Only an application temperature is asked of air, slab or material.' }]
+      : []),
     ...(thinned !== undefined && property !== 'voc' ? [{ path: ['thinned'], message: 'Only a VOC content is told as thinned.' }] : []),
   ]
 }

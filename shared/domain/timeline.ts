@@ -26,7 +26,16 @@ export function timelineOf(courses: readonly Course[], results: readonly CourseR
     const start = course.startsAfter ?? opens
     if (!result || isDry(course)) {
       opens = start
-      return { courseId: course.id, start, workingUntil: null, windowOpens: null, windowCloses: null, foot: null, vehicles: null, fullCure: null }
+      return {
+        courseId: course.id,
+        start,
+        workingUntil: null,
+        windowOpens: null,
+        windowCloses: null,
+        foot: null,
+        vehicles: null,
+        fullCure: null,
+      }
     }
     const workable = hoursOf(result.workingTime, 'min', true) ?? hoursOf(result.potLife, 'min', true)
     const entry: TimelineEntry = {

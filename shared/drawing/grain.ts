@@ -3,8 +3,35 @@ import { factOf, textOf } from '../domain/fact.ts'
 
 /** Openings of U.S. standard sieves in micrometres by number. Source: ASTM E11 nominal openings (from memory, to be checked against a copy). */
 const openings: Record<number, number> = {
-  4: 4750, 5: 4000, 6: 3350, 7: 2800, 8: 2360, 10: 2000, 12: 1700, 14: 1400, 16: 1180, 18: 1000, 20: 850, 25: 710, 30: 600, 35: 500, 40: 425,
-  45: 355, 50: 300, 60: 250, 70: 212, 80: 180, 100: 150, 120: 125, 140: 106, 170: 90, 200: 75, 230: 63, 270: 53, 325: 45, 400: 38,
+  4: 4750,
+  5: 4000,
+  6: 3350,
+  7: 2800,
+  8: 2360,
+  10: 2000,
+  12: 1700,
+  14: 1400,
+  16: 1180,
+  18: 1000,
+  20: 850,
+  25: 710,
+  30: 600,
+  35: 500,
+  40: 425,
+  45: 355,
+  50: 300,
+  60: 250,
+  70: 212,
+  80: 180,
+  100: 150,
+  120: 125,
+  140: 106,
+  170: 90,
+  200: 75,
+  230: 63,
+  270: 53,
+  325: 45,
+  400: 38,
 }
 
 /** The opening of a sieve by number, between the standard ones by proportion of size × number. */

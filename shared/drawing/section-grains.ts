@@ -14,11 +14,18 @@ function radiusOf(grain: number | null, { layer, bottom, top }: PlacedLayer, sca
 }
 
 /** Paths of stones, one a colour. */
-function sand(places: readonly Point[], radius: number, { id, random, least = 0.62 }: { id: string; random: () => number; least?: number }): Shape[] {
+function sand(
+  places: readonly Point[],
+  radius: number,
+  { id, random, least = 0.62 }: { id: string; random: () => number; least?: number },
+): Shape[] {
   const edge = radius > 2.2 ? { stroke: '#6f5d3c', strokeWidth: 0.5 } : {}
   const byColor = sands.map((): string[] => [])
-  for (const at of places) byColor[Math.floor(random() * sands.length)]?.push(stone(at, radius * (least + random() * (1.08 - least)), random))
-  return byColor.flatMap((d, index): Shape[] => (d.length > 0 ? [{ kind: 'path', d: d.join(''), fill: sands[index] ?? sands[0] ?? '', course: id, ...edge }] : []))
+  for (const at of places)
+    byColor[Math.floor(random() * sands.length)]?.push(stone(at, radius * (least + random() * (1.08 - least)), random))
+  return byColor.flatMap((d, index): Shape[] =>
+    d.length > 0 ? [{ kind: 'path', d: d.join(''), fill: sands[index] ?? sands[0] ?? '', course: id, ...edge }] : [],
+  )
 }
 
 /** Sand mixed into a course: throughout its body, down into the spalls it takes. */
@@ -30,7 +37,8 @@ export function fillerGrains(placed: PlacedLayer, scale: SectionScale): Shape[] 
   const deepest = Math.max(...lower.map(([, y]) => y))
   const field = { left: lower[0]?.[0] ?? 0, right: lower.at(-1)?.[0] ?? 0, top, bottom: deepest, pitch: radius * 2.15 }
   const inside = scatter(field, random).filter(
-    ([x, y]) => y > heightAt(upper, x) + radius * 0.8 && y < heightAt(lower, x) - radius * 0.8 && x > field.left + radius && x < field.right - radius,
+    ([x, y]) =>
+      y > heightAt(upper, x) + radius * 0.8 && y < heightAt(lower, x) - radius * 0.8 && x > field.left + radius && x < field.right - radius,
   )
   return sand(inside, radius, { id: layer.id, random })
 }

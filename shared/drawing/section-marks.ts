@@ -16,7 +16,10 @@ export function dimensions({ placed, top, ground }: Placing, unit: DrawingUnit):
   const chain = ground.left - 13
   const edges = [...films.map((film) => film.bottom), top].map(fixed)
   const falling = [...films].reverse()
-  const labels = spread(falling.map((film) => (film.top + film.bottom) / 2), { gap, from: 8, to: ground.end })
+  const labels = spread(
+    falling.map((film) => (film.top + film.bottom) / 2),
+    { gap, from: 8, to: ground.end },
+  )
   return [
     { kind: 'path', d: edges.map((y) => `M${ground.left - 3} ${y}H${chain - 5}`).join(''), stroke: ink.pencil, strokeWidth: 0.5 },
     { kind: 'path', d: `M${chain} ${fixed(top)}V${fixed(ground.surface)}`, stroke: ink.ink, strokeWidth: 0.7 },
@@ -30,7 +33,19 @@ function dimensionText({ layer, top, bottom }: PlacedLayer, { chain, y, unit }: 
   const middle = (top + bottom) / 2
   const text = layer.thickness === null ? '?' : `${lengthText(layer.thickness, unit)}${layer.typical ? '*' : ''}`
   const moved = Math.abs(middle - y) > 3
-  const lead: Shape[] = moved ? [{ kind: 'path', d: pathOf([[chain - 1, middle], [chain - 7, y]]), stroke: ink.pencil, strokeWidth: 0.5 }] : []
+  const lead: Shape[] = moved
+    ? [
+        {
+          kind: 'path',
+          d: pathOf([
+            [chain - 1, middle],
+            [chain - 7, y],
+          ]),
+          stroke: ink.pencil,
+          strokeWidth: 0.5,
+        },
+      ]
+    : []
   return [...lead, { kind: 'text', x: chain - 9, y: y + 4, text, size, fill: ink.ink, anchor: 'end', course: layer.id }]
 }
 
@@ -41,11 +56,22 @@ function overall({ placed, top, ground }: Placing, unit: DrawingUnit): Shape[] {
   const widest = Math.max(...films.map(({ layer }) => (layer.thickness === null ? 8 : textWidth(lengthText(layer.thickness, unit), size))))
   const x = fixed(ground.left - 13 - 9 - widest - 9)
   const known = films.every(({ layer }) => layer.thickness !== null)
-  const text = known ? `${lengthText(films.reduce((sum, { layer }) => sum + (layer.thickness ?? 0), 0), unit)} ${unit}` : 'not known'
+  const text = known
+    ? `${lengthText(
+        films.reduce((sum, { layer }) => sum + (layer.thickness ?? 0), 0),
+        unit,
+      )} ${unit}`
+    : 'not known'
   const middle = (top + ground.surface) / 2
   const tall = ground.surface - top
   return [
-    { kind: 'path', d: `M${x} ${fixed(top)}V${fixed(ground.surface)}M${x + 4} ${fixed(top)}H${x - 4}M${x + 4} ${fixed(ground.surface)}H${x - 4}`, stroke: ink.ink, strokeWidth: 0.7, ...(known ? {} : { dash: '3 3' }) },
+    {
+      kind: 'path',
+      d: `M${x} ${fixed(top)}V${fixed(ground.surface)}M${x + 4} ${fixed(top)}H${x - 4}M${x + 4} ${fixed(ground.surface)}H${x - 4}`,
+      stroke: ink.ink,
+      strokeWidth: 0.7,
+      ...(known ? {} : { dash: '3 3' }),
+    },
     { kind: 'path', d: `${tick(x, fixed(top))}${tick(x, fixed(ground.surface))}`, stroke: ink.ink, strokeWidth: 1.1 },
     tall > textWidth(text, size)
       ? { kind: 'text', x: x - 5, y: middle, text, size, fill: ink.ink, anchor: 'middle', rotate: -90 }
@@ -88,7 +114,12 @@ export function leaders(placing: Placing, { x, y }: Ends): Shape[] {
     const line: Point[] = [from, [elbow, exit], [Math.max(x - 14, elbow), end], [x, end]]
     return [
       { kind: 'path', d: pathOf(line), stroke: ink.pencil, strokeWidth: 0.7, course: one.layer.id, role: 'leader' },
-      { kind: 'path', d: `M${fixed(from[0]) - 1.6} ${fixed(from[1])}a1.6 1.6 0 1 0 3.2 0a1.6 1.6 0 1 0 -3.2 0Z`, fill: ink.ink, course: one.layer.id },
+      {
+        kind: 'path',
+        d: `M${fixed(from[0]) - 1.6} ${fixed(from[1])}a1.6 1.6 0 1 0 3.2 0a1.6 1.6 0 1 0 -3.2 0Z`,
+        fill: ink.ink,
+        course: one.layer.id,
+      },
     ]
   })
 }
@@ -96,22 +127,41 @@ export function leaders(placing: Placing, { x, y }: Ends): Shape[] {
 /** Numbers of the courses at short leaders, where no rows stand beside the figure. */
 export function numbers(placing: Placing): { shapes: Shape[]; y: Record<string, number> } {
   const list = origins(placing)
-  const places = spread(list.map(({ exit }) => exit), { gap: 15, from: 8, to: placing.ground.end + 20 })
+  const places = spread(
+    list.map(({ exit }) => exit),
+    { gap: 15, from: 8, to: placing.ground.end + 20 },
+  )
   const y = Object.fromEntries(list.map(({ one }, index) => [one.layer.id, places[index] ?? 0]))
   const shapes = list.map(({ one: { layer, number } }): Shape => ({
-    kind: 'text', x: placing.ground.right + 36, y: (y[layer.id] ?? 0) + 4, text: String(number), size, fill: ink.ink, course: layer.id,
+    kind: 'text',
+    x: placing.ground.right + 36,
+    y: (y[layer.id] ?? 0) + 4,
+    text: String(number),
+    size,
+    fill: ink.ink,
+    course: layer.id,
   }))
   return { shapes, y }
 }
 
 /** Titles at the ends of the leaders, for a figure that stands by itself. Returns the places they took. */
-export function titles(placing: Placing, { x, from, to, unit }: { x: number; from: number; to: number; unit: DrawingUnit }): { shapes: Shape[]; y: Record<string, number> } {
+export function titles(
+  placing: Placing,
+  { x, from, to, unit }: { x: number; from: number; to: number; unit: DrawingUnit },
+): { shapes: Shape[]; y: Record<string, number> } {
   const list = origins(placing)
-  const places = spread(list.map(({ exit }) => exit), { gap: Math.min(31, (to - from) / Math.max(1, list.length)), from, to })
+  const places = spread(
+    list.map(({ exit }) => exit),
+    { gap: Math.min(31, (to - from) / Math.max(1, list.length)), from, to },
+  )
   const y = Object.fromEntries(list.map(({ one }, index) => [one.layer.id, places[index] ?? 0]))
   const shapes = list.flatMap(({ one: { layer, number } }): Shape[] => {
     const at = y[layer.id] ?? 0
-    const second = [layer.detail, layer.profile === null ? '' : `CSP ${layer.profile}`, layer.thickness === null ? '' : `${lengthText(layer.thickness, unit)} ${unit}`]
+    const second = [
+      layer.detail,
+      layer.profile === null ? '' : `CSP ${layer.profile}`,
+      layer.thickness === null ? '' : `${lengthText(layer.thickness, unit)} ${unit}`,
+    ]
     return [
       { kind: 'text', x: x + 6, y: at + 1, text: `${number}  ${layer.title}`, size: 13, fill: ink.ink, weight: 600, course: layer.id },
       { kind: 'text', x: x + 19, y: at + 14, text: second.filter(Boolean).join(', '), size: 11.5, fill: ink.pencil, course: layer.id },

@@ -80,14 +80,19 @@ export function place(layers: readonly SectionLayer[], frame: Frame): Placing {
   const films = layers.filter((layer) => laysFilm(layer.stage))
   const unknown = films.filter((layer) => layer.thickness === null).length * unknownHeight[compact ? 'compact' : 'full']
   const share = room * (compact ? 0.58 : 0.5)
-  const scale = fitScale(films.flatMap((layer) => layer.thickness ?? []), {
-    height: Math.max(share - unknown, 24), least: compact ? 4 : 17, most: tallest(films, compact ? room * 0.4 : 118),
-  })
-  const heightOf = (layer: SectionLayer) => (layer.thickness === null ? unknownHeight[compact ? 'compact' : 'full'] : drawnHeight(layer.thickness, scale))
+  const scale = fitScale(
+    films.flatMap((layer) => layer.thickness ?? []),
+    { height: Math.max(share - unknown, 24), least: compact ? 4 : 17, most: tallest(films, compact ? room * 0.4 : 118) },
+  )
+  const heightOf = (layer: SectionLayer) =>
+    layer.thickness === null ? unknownHeight[compact ? 'compact' : 'full'] : drawnHeight(layer.thickness, scale)
   const stack = films.reduce((sum, layer) => sum + heightOf(layer), 0)
   const slab = compact ? room - stack : within(room * 0.4, 96, 210)
   const free = frame.bottom - frame.top - stack - slab
-  const top = frame.anchors.length === 0 ? frame.top + Math.max(0, free) / 2 : within(middleOfRows(frame.anchors) - stack * 0.6, frame.top, frame.top + free)
+  const top =
+    frame.anchors.length === 0
+      ? frame.top + Math.max(0, free) / 2
+      : within(middleOfRows(frame.anchors) - stack * 0.6, frame.top, frame.top + free)
   const ground = groundOf(layers, { ...frame, surface: top + stack, end: Math.min(frame.bottom, top + stack + slab) })
   return { placed: stackUp(layers, ground, heightOf), ground, scale, top }
 }
@@ -110,7 +115,10 @@ function stackUp(layers: readonly SectionLayer[], ground: Ground, heightOf: (lay
 }
 
 /** The slab with its profile; joints and spalls stand in for a survey where a fill or a slurry will take them. */
-function groundOf(layers: readonly SectionLayer[], at: { left: number; right: number; surface: number; end: number; compact: boolean }): Ground {
+function groundOf(
+  layers: readonly SectionLayer[],
+  at: { left: number; right: number; surface: number; end: number; compact: boolean },
+): Ground {
   const { left, right, surface, end, compact } = at
   const fills = layers.filter((layer) => layer.stage === 'fill')
   const levels = layers.some((layer) => layer.stage === 'slurry')
@@ -124,13 +132,30 @@ function groundOf(layers: readonly SectionLayer[], at: { left: number; right: nu
           { from: left + wide * 0.86, to: right + wide * 0.06, depth: deep * 0.62 },
         ]
       : []
-  const joints = fills.map((layer, index) => ({ x: left + wide * (0.68 - index * 0.34), width: compact ? 2 : 5, depth: (end - surface) * 0.58, layer }))
+  const joints = fills.map((layer, index) => ({
+    x: left + wide * (0.68 - index * 0.34),
+    width: compact ? 2 : 5,
+    depth: (end - surface) * 0.58,
+    layer,
+  }))
   const asked = layers.find((layer) => layer.stage === 'prep' && layer.profile !== null)?.profile ?? 0
   const roughness = (asked === 0 ? 0.6 : 0.5 + asked * 0.5) * (compact ? 0.35 : 1)
   return { left, right, surface, end, spalls, joints, contour: contourOf({ left, right, surface, roughness, spalls }) }
 }
 
-function contourOf({ left, right, surface, roughness, spalls }: { left: number; right: number; surface: number; roughness: number; spalls: readonly Spall[] }): Point[] {
+function contourOf({
+  left,
+  right,
+  surface,
+  roughness,
+  spalls,
+}: {
+  left: number
+  right: number
+  surface: number
+  roughness: number
+  spalls: readonly Spall[]
+}): Point[] {
   const random = seeded('prepared slab')
   const steps = Math.max(16, Math.round((right - left) / 4.5))
   return Array.from({ length: steps + 1 }, (_, index): Point => {

@@ -7,7 +7,14 @@ const stones = ['#a9ada6', '#9da29b', '#b6b9b1', '#afaa9d']
 /** The end of the slab as a draftsman breaks it off: straight, with one sharp kink. */
 function breakLine({ left, right, end }: Ground, over: number): Point[] {
   const x = left + (right - left) * 0.42
-  return [[left - over, end], [x - 9, end], [x - 3, end - 9], [x + 4, end + 9], [x + 10, end], [right + over, end]]
+  return [
+    [left - over, end],
+    [x - 9, end],
+    [x - 3, end - 9],
+    [x + 4, end + 9],
+    [x + 10, end],
+    [right + over, end],
+  ]
 }
 
 /** Concrete in section, with its aggregate, what fills its joints, and the line that breaks it off. */
@@ -19,10 +26,25 @@ export function slabShapes(ground: Ground, compact: boolean): Shape[] {
     ...aggregate(ground, compact),
     ...ground.joints.map(({ x, width, depth, layer }): Shape => {
       const top = Math.min(heightAt(contour, x - width / 2), heightAt(contour, x + width / 2))
-      const corners: Point[] = [[x - width / 2, top], [x + width / 2, top], [x + width / 2, ground.surface + depth], [x - width / 2, ground.surface + depth]]
-      return { kind: 'path', d: pathOf(corners, true), fill: layer.color ?? ink.unknown, stroke: ink.ink, strokeWidth: 0.6, course: layer.id, ...(layer.color ? {} : { dash: '3 2' }) }
+      const corners: Point[] = [
+        [x - width / 2, top],
+        [x + width / 2, top],
+        [x + width / 2, ground.surface + depth],
+        [x - width / 2, ground.surface + depth],
+      ]
+      return {
+        kind: 'path',
+        d: pathOf(corners, true),
+        fill: layer.color ?? ink.unknown,
+        stroke: ink.ink,
+        strokeWidth: 0.6,
+        course: layer.id,
+        ...(layer.color ? {} : { dash: '3 2' }),
+      }
     }),
-    ...(compact ? [] : [{ kind: 'path' as const, d: pathOf(breakLine({ ...ground, left, right, end }, 7)), stroke: ink.ink, strokeWidth: 0.8 }]),
+    ...(compact
+      ? []
+      : [{ kind: 'path' as const, d: pathOf(breakLine({ ...ground, left, right, end }, 7)), stroke: ink.ink, strokeWidth: 0.8 }]),
   ]
 }
 
@@ -37,7 +59,8 @@ function aggregate(ground: Ground, compact: boolean): Shape[] {
     byColor.get(stones[Math.floor(random() * stones.length)] ?? '')?.push(stone([x, y], radius, random))
   }
   const field = { left, right, top: surface, bottom: end }
-  for (const at of scatter({ ...field, pitch: compact ? 11 : 24 }, random, 120)) keep(at, (compact ? 1.6 : 3.4) + random() * (compact ? 1.2 : 4))
+  for (const at of scatter({ ...field, pitch: compact ? 11 : 24 }, random, 120))
+    keep(at, (compact ? 1.6 : 3.4) + random() * (compact ? 1.2 : 4))
   if (!compact) for (const at of scatter({ ...field, pitch: 12 }, random, 260)) if (random() > 0.45) keep(at, 0.7 + random() * 0.9)
   return [...byColor].flatMap(([fill, d]) => (d.length > 0 ? [{ kind: 'path' as const, d: d.join(''), fill }] : []))
 }

@@ -22,7 +22,12 @@ export function layerWords({ layer, number }: Numbered, unit: DrawingUnit): stri
   const parts = [`Course ${number}`, layer.title]
   if (layer.detail) parts.push(layer.detail)
   if (layer.profile !== null) parts.push(`surface profile CSP ${layer.profile}`)
-  if (laysFilm(layer.stage)) parts.push(layer.thickness === null ? 'thickness not known' : `${lengthText(layer.thickness, unit)} ${unit}${layer.typical ? ', typical, verify' : ''}`)
+  if (laysFilm(layer.stage))
+    parts.push(
+      layer.thickness === null
+        ? 'thickness not known'
+        : `${lengthText(layer.thickness, unit)} ${unit}${layer.typical ? ', typical, verify' : ''}`,
+    )
   if (layer.filler) parts.push('filled with sand')
   if (layer.broadcast) parts.push(layer.broadcast.toRefusal ? 'sand broadcast to refusal' : 'sand broadcast')
   if (layer.status === 'stop') parts.push('stopped by a check')
@@ -43,13 +48,17 @@ export function sectionNotes(layers: readonly SectionLayer[], scale: SectionScal
   const films = layers.filter((layer) => laysFilm(layer.stage))
   const known = films.filter((layer) => layer.thickness !== null)
   const thick = known.filter((layer) => (layer.thickness ?? 0) > scale.filmLimit)
-  const whose = thick.length > 0 && same(thick.map((layer) => layer.stage)) ? `${stageNames[thick[0]?.stage ?? 'body'].name.toLowerCase()}’s scale` : 'scale of the thicker courses'
+  const whose =
+    thick.length > 0 && same(thick.map((layer) => layer.stage))
+      ? `${stageNames[thick[0]?.stage ?? 'body'].name.toLowerCase()}’s scale`
+      : 'scale of the thicker courses'
   const thin = films.length > thick.length ? lengthText(scale.filmLimit, unit) : ''
   const grains = layers.flatMap((layer) => [layer.filler, layer.broadcast]).filter((sand) => sand !== null)
   const standIns = layers.some((layer) => layer.stage === 'fill' || layer.stage === 'slurry')
   return [
     known.length > 0 && `Dimensions in ${unit}, wet.`,
-    known.length > 1 && (scale.filmFactor === 1 ? 'Courses drawn to one scale.' : `Films up to ${thin} ${unit} drawn ${scale.filmFactor} × the ${whose}.`),
+    known.length > 1 &&
+      (scale.filmFactor === 1 ? 'Courses drawn to one scale.' : `Films up to ${thin} ${unit} drawn ${scale.filmFactor} × the ${whose}.`),
     known.length < films.length && 'Dashed: thickness not known.',
     films.some((layer) => layer.typical) && 'Some thicknesses rest on typical values: verify.',
     layers.some((layer) => layer.status === 'stop') && 'Hatched: a check stops this course.',

@@ -6,9 +6,23 @@ import type { SectionLayer } from './section-layer.ts'
 import { lengthText } from './section-words.ts'
 
 const mil = 25.4
-const layer = (id: string, stage: Stage, { thicknessInMil = null, ...more }: Partial<SectionLayer> & { thicknessInMil?: number | null } = {}): SectionLayer => ({
-  id, stage, title: `${stage} ${id}`, detail: '', color: '#8f9a98', thickness: thicknessInMil === null ? null : thicknessInMil * mil,
-  typical: false, profile: null, filler: null, broadcast: null, status: null, ...more,
+const layer = (
+  id: string,
+  stage: Stage,
+  { thicknessInMil = null, ...more }: Partial<SectionLayer> & { thicknessInMil?: number | null } = {},
+): SectionLayer => ({
+  id,
+  stage,
+  title: `${stage} ${id}`,
+  detail: '',
+  color: '#8f9a98',
+  thickness: thicknessInMil === null ? null : thicknessInMil * mil,
+  typical: false,
+  profile: null,
+  filler: null,
+  broadcast: null,
+  status: null,
+  ...more,
 })
 const freight = [
   layer('1', 'prep', { profile: 5 }),
@@ -18,16 +32,31 @@ const freight = [
   layer('5', 'top', { thicknessInMil: 10.7 }),
 ]
 const fourteen = [
-  layer('1', 'prep', { profile: 6 }), layer('2', 'fill'), layer('3', 'prime', { thicknessInMil: 6 }), layer('4', 'slurry', { thicknessInMil: 125, filler: { grain: null } }),
-  layer('5', 'grind'), layer('6', 'prime', { thicknessInMil: 6 }), layer('7', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: true } }),
-  layer('8', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: false } }), layer('9', 'body', { thicknessInMil: 40 }), layer('10', 'body'), layer('11', 'seal', { thicknessInMil: 10 }),
-  layer('12', 'top', { thicknessInMil: 5 }), layer('13', 'top', { thicknessInMil: 3, status: 'stop' }), layer('14', 'cove'),
+  layer('1', 'prep', { profile: 6 }),
+  layer('2', 'fill'),
+  layer('3', 'prime', { thicknessInMil: 6 }),
+  layer('4', 'slurry', { thicknessInMil: 125, filler: { grain: null } }),
+  layer('5', 'grind'),
+  layer('6', 'prime', { thicknessInMil: 6 }),
+  layer('7', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: true } }),
+  layer('8', 'broadcast', { thicknessInMil: 20, broadcast: { grain: 600, toRefusal: false } }),
+  layer('9', 'body', { thicknessInMil: 40 }),
+  layer('10', 'body'),
+  layer('11', 'seal', { thicknessInMil: 10 }),
+  layer('12', 'top', { thicknessInMil: 5 }),
+  layer('13', 'top', { thicknessInMil: 3, status: 'stop' }),
+  layer('14', 'cove'),
 ]
 const builder: SectionOptions = { width: 330, height: 588, unit: 'mil' }
-const texts = (options: SectionOptions, layers = freight) => sectionOf(layers, options).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))
+const texts = (options: SectionOptions, layers = freight) =>
+  sectionOf(layers, options).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))
 
 describe('sectionOf', () => {
-  it.each([['two courses', freight.slice(2, 4)], ['five courses', freight], ['fourteen courses', fourteen]])('draws %s true to scale within each band', (_, layers) => {
+  it.each([
+    ['two courses', freight.slice(2, 4)],
+    ['five courses', freight],
+    ['fourteen courses', fourteen],
+  ])('draws %s true to scale within each band', (_, layers) => {
     const model = sectionOf(layers, builder)
     for (const drawn of model.layers) {
       if (drawn.thickness === null || drawn.top === drawn.bottom) continue
@@ -68,7 +97,9 @@ describe('sectionOf', () => {
   it('marks what stands in for a survey, for a grain size and for a stop', () => {
     expect(sectionOf(fourteen, builder).notes).toEqual(
       expect.arrayContaining([
-        'Spalls and joints not surveyed: drawn as a stand-in.', 'Grain size not stated: sand drawn as a stand-in.', 'Hatched: a check stops this course.',
+        'Spalls and joints not surveyed: drawn as a stand-in.',
+        'Grain size not stated: sand drawn as a stand-in.',
+        'Hatched: a check stops this course.',
       ]),
     )
     const plain = sectionOf([layer('1', 'prep', { profile: 2 }), layer('2', 'top', { thicknessInMil: 10 })], builder)
@@ -95,7 +126,9 @@ describe('sectionOf', () => {
     const svg = sectionSvg(sectionOf(fourteen, { width: 640, height: 700, unit: 'mil', standalone: true }))
     expect(svg).toBe(sectionSvg(sectionOf(fourteen, { width: 640, height: 700, unit: 'mil', standalone: true })))
     expect(svg).not.toMatch(/NaN|undefined|Infinity/)
-    expect(sectionSvg(sectionOf([layer('1', 'top', { thicknessInMil: 5, title: 'A & <B>' })], { ...builder, standalone: true }))).toContain('A &amp; &lt;B&gt;')
+    expect(sectionSvg(sectionOf([layer('1', 'top', { thicknessInMil: 5, title: 'A & <B>' })], { ...builder, standalone: true }))).toContain(
+      'A &amp; &lt;B&gt;',
+    )
     const small = sectionOf(fourteen, { width: 132, height: 56, unit: 'mil', compact: true })
     expect(small.shapes.filter((shape) => shape.kind === 'text')).toEqual([])
     expect(sectionSvg(small).length).toBeLessThan(40_000)

@@ -69,10 +69,21 @@ export function sectionOf(layers: readonly SectionLayer[], options: SectionOptio
     ...courseShapes(placing, compact),
     ...(compact ? [] : dimensions(placing, unit)),
     ...(compact ? [] : pointers(placing, options, floor)),
-    ...lines.map((text, index): Shape => ({ kind: 'text', x: 8, y: height - 6 - (lines.length - 1 - index) * note.line, text, size: note.size, fill: ink.pencil })),
+    ...lines.map((text, index): Shape => ({
+      kind: 'text',
+      x: 8,
+      y: height - 6 - (lines.length - 1 - index) * note.line,
+      text,
+      size: note.size,
+      fill: ink.pencil,
+    })),
   ]
   return {
-    width, height, shapes, notes, scale: placing.scale,
+    width,
+    height,
+    shapes,
+    notes,
+    scale: placing.scale,
     layers: placing.placed.map((one) => drawn(one, placing, unit)),
     alternative: alternativeText(layers, unit),
   }
@@ -118,13 +129,29 @@ const outlineOf = ({ upper, lower }: PlacedLayer): Point[] => [...upper, ...[...
 
 function body(one: PlacedLayer): Shape {
   const unknown = one.layer.thickness === null
-  return { kind: 'path', d: pathOf(outlineOf(one), true), fill: one.layer.color ?? ink.unknown, course: one.layer.id, ...(unknown ? { opacity: 0.45 } : {}) }
+  return {
+    kind: 'path',
+    d: pathOf(outlineOf(one), true),
+    fill: one.layer.color ?? ink.unknown,
+    course: one.layer.id,
+    ...(unknown ? { opacity: 0.45 } : {}),
+  }
 }
 
 function edges(one: PlacedLayer, compact: boolean): Shape[] {
   const width = compact ? 0.5 : 0.8
-  if (one.layer.thickness !== null) return [{ kind: 'path', d: pathOf(one.upper), stroke: ink.ink, strokeWidth: width, course: one.layer.id }]
-  return [{ kind: 'path', d: pathOf(outlineOf(one), true), stroke: ink.pencil, strokeWidth: width + 0.2, dash: compact ? '2 2' : '5 3', course: one.layer.id }]
+  if (one.layer.thickness !== null)
+    return [{ kind: 'path', d: pathOf(one.upper), stroke: ink.ink, strokeWidth: width, course: one.layer.id }]
+  return [
+    {
+      kind: 'path',
+      d: pathOf(outlineOf(one), true),
+      stroke: ink.pencil,
+      strokeWidth: width + 0.2,
+      dash: compact ? '2 2' : '5 3',
+      course: one.layer.id,
+    },
+  ]
 }
 
 /** The prepared surface as the heaviest line, a ground one as a line with strokes across it. */
@@ -157,12 +184,21 @@ function hatch(one: PlacedLayer, ground: Ground): Shape[] {
   }
   if (one.kind === 'surface') {
     const under = one.upper.map(([x, y]) => `M${Math.round(x)} ${Math.round(y * 10) / 10 + 7}l6 -6`)
-    return [{ kind: 'path', d: under.filter((_, index) => index % 2 === 0).join(''), ...line }, { kind: 'path', d: pathOf(one.upper), ...line }]
+    return [
+      { kind: 'path', d: under.filter((_, index) => index % 2 === 0).join(''), ...line },
+      { kind: 'path', d: pathOf(one.upper), ...line },
+    ]
   }
   const joint = ground.joints.find(({ layer }) => layer.id === one.layer.id)
   if (!joint) return []
   const { x, width, depth } = joint
-  return [{ kind: 'path', d: strokes({ left: x - width / 2 - 3, right: x + width / 2 + 3, top: ground.surface, bottom: ground.surface + depth }), ...line }]
+  return [
+    {
+      kind: 'path',
+      d: strokes({ left: x - width / 2 - 3, right: x + width / 2 + 3, top: ground.surface, bottom: ground.surface + depth }),
+      ...line,
+    },
+  ]
 }
 
 /** Parallel strokes rising to the right, cut to a box. */
@@ -172,7 +208,13 @@ function strokes({ left, right, top, bottom }: { left: number; right: number; to
   for (let x = left - tall; x < right; x += 7) {
     const cutLow = Math.max(0, left - x)
     const cutHigh = Math.max(0, x + tall - right)
-    if (tall - cutLow - cutHigh > 0.5) lines.push(pathOf([[x + cutLow, bottom - cutLow], [x + tall - cutHigh, top + cutHigh]]))
+    if (tall - cutLow - cutHigh > 0.5)
+      lines.push(
+        pathOf([
+          [x + cutLow, bottom - cutLow],
+          [x + tall - cutHigh, top + cutHigh],
+        ]),
+      )
   }
   return lines.join('')
 }
@@ -184,7 +226,14 @@ function coveShapes({ layer, upper, top }: PlacedLayer): Shape[] {
   const high = Math.min(24, top - 4)
   return [
     { kind: 'path', d: `M${x - wall} ${top}V${top - high - 6}H${x}V${top}Z`, fill: ink.slab, stroke: ink.ink, strokeWidth: 0.7 },
-    { kind: 'path', d: `M${x} ${top}V${top - high}Q${x} ${top - 2} ${x + high * 0.9} ${top}Z`, fill: layer.color ?? ink.unknown, stroke: ink.ink, strokeWidth: 0.8, course: layer.id },
+    {
+      kind: 'path',
+      d: `M${x} ${top}V${top - high}Q${x} ${top - 2} ${x + high * 0.9} ${top}Z`,
+      fill: layer.color ?? ink.unknown,
+      stroke: ink.ink,
+      strokeWidth: 0.8,
+      course: layer.id,
+    },
   ]
 }
 
@@ -196,9 +245,31 @@ function drawn(one: PlacedLayer, { ground }: Placing, unit: DrawingUnit): DrawnL
   if (one.kind === 'fill') {
     const joint = ground.joints.find((each) => each.layer.id === layer.id)
     const { x, depth } = joint ?? { x: ground.left, depth: 0 }
-    return { ...base, outline: pathOf([[x - 6, ground.surface], [x + 6, ground.surface], [x + 6, ground.surface + depth], [x - 6, ground.surface + depth]], true) }
+    return {
+      ...base,
+      outline: pathOf(
+        [
+          [x - 6, ground.surface],
+          [x + 6, ground.surface],
+          [x + 6, ground.surface + depth],
+          [x - 6, ground.surface + depth],
+        ],
+        true,
+      ),
+    }
   }
-  if (one.kind === 'cove') return { ...base, outline: pathOf([[ground.left, top - 24], [ground.left + 22, top], [ground.left, top]], true) }
+  if (one.kind === 'cove')
+    return {
+      ...base,
+      outline: pathOf(
+        [
+          [ground.left, top - 24],
+          [ground.left + 22, top],
+          [ground.left, top],
+        ],
+        true,
+      ),
+    }
   const lower = one.upper.map(([x, y]): Point => [x, y + 7])
   return { ...base, outline: pathOf([...one.upper, ...lower.reverse()], true) }
 }

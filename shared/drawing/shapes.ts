@@ -30,7 +30,15 @@ export type Shape = PathShape | TextShape
 
 /** Colours of the drawing: the tokens of the product's look, in hex, for renderers without a style sheet. */
 export const ink = {
-  ink: '#1c2326', pencil: '#5c676a', rule: '#d9d4c6', card: '#fffefb', resin: '#a8571a', wash: '#f6e7d6', stop: '#a3241d', slab: '#c8cac4', unknown: '#e9e5da',
+  ink: '#1c2326',
+  pencil: '#5c676a',
+  rule: '#d9d4c6',
+  card: '#fffefb',
+  resin: '#a8571a',
+  wash: '#f6e7d6',
+  stop: '#a3241d',
+  slab: '#c8cac4',
+  unknown: '#e9e5da',
 } as const
 
 const round = (value: number) => Math.round(value * 10) / 10
@@ -57,7 +65,10 @@ function shapeSvg(shape: Shape): string {
 }
 
 /** A figure as a string of SVG that stands by itself: for documents, where no browser draws. */
-export function svgOf(model: { width: number; height: number; shapes: readonly Shape[]; alternative: string }, { fontFamily = 'Source Sans 3' } = {}): string {
+export function svgOf(
+  model: { width: number; height: number; shapes: readonly Shape[]; alternative: string },
+  { fontFamily = 'Source Sans 3' } = {},
+): string {
   const { width, height } = model
   return (
     `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${width} ${height}" role="img" font-family="${escaped(fontFamily)}">` +
@@ -67,7 +78,12 @@ export function svgOf(model: { width: number; height: number; shapes: readonly S
 
 /** Width of a line of Source Sans 3 in pixels, near enough to place and break text where nothing can measure it. */
 export function textWidth(text: string, size: number): number {
-  return Array.from(text).reduce((sum, sign) => sum + (/[ilj.,:;'|!()[\]]/.test(sign) ? 0.27 : /[mwMW@%—]/.test(sign) ? 0.78 : /[A-Z×²³µ]/.test(sign) ? 0.57 : 0.495), 0) * size
+  return (
+    Array.from(text).reduce(
+      (sum, sign) => sum + (/[ilj.,:;'|!()[\]]/.test(sign) ? 0.27 : /[mwMW@%—]/.test(sign) ? 0.78 : /[A-Z×²³µ]/.test(sign) ? 0.57 : 0.495),
+      0,
+    ) * size
+  )
 }
 
 /** Breaks words into lines no wider than `width`. */
@@ -91,7 +107,11 @@ export function spread(wanted: readonly number[], { gap, from, to }: { gap: numb
   }
   for (const place of wanted) {
     groups.push({ sum: place, count: 1 })
-    for (let last = groups.at(-1), before = groups.at(-2); last && before && start(before) + before.count * gap > start(last); last = groups.at(-1), before = groups.at(-2)) {
+    for (
+      let last = groups.at(-1), before = groups.at(-2);
+      last && before && start(before) + before.count * gap > start(last);
+      last = groups.at(-1), before = groups.at(-2)
+    ) {
       groups.splice(-2, 2, { sum: before.sum + last.sum, count: before.count + last.count })
     }
   }

@@ -3,15 +3,29 @@ import type { TimelineEntry } from '../domain/evaluation.ts'
 import { type TimelineRow, hoursText, timelineOf, timelineSvg } from './timeline.ts'
 
 const row = (number: number, title: string, entry: Partial<TimelineEntry>): TimelineRow => ({
-  id: String(number), number, title, color: '#8f9a98',
-  entry: { courseId: String(number), start: null, workingUntil: null, windowOpens: null, windowCloses: null, foot: null, vehicles: null, fullCure: null, ...entry },
+  id: String(number),
+  number,
+  title,
+  color: '#8f9a98',
+  entry: {
+    courseId: String(number),
+    start: null,
+    workingUntil: null,
+    windowOpens: null,
+    windowCloses: null,
+    foot: null,
+    vehicles: null,
+    fullCure: null,
+    ...entry,
+  },
 })
 const rows = [
   row(1, 'Slurry', { start: 0, workingUntil: 0.4, windowOpens: 12, windowCloses: 30 }),
   row(2, 'Prime coat', { start: 14, workingUntil: 14.5, windowOpens: 23, windowCloses: 52 }),
   row(3, 'Top coat', { start: 24, workingUntil: 24.5, foot: 48, vehicles: 96, fullCure: 192 }),
 ]
-const texts = (list: TimelineRow[], options = { width: 1000 }) => timelineOf(list, options).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))
+const texts = (list: TimelineRow[], options = { width: 1000 }) =>
+  timelineOf(list, options).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))
 
 describe('timelineOf', () => {
   it('shows each window by its two times, and when feet and vehicles return', () => {
@@ -19,7 +33,9 @@ describe('timelineOf', () => {
   })
   it('counts by the clock when the start is known', () => {
     const clock = (hour: number) => `${String((6 + hour) % 24).padStart(2, '0')}:00`
-    expect(timelineOf(rows, { width: 1000, clock }).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))).toEqual(expect.arrayContaining(['18:00', '12:00']))
+    expect(timelineOf(rows, { width: 1000, clock }).shapes.flatMap((shape) => (shape.kind === 'text' ? [shape.text] : []))).toEqual(
+      expect.arrayContaining(['18:00', '12:00']),
+    )
   })
   it('leaves a window without an end open, and says so', () => {
     const open = [row(1, 'Broadcast', { start: 0, workingUntil: 1, windowOpens: 8 }), row(2, 'Seal', { start: 20 })]

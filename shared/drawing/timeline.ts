@@ -50,7 +50,9 @@ export function hoursText(hours: number): string {
 
 /** Far enough to show every start, opening and return to traffic; a window that stays open much longer runs off the edge. */
 function hoursAcross(entries: readonly TimelineEntry[]): number {
-  const must = entries.flatMap((entry) => [entry.start, entry.workingUntil, entry.windowOpens, entry.foot, entry.vehicles]).filter((hour) => hour !== null)
+  const must = entries
+    .flatMap((entry) => [entry.start, entry.workingUntil, entry.windowOpens, entry.foot, entry.vehicles])
+    .filter((hour) => hour !== null)
   const far = Math.max(1, ...must)
   const closes = entries.map((entry) => entry.windowCloses ?? 0).filter((hour) => hour <= far * 1.8)
   const cure = entries.map((entry) => entry.fullCure ?? 0).filter((hour) => hour <= far * 1.5)
@@ -85,14 +87,26 @@ export function timelineOf(rows: readonly TimelineRow[], { width, clock, narrow 
   const places = rows.map((row, index) => ({ row, line: 12 + index * rowHeight + (narrow ? 38 : 24) }))
   const last = lastToCure(rows)
   return {
-    width, height, hours,
+    width,
+    height,
+    hours,
     shapes: [
       ...grid(axis, height - 22),
       ...places.flatMap(({ row, line }) => title(row, { line, narrow, left })),
       ...followers(places, axis),
-      ...places.flatMap(({ row, line }, index) => [...working(row, line, axis), ...(index < rows.length - 1 ? windowBracket(row, line, axis) : []), ...(row === last ? traffic(row, line, axis) : [])]),
+      ...places.flatMap(({ row, line }, index) => [
+        ...working(row, line, axis),
+        ...(index < rows.length - 1 ? windowBracket(row, line, axis) : []),
+        ...(row === last ? traffic(row, line, axis) : []),
+      ]),
     ],
-    rows: places.map(({ row, line }) => ({ id: row.id, number: row.number, says: rowWords(row, axis.text), top: line - (narrow ? 34 : 22), bottom: line + (narrow ? 24 : 20) })),
+    rows: places.map(({ row, line }) => ({
+      id: row.id,
+      number: row.number,
+      says: rowWords(row, axis.text),
+      top: line - (narrow ? 34 : 22),
+      bottom: line + (narrow ? 24 : 20),
+    })),
     notes: ['Hours from the start of the first course. Bar: working time. Bracket: window for the next course.'],
     alternative: `Timeline in hours from the start of the first course. ${rows.map((row) => rowWords(row, axis.text)).join('. ')}.`,
   }
@@ -122,31 +136,57 @@ function grid({ left, right, hours, at, text }: Axis, bottom: number): Shape[] {
   return [
     { kind: 'path', d: ticks.map((hour) => `M${fixed(at(hour))} 6V${bottom}`).join(''), stroke: ink.rule },
     ...ticks.map((hour, index): Shape => ({
-      kind: 'text', x: at(hour), y: bottom + 16, text: index === 0 && text === hoursText ? '0 h' : text(hour), size: 11.5, fill: ink.pencil, anchor: index === 0 && left < 20 ? 'start' : 'middle',
+      kind: 'text',
+      x: at(hour),
+      y: bottom + 16,
+      text: index === 0 && text === hoursText ? '0 h' : text(hour),
+      size: 11.5,
+      fill: ink.pencil,
+      anchor: index === 0 && left < 20 ? 'start' : 'middle',
     })),
   ]
 }
 
-function title({ id, number, title: words, color }: TimelineRow, { line, narrow, left }: { line: number; narrow: boolean; left: number }): Shape[] {
+function title(
+  { id, number, title: words, color }: TimelineRow,
+  { line, narrow, left }: { line: number; narrow: boolean; left: number },
+): Shape[] {
   const y = narrow ? line - 18 : line + 4
   const [first = ''] = wrap(words, { width: narrow ? 320 : left - 38, size: size + 1 })
   const cut = first === words ? words : `${first} …`
   return [
     { kind: 'text', x: narrow ? 13 : 8, y, text: String(number), size: size + 1, fill: ink.pencil, course: id },
-    { kind: 'text', x: narrow ? 32 : 28, y, text: cut, size: size + 1, fill: ink.ink, course: id, ...(color === null ? {} : { weight: 600 as const }) },
+    {
+      kind: 'text',
+      x: narrow ? 32 : 28,
+      y,
+      text: cut,
+      size: size + 1,
+      fill: ink.ink,
+      course: id,
+      ...(color === null ? {} : { weight: 600 as const }),
+    },
   ]
 }
 
 /** The solid bar from the start to the end of the working time; a surface that is only worked has a tick. */
 function working({ id, color, entry }: TimelineRow, line: number, { at }: Axis): Shape[] {
-  if (entry.start === null) return [{ kind: 'text', x: at(0) + 6, y: line + 4, text: 'start not known', size, fill: ink.pencil, course: id }]
+  if (entry.start === null)
+    return [{ kind: 'text', x: at(0) + 6, y: line + 4, text: 'start not known', size, fill: ink.pencil, course: id }]
   const x = fixed(at(entry.start))
-  if (color === null && entry.workingUntil === null) return [{ kind: 'path', d: `M${x} ${line - 8}V${line + 8}`, stroke: ink.ink, strokeWidth: 1.6, course: id }]
+  if (color === null && entry.workingUntil === null)
+    return [{ kind: 'path', d: `M${x} ${line - 8}V${line + 8}`, stroke: ink.ink, strokeWidth: 1.6, course: id }]
   const end = entry.workingUntil === null ? x + 3 : Math.max(at(entry.workingUntil), x + 3)
   const known = entry.workingUntil !== null
   return [
     {
-      kind: 'path', d: `M${x} ${line - 8}H${fixed(end)}V${line + 8}H${x}Z`, fill: color ?? ink.pencil, stroke: ink.ink, strokeWidth: 0.6, course: id, ...(known ? {} : { dash: '2 2' }),
+      kind: 'path',
+      d: `M${x} ${line - 8}H${fixed(end)}V${line + 8}H${x}Z`,
+      fill: color ?? ink.pencil,
+      stroke: ink.ink,
+      strokeWidth: 0.6,
+      course: id,
+      ...(known ? {} : { dash: '2 2' }),
     },
   ]
 }
@@ -163,7 +203,9 @@ function windowBracket({ id, entry }: TimelineRow, line: number, axis: Axis): Sh
   const stroke = { stroke: ink.resin, strokeWidth: 1.6, course: id }
   const shapes: Shape[] = [
     { kind: 'path', d: `M${from} ${line}H${to}`, ...stroke, ...(closes === null ? { dash: '4 4' } : {}) },
-    ...(opens === null ? [] : [{ kind: 'path' as const, d: `M${from + 5} ${line - serif}H${from}V${line + serif}H${from + 5}`, ...stroke }]),
+    ...(opens === null
+      ? []
+      : [{ kind: 'path' as const, d: `M${from + 5} ${line - serif}H${from}V${line + serif}H${from + 5}`, ...stroke }]),
     ...(closes === null || beyond
       ? [{ kind: 'path' as const, d: `M${to - 6} ${line - 5}L${to} ${line}L${to - 6} ${line + 5}`, ...stroke }]
       : [{ kind: 'path' as const, d: `M${to - 5} ${line - serif}H${to}V${line + serif}H${to - 5}`, ...stroke }]),
@@ -178,7 +220,10 @@ interface WindowEnds {
   closes: number | null
 }
 
-function windowTimes({ from, to, opens, closes }: WindowEnds, at: { line: number; id: string; text: Axis['text']; beyond: boolean; axis: Axis }): Shape[] {
+function windowTimes(
+  { from, to, opens, closes }: WindowEnds,
+  at: { line: number; id: string; text: Axis['text']; beyond: boolean; axis: Axis },
+): Shape[] {
   const { line, id, text, axis } = at
   const opening = opens === null ? '' : text(opens)
   const closing = closes === null ? 'no end stated' : text(closes)
@@ -192,7 +237,9 @@ function windowTimes({ from, to, opens, closes }: WindowEnds, at: { line: number
   }
   const both = opening ? `${opening} to ${closing}` : `until ${closing}`
   const fits = to + 8 + textWidth(both, size) < axis.right
-  return [fits ? { ...base, x: to + 8, y: line + 4, text: both } : { ...base, x: from - 8, y: line + 4, text: both, anchor: 'end' as const }]
+  return [
+    fits ? { ...base, x: to + 8, y: line + 4, text: both } : { ...base, x: from - 8, y: line + 4, text: both, anchor: 'end' as const },
+  ]
 }
 
 /** When the floor takes feet, wheels and everything again. */
@@ -208,9 +255,22 @@ function traffic({ id, entry }: TimelineRow, line: number, { at, hours, right, t
     const words = `${word} ${text(hour)}${beyond ? ' →' : ''}`
     return [{ x: fixed(beyond ? right : at(hour)), beyond, words, wide: textWidth(words, size) }]
   })
-  const starts = sideBySide(shown.map(({ x, wide }) => ({ from: x - wide / 2, wide })), right + 20)
+  const starts = sideBySide(
+    shown.map(({ x, wide }) => ({ from: x - wide / 2, wide })),
+    right + 20,
+  )
   return shown.flatMap(({ x, beyond, words }, index): Shape[] => [
-    ...(beyond ? [] : [{ kind: 'path' as const, d: `M${x} ${line - 7}V${line + 7}M${x - 4} ${line + 7}H${x + 4}`, stroke: ink.ink, strokeWidth: 1.6, course: id }]),
+    ...(beyond
+      ? []
+      : [
+          {
+            kind: 'path' as const,
+            d: `M${x} ${line - 7}V${line + 7}M${x - 4} ${line + 7}H${x + 4}`,
+            stroke: ink.ink,
+            strokeWidth: 1.6,
+            course: id,
+          },
+        ]),
     { kind: 'text', x: starts[index] ?? x, y: line + 20, text: words, size, fill: ink.ink, course: id },
   ])
 }

@@ -43,5 +43,10 @@ export const profileForThickness: readonly ProfileBand[] = [
   { what: 'high-build coating', mil: { from: 10, to: 40 }, mm: { from: 0.25, to: 1 }, profile: { from: 3, to: 5 } },
   { what: 'self-levelling topping', mil: { from: 50, to: 125 }, mm: { from: 1.25, to: 3 }, profile: { from: 4, to: 6 } },
   { what: 'polymer overlay', mil: { from: 125, to: 250 }, mm: { from: 3, to: 6 }, profile: { from: 5, to: 9 } },
-  { what: 'concrete overlay, repair material', mil: { from: 250, to: Infinity }, mm: { from: 6, to: Infinity }, profile: { from: 5, to: 10 } },
+  {
+    what: 'concrete overlay, repair material',
+    mil: { from: 250, to: Infinity },
+    mm: { from: 6, to: Infinity },
+    profile: { from: 5, to: 10 },
+  },
 ]

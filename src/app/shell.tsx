@@ -64,15 +64,27 @@ function Places({ allowed }: { allowed: typeof places }) {
   useEffect(() => setOpen(false), [location.pathname])
   return (
     <>
-      <button type="button" className="min-h-9 border border-rule px-3 md:hidden" aria-expanded={open} aria-controls="places" onClick={() => setOpen(!open)}>
+      <button
+        type="button"
+        className="min-h-9 border border-rule px-3 md:hidden"
+        aria-expanded={open}
+        aria-controls="places"
+        onClick={() => setOpen(!open)}
+      >
         Menu
       </button>
-      <nav id="places" aria-label="Main" className={`${open ? 'flex' : 'hidden'} w-full flex-col gap-1 md:flex md:w-auto md:flex-1 md:flex-row md:gap-5`}>
+      <nav
+        id="places"
+        aria-label="Main"
+        className={`${open ? 'flex' : 'hidden'} w-full flex-col gap-1 md:flex md:w-auto md:flex-1 md:flex-row md:gap-5`}
+      >
         {allowed.map((place) => (
           <NavLink
             key={place.to}
             to={place.to}
-            className={({ isActive }) => `py-1 ${isActive ? 'border-b-2 border-resin text-ink' : 'border-b-2 border-transparent text-pencil hover:text-ink'}`}
+            className={({ isActive }) =>
+              `py-1 ${isActive ? 'border-b-2 border-resin text-ink' : 'border-b-2 border-transparent text-pencil hover:text-ink'}`
+            }
           >
             {place.name}
           </NavLink>

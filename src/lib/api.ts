@@ -29,7 +29,10 @@ export async function call<E extends Endpoint>(endpoint: E, input: CallInput<E> 
   let response: Response
   try {
     response = await fetch(addressOf(endpoint, input), {
-      method: endpoint.method.toUpperCase(), credentials: 'same-origin', ...body, ...(input.signal ? { signal: input.signal } : {}),
+      method: endpoint.method.toUpperCase(),
+      credentials: 'same-origin',
+      ...body,
+      ...(input.signal ? { signal: input.signal } : {}),
     })
   } catch (error) {
     if (error instanceof DOMException && error.name === 'AbortError') throw error

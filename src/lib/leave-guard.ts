@@ -13,7 +13,9 @@ export interface LeaveGuard {
 /** Holds up leaving a page while something typed on it is not saved. */
 export function useLeaveGuard(dirty: boolean): LeaveGuard {
   const free = useRef(false)
-  const blocker = useBlocker(({ currentLocation, nextLocation }) => dirty && !free.current && currentLocation.pathname !== nextLocation.pathname)
+  const blocker = useBlocker(
+    ({ currentLocation, nextLocation }) => dirty && !free.current && currentLocation.pathname !== nextLocation.pathname,
+  )
   useEffect(() => {
     if (!dirty) return
     const warn = (event: BeforeUnloadEvent) => {

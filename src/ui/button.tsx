@@ -21,7 +21,13 @@ interface ButtonProps extends ButtonHTMLAttributes<HTMLButtonElement> {
 
 export function Button({ look = 'plain', busy = false, disabled, children, className = '', type = 'button', ...rest }: ButtonProps) {
   return (
-    <button {...rest} type={type} disabled={disabled === true || busy} aria-busy={busy || undefined} className={`${buttonClass(look)} ${className}`}>
+    <button
+      {...rest}
+      type={type}
+      disabled={disabled === true || busy}
+      aria-busy={busy || undefined}
+      className={`${buttonClass(look)} ${className}`}
+    >
       {children}
     </button>
   )

@@ -9,7 +9,15 @@ function Drawn({ shape }: { shape: Shape }) {
   }
   const { x, y, text, size, fill, anchor, weight, rotate } = shape
   return (
-    <text x={x} y={y} fontSize={size} fill={fill} textAnchor={anchor} fontWeight={weight} transform={rotate === undefined ? undefined : `rotate(${rotate} ${x} ${y})`}>
+    <text
+      x={x}
+      y={y}
+      fontSize={size}
+      fill={fill}
+      textAnchor={anchor}
+      fontWeight={weight}
+      transform={rotate === undefined ? undefined : `rotate(${rotate} ${x} ${y})`}
+    >
       {text}
     </text>
   )

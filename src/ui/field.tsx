@@ -33,7 +33,8 @@ function Frame({ label, help, error, className = '', id, children }: Framed & { 
   )
 }
 
-const describedBy = (id: string, { help, error }: Framed) => [error && `${id}-error`, help && `${id}-help`].filter(Boolean).join(' ') || undefined
+const describedBy = (id: string, { help, error }: Framed) =>
+  [error && `${id}-error`, help && `${id}-help`].filter(Boolean).join(' ') || undefined
 
 /** A labelled input: label above, help under it, error at the field. */
 export function TextField({ label, help, error, unit, className, ...input }: Framed & InputHTMLAttributes<HTMLInputElement>) {
@@ -43,7 +44,13 @@ export function TextField({ label, help, error, unit, className, ...input }: Fra
   return (
     <Frame {...framed} id={id}>
       <div className="relative">
-        <input {...input} id={id} aria-invalid={error ? true : undefined} aria-describedby={describedBy(id, framed)} className={`${control} ${edge(error)} ${unit ? 'pr-14 text-right' : ''}`} />
+        <input
+          {...input}
+          id={id}
+          aria-invalid={error ? true : undefined}
+          aria-describedby={describedBy(id, framed)}
+          className={`${control} ${edge(error)} ${unit ? 'pr-14 text-right' : ''}`}
+        />
         {unit && <span className="pointer-events-none absolute inset-y-0 right-2 flex items-center text-pencil">{unit}</span>}
       </div>
     </Frame>
@@ -56,7 +63,13 @@ export function SelectField({ label, help, error, className, children, ...select
   const framed = { label, help, error, className } as Framed
   return (
     <Frame {...framed} id={id}>
-      <select {...select} id={id} aria-invalid={error ? true : undefined} aria-describedby={describedBy(id, framed)} className={`${control} ${edge(error)}`}>
+      <select
+        {...select}
+        id={id}
+        aria-invalid={error ? true : undefined}
+        aria-describedby={describedBy(id, framed)}
+        className={`${control} ${edge(error)}`}
+      >
         {children}
       </select>
     </Frame>
@@ -69,7 +82,14 @@ export function AreaField({ label, help, error, className, ...area }: Framed & T
   const framed = { label, help, error, className } as Framed
   return (
     <Frame {...framed} id={id}>
-      <textarea rows={3} {...area} id={id} aria-invalid={error ? true : undefined} aria-describedby={describedBy(id, framed)} className={`${control} ${edge(error)}`} />
+      <textarea
+        rows={3}
+        {...area}
+        id={id}
+        aria-invalid={error ? true : undefined}
+        aria-describedby={describedBy(id, framed)}
+        className={`${control} ${edge(error)}`}
+      />
     </Frame>
   )
 }

@@ -24,7 +24,12 @@ export function FigureView({ figure, text, withCondition = false }: FigureViewPr
     return <Explained said={notStatedText} muted>{`${of}${because ? `: ${because}` : ''}. Ask ${ask}.`}</Explained>
   }
   const shown = text ?? formatFigure(figure, system)
-  if (figure.kind === 'computed') return <ComputedValue working={figure.working} from={figure.from}>{shown}</ComputedValue>
+  if (figure.kind === 'computed')
+    return (
+      <ComputedValue working={figure.working} from={figure.from}>
+        {shown}
+      </ComputedValue>
+    )
   return (
     <>
       <OriginValue origin={figure.origin}>{shown}</OriginValue>
@@ -62,7 +67,10 @@ type Sources = Extract<Figure, { kind: 'computed' }>['from']
 function ComputedValue({ working, from, children }: { working: Working; from: Sources; children: ReactNode }) {
   return (
     <details className="inline-block text-left align-top">
-      <summary className="cursor-pointer list-none text-right underline decoration-rule decoration-1 underline-offset-4 hover:decoration-ink [&::-webkit-details-marker]:hidden" title={working.sum}>
+      <summary
+        className="cursor-pointer list-none text-right underline decoration-rule decoration-1 underline-offset-4 hover:decoration-ink [&::-webkit-details-marker]:hidden"
+        title={working.sum}
+      >
         {children}
       </summary>
       <span className="block max-w-80 border-l-2 border-rule py-1 pl-2 text-small">
@@ -70,7 +78,11 @@ function ComputedValue({ working, from, children }: { working: Working; from: So
         <span className="block">{working.sum}</span>
         {from.map((source) => (
           <span key={`${source.label} ${source.factId ?? ''}`} className="block">
-            {source.origin?.kind === 'stated' ? <CitationLink citation={source.origin.citation}>{source.label}</CitationLink> : source.label}
+            {source.origin?.kind === 'stated' ? (
+              <CitationLink citation={source.origin.citation}>{source.label}</CitationLink>
+            ) : (
+              source.label
+            )}
           </span>
         ))}
         <span className="block text-pencil">{working.source}</span>

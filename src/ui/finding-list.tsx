@@ -10,7 +10,9 @@ interface FindingListProps {
 
 /** What the checks say in short: the open ones with what to do, the met ones as a count. */
 export function FindingList({ findings, titles }: FindingListProps) {
-  const open = findingStatuses.filter((status) => status !== 'met').flatMap((status) => findings.filter((finding) => finding.status === status))
+  const open = findingStatuses
+    .filter((status) => status !== 'met')
+    .flatMap((status) => findings.filter((finding) => finding.status === status))
   const met = findings.length - open.length
   return (
     <ul className="grid gap-2">
@@ -18,7 +20,9 @@ export function FindingList({ findings, titles }: FindingListProps) {
         <li key={`${finding.checkId} ${finding.courseId ?? ''} ${index}`} className="grid grid-cols-[20px_minmax(0,1fr)]">
           <StatusMark status={finding.status} wordless />
           <div>
-            <strong className="font-semibold">{[finding.courseId && titles[finding.courseId], finding.title].filter(Boolean).join(': ')}</strong>
+            <strong className="font-semibold">
+              {[finding.courseId && titles[finding.courseId], finding.title].filter(Boolean).join(': ')}
+            </strong>
             <p>{finding.says}</p>
             {finding.todo && <p className="text-pencil">{finding.todo}</p>}
             {finding.figures.length > 0 && (

@@ -1,5 +1,11 @@
 import {
-  type ColumnDef, type RowData, type SortingState, rowPaginationFeature, rowSortingFeature, tableFeatures, useTable,
+  type ColumnDef,
+  type RowData,
+  type SortingState,
+  rowPaginationFeature,
+  rowSortingFeature,
+  tableFeatures,
+  useTable,
 } from '@tanstack/react-table'
 import { useMemo } from 'react'
 import { Button } from './button.tsx'

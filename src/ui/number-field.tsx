@@ -41,6 +41,14 @@ export function NumberField({ value, onChange, error, ...rest }: NumberFieldProp
     }
   }
   return (
-    <TextField {...rest} inputMode="decimal" autoComplete="off" value={text} error={error ?? wrong} onBlur={() => setLeft(true)} onChange={(event) => onText(event.target.value)} />
+    <TextField
+      {...rest}
+      inputMode="decimal"
+      autoComplete="off"
+      value={text}
+      error={error ?? wrong}
+      onBlur={() => setLeft(true)}
+      onChange={(event) => onText(event.target.value)}
+    />
   )
 }

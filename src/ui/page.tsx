@@ -29,7 +29,17 @@ export function Page({ title, under, actions, children }: PageProps) {
 }
 
 /** A card: surface with a hairline. */
-export function Card({ title, actions, children, className = '' }: { title?: string; actions?: ReactNode; children: ReactNode; className?: string }) {
+export function Card({
+  title,
+  actions,
+  children,
+  className = '',
+}: {
+  title?: string
+  actions?: ReactNode
+  children: ReactNode
+  className?: string
+}) {
   return (
     <section className={`border border-rule bg-card ${className}`}>
       {(title || actions) && (

@@ -11,7 +11,9 @@ const symbols: Record<PictogramCode, ReactNode> = {
       <path d="M30 46l-9-3M33 66l-8 5M46 75v8M60 68l7 6" stroke="#000" strokeWidth="3" fill="none" />
     </>
   ),
-  GHS02: <path d="M51 19c3 12 15 17 15 33 0 6-2 9-5 12 1-6-1-10-5-14 0 6-2 9-5 11-3-4-4-9-2-15-8 6-10 13-8 20-5-3-7-8-7-14 0-13 14-18 17-33zM32 72h36v5H32z" />,
+  GHS02: (
+    <path d="M51 19c3 12 15 17 15 33 0 6-2 9-5 12 1-6-1-10-5-14 0 6-2 9-5 11-3-4-4-9-2-15-8 6-10 13-8 20-5-3-7-8-7-14 0-13 14-18 17-33zM32 72h36v5H32z" />
+  ),
   GHS03: (
     <>
       <circle cx="50" cy="61" r="13" fill="none" stroke="#000" strokeWidth="5" />
@@ -28,7 +30,10 @@ const symbols: Record<PictogramCode, ReactNode> = {
   ),
   GHS06: (
     <>
-      <path d="M50 22c-13 0-20 8-20 17 0 6 2 9 5 12v7h6v4h18v-4h6v-7c3-3 5-6 5-12 0-9-7-17-20-17zm-8 22a5 5 0 1 1 0-10 5 5 0 0 1 0 10zm16 0a5 5 0 1 1 0-10 5 5 0 0 1 0 10zm-8 9l-3-5h6z" fillRule="evenodd" />
+      <path
+        d="M50 22c-13 0-20 8-20 17 0 6 2 9 5 12v7h6v4h18v-4h6v-7c3-3 5-6 5-12 0-9-7-17-20-17zm-8 22a5 5 0 1 1 0-10 5 5 0 0 1 0 10zm16 0a5 5 0 1 1 0-10 5 5 0 0 1 0 10zm-8 9l-3-5h6z"
+        fillRule="evenodd"
+      />
       <path d="M27 64l46 16M73 64L27 80" stroke="#000" strokeWidth="5.5" strokeLinecap="round" />
     </>
   ),

@@ -1,4 +1,8 @@
-import { useEffect, useRef } from 'react'
+import { useEffect, useRef, useState } from 'react'
+
+const fieldNamed = (name: string) => document.querySelector<HTMLInputElement>(`[name="${CSS.escape(name)}"]`)
+/** The label of the field, so that a message that many fields may have tells which one it is about. */
+const labelOf = (name: string) => fieldNamed(name)?.labels?.[0]?.textContent ?? ''
 
 interface ProblemSummaryProps {
   problems: { fields: Record<string, string>; summary: string | undefined }
@@ -9,11 +13,13 @@ export function ProblemSummary({ problems }: ProblemSummaryProps) {
   const box = useRef<HTMLDivElement>(null)
   const entries = Object.entries(problems.fields)
   const any = entries.length > 0 || problems.summary !== undefined
+  const [labels, setLabels] = useState<Record<string, string>>({})
   useEffect(() => {
     if (any) box.current?.focus()
+    setLabels(Object.fromEntries(Object.keys(problems.fields).map((name) => [name, labelOf(name)])))
   }, [any, problems])
   if (!any) return null
-  const goTo = (name: string) => document.querySelector<HTMLElement>(`[name="${CSS.escape(name)}"]`)?.focus()
+  const goTo = (name: string) => fieldNamed(name)?.focus()
   return (
     <div ref={box} tabIndex={-1} role="alert" className="mb-4 border-2 border-stop bg-card p-4">
       <h2 className="text-section">There is a problem</h2>
@@ -22,7 +28,7 @@ export function ProblemSummary({ problems }: ProblemSummaryProps) {
         {entries.map(([name, message]) => (
           <li key={name}>
             <button type="button" className="text-left font-semibold text-stop underline" onClick={() => goTo(name)}>
-              {message}
+              {labels[name] ? `${labels[name]}: ${message}` : message}
             </button>
           </li>
         ))}

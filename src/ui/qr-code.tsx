@@ -18,7 +18,13 @@ export function QrCode({ text, label }: QrCodeProps) {
     return { size: modules.size + 8, path: drawn }
   }, [text])
   return (
-    <svg viewBox={`0 0 ${size} ${size}`} role="img" aria-label={`${label}: ${text}`} className="w-full max-w-48 border border-rule bg-white" shapeRendering="crispEdges">
+    <svg
+      viewBox={`0 0 ${size} ${size}`}
+      role="img"
+      aria-label={`${label}: ${text}`}
+      className="w-full max-w-48 border border-rule bg-white"
+      shapeRendering="crispEdges"
+    >
       <path d={path} fill="#000" />
     </svg>
   )

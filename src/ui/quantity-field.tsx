@@ -22,12 +22,20 @@ export function QuantityField<U extends Unit>({ label, name, value, onChange, un
   return (
     <div className={`flex items-start gap-1 ${className}`}>
       <NumberField
-        {...rest} label={label} name={name} className="min-w-0 flex-1" value={value?.value ?? null}
+        {...rest}
+        label={label}
+        name={name}
+        className="min-w-0 flex-1"
+        value={value?.value ?? null}
         onChange={(number) => onChange(number === null || !unit ? null : { value: number, unit })}
       />
       {units.length > 1 ? (
         <select
-          id={id} aria-label={`Unit of ${label}`} className="mt-7 min-h-9 border border-pencil bg-card px-1" value={unit} disabled={rest.disabled}
+          id={id}
+          aria-label={`Unit of ${label}`}
+          className="mt-7 min-h-9 border border-pencil bg-card px-1"
+          value={unit}
+          disabled={rest.disabled}
           onChange={(event) => value && onChange({ value: value.value, unit: event.target.value as U })}
         >
           {units.map((one) => (

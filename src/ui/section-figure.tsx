@@ -19,17 +19,33 @@ export function SectionDrawing({ model, lit = null, onLight, onPick, className }
   const interactive = onLight !== undefined
   return (
     <svg
-      width={model.width} height={model.height} viewBox={`0 0 ${model.width} ${model.height}`} className={className} role={interactive ? 'group' : 'img'}
-      aria-label={interactive ? 'Section through the floor' : model.alternative} {...(interactive ? { 'aria-describedby': about } : {})}
+      width={model.width}
+      height={model.height}
+      viewBox={`0 0 ${model.width} ${model.height}`}
+      className={className}
+      role={interactive ? 'group' : 'img'}
+      aria-label={interactive ? 'Section through the floor' : model.alternative}
+      {...(interactive ? { 'aria-describedby': about } : {})}
     >
       {interactive && <desc id={about}>{model.alternative}</desc>}
       <Drawing shapes={model.shapes} lit={lit} />
       {interactive &&
         [...model.layers].reverse().map((layer) => (
           <path
-            key={layer.id} d={layer.outline} role="button" tabIndex={0} aria-label={layer.says} stroke={layer.id === lit ? '#a8571a' : 'transparent'} strokeWidth={2.5}
-            fill={layer.id === lit ? '#f6e7d6' : 'transparent'} fillOpacity={layer.id === lit ? 0.35 : 0} className="cursor-pointer outline-none"
-            onPointerEnter={() => onLight(layer.id)} onPointerLeave={() => onLight(null)} onFocus={() => onLight(layer.id)} onBlur={() => onLight(null)}
+            key={layer.id}
+            d={layer.outline}
+            role="button"
+            tabIndex={0}
+            aria-label={layer.says}
+            stroke={layer.id === lit ? '#a8571a' : 'transparent'}
+            strokeWidth={2.5}
+            fill={layer.id === lit ? '#f6e7d6' : 'transparent'}
+            fillOpacity={layer.id === lit ? 0.35 : 0}
+            className="cursor-pointer outline-none"
+            onPointerEnter={() => onLight(layer.id)}
+            onPointerLeave={() => onLight(null)}
+            onFocus={() => onLight(layer.id)}
+            onBlur={() => onLight(null)}
             onClick={() => onPick?.(layer.id)}
             onKeyDown={(event) => {
               if (event.key !== 'Enter' && event.key !== ' ') return

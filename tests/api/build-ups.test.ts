@@ -24,11 +24,18 @@ describe('build-ups', () => {
     sand = await addProduct(t.db, 'Teasel 40-mesh silica', { kind: 'aggregate', density: 22.1 })
   }, 60_000)
 
-  const begin = async (name: string, stages: string[] = []) => (await t.as.lead.post('/api/build-ups').send({ name, stages }).expect(201)).body as BuildUp
+  const begin = async (name: string, stages: string[] = []) =>
+    (await t.as.lead.post('/api/build-ups').send({ name, stages }).expect(201)).body as BuildUp
   const place = ({ id, opened }: BuildUp) => `/api/build-ups/${id}/versions/${opened.number}`
   const save = (of: BuildUp, courses: Course[], more: object = {}) =>
     t.as.lead.put(place(of)).send({ version: of.opened.version, courses, conditions: of.opened.input.conditions, ...more })
-  const read = async ({ id }: BuildUp, version?: number) => (await t.as.lead.get(`/api/build-ups/${id}`).query(version ? { version } : {}).expect(200)).body as BuildUp
+  const read = async ({ id }: BuildUp, version?: number) =>
+    (
+      await t.as.lead
+        .get(`/api/build-ups/${id}`)
+        .query(version ? { version } : {})
+        .expect(200)
+    ).body as BuildUp
   const twoCoats = (): Course[] => [
     { ...newCourse('prep', 'a'), preparation: { method: 'grinding', profile: 3 } },
     { ...newCourse('prime', 'b'), mixId: prime, spreadRate: { value: 150, unit: 'ft²/gal' } },
@@ -36,12 +43,23 @@ describe('build-ups', () => {
   ]
   const ready = async (name: string, courses = twoCoats(), slabHumidity: number | null = 75) => {
     const made = await begin(name)
-    const conditions = { ...made.opened.input.conditions, substrateRelativeHumidity: slabHumidity, moistureEmission: { value: 3, unit: 'lb/1000 ft²·24 h' }, vocPlace: 'us-national' }
+    const conditions = {
+      ...made.opened.input.conditions,
+      substrateRelativeHumidity: slabHumidity,
+      moistureEmission: { value: 3, unit: 'lb/1000 ft²·24 h' },
+      vocPlace: 'us-national',
+    }
     await save(made, courses, { conditions }).expect(200)
     return read(made)
   }
-  const reasonsFor = (input: EvaluationInput) => Object.fromEntries(evaluate(input).findings.filter(({ status }) => status !== 'met').map((finding) => [reasonKey(finding), 'Agreed with the client on site.']))
-  const release = (of: BuildUp, reasons: Record<string, string> = reasonsFor(of.opened.input)) => t.as.lead.post(`${place(of)}/release`).send({ version: of.opened.version, reasons })
+  const reasonsFor = (input: EvaluationInput) =>
+    Object.fromEntries(
+      evaluate(input)
+        .findings.filter(({ status }) => status !== 'met')
+        .map((finding) => [reasonKey(finding), 'Agreed with the client on site.']),
+    )
+  const release = (of: BuildUp, reasons: Record<string, string> = reasonsFor(of.opened.input)) =>
+    t.as.lead.post(`${place(of)}/release`).send({ version: of.opened.version, reasons })
 
   it('begins empty or from a row of stages, bottom up', async () => {
     expect((await begin('Nothing yet')).opened.input.courses).toEqual([])
@@ -70,8 +88,10 @@ describe('build-ups', () => {
     await save(made, courses).expect(200)
     const rows = await t.db.select().from(auditTrail).where(eq(auditTrail.subjectId, made.opened.id))
     expect(rows.at(-1)).toMatchObject({
-      personId: t.ids.lead, action: 'saved',
-      from: { courses: [{ id: 'c', title: 'Top coat' }] }, to: { courses: [{ id: 'c', title: 'Top coat, slate grey' }] },
+      personId: t.ids.lead,
+      action: 'saved',
+      from: { courses: [{ id: 'c', title: 'Top coat' }] },
+      to: { courses: [{ id: 'c', title: 'Top coat, slate grey' }] },
     })
   })
 
@@ -81,7 +101,10 @@ describe('build-ups', () => {
     const { body } = await save(made, []).expect(409)
     expect(body.error).toMatchObject({ code: 'conflict', message: 'Test estimator has changed this version meanwhile.' })
     expect((await read(made)).opened.input.courses).toHaveLength(3)
-    const kept = await t.as.lead.post(`/api/build-ups/${made.id}/versions`).send({ from: 1, work: { courses: twoCoats().slice(0, 1), conditions: made.opened.input.conditions } }).expect(201)
+    const kept = await t.as.lead
+      .post(`/api/build-ups/${made.id}/versions`)
+      .send({ from: 1, work: { courses: twoCoats().slice(0, 1), conditions: made.opened.input.conditions } })
+      .expect(201)
     expect(kept.body.opened).toMatchObject({ number: 2, status: 'draft', version: 1 })
     expect(kept.body.opened.input.courses).toHaveLength(1)
   })
@@ -106,14 +129,18 @@ describe('build-ups', () => {
     }
     const twice = await save(made, [newCourse('body', 'a'), newCourse('top', 'a')]).expect(422)
     expect(twice.body.error.fields).toHaveProperty('courses')
-    const hot = await save(made, [], { conditions: { ...made.opened.input.conditions, slabTemperature: { value: 68, unit: 'mil' } } }).expect(422)
+    const hot = await save(made, [], {
+      conditions: { ...made.opened.input.conditions, slabTemperature: { value: 68, unit: 'mil' } },
+    }).expect(422)
     expect(hot.body.error.fields).toHaveProperty('conditions.slabTemperature')
     expect((await read(made)).opened).toMatchObject({ version: 1, input: { courses: [] } })
   })
 
   it('refuses a release that a check stops, and lists the stops', async () => {
     // 25 mil is above the 6–20 mil wet that the sheet allows
-    const thick = twoCoats().map((course) => (course.id === 'c' ? { ...course, thickness: { value: 25, unit: 'mil' as const, film: 'wet' as const } } : course))
+    const thick = twoCoats().map((course) =>
+      course.id === 'c' ? { ...course, thickness: { value: 25, unit: 'mil' as const, film: 'wet' as const } } : course,
+    )
     const made = await ready('Too thick', thick)
     const { body } = await release(made).expect(409)
     expect(body.error.code).toBe('release-refused')
@@ -122,7 +149,11 @@ describe('build-ups', () => {
   })
 
   it('asks for a reason for every caution and unknown, and keeps them', async () => {
-    const made = await ready('Reasons', twoCoats().map((course) => (course.id === 'b' ? { ...course, mixId: null } : course)), null)
+    const made = await ready(
+      'Reasons',
+      twoCoats().map((course) => (course.id === 'b' ? { ...course, mixId: null } : course)),
+      null,
+    )
     const wanted = reasonsFor(made.opened.input)
     expect(evaluate(made.opened.input).findings.map(({ status }) => status)).not.toContain('stop')
     const keys = Object.keys(wanted)
@@ -141,7 +172,11 @@ describe('build-ups', () => {
     const { body } = await release(made).expect(200)
     const before = (body as BuildUp).opened
     expect(before.evaluation).toEqual(evaluate(before.input))
-    const changed = await t.db.update(propertyValues).set({ value: { min: 6, max: 8, unit: 'mil' } }).where(eq(propertyValues.property, 'filmThickness')).returning({ id: propertyValues.id })
+    const changed = await t.db
+      .update(propertyValues)
+      .set({ value: { min: 6, max: 8, unit: 'mil' } })
+      .where(eq(propertyValues.property, 'filmThickness'))
+      .returning({ id: propertyValues.id })
     expect(changed.length).toBeGreaterThan(0)
     const muchLater = t.time.now + 400 * 86_400_000
     try {
@@ -150,9 +185,14 @@ describe('build-ups', () => {
       expect(evaluate(after.input)).toEqual(before.evaluation)
       expect((await readReleasedVersion(t.db, after.id, muchLater)).evaluation).toEqual(before.evaluation)
       const draft = (await t.as.lead.post(`/api/build-ups/${made.id}/versions`).send({ from: 1 }).expect(201)).body as BuildUp
-      expect(evaluate(draft.opened.input).findings.filter(({ checkId, status }) => checkId === 'film-in-range' && status === 'stop')).toHaveLength(2)
+      expect(
+        evaluate(draft.opened.input).findings.filter(({ checkId, status }) => checkId === 'film-in-range' && status === 'stop'),
+      ).toHaveLength(2)
     } finally {
-      await t.db.update(propertyValues).set({ value: { min: 6, max: 20, unit: 'mil' } }).where(eq(propertyValues.property, 'filmThickness'))
+      await t.db
+        .update(propertyValues)
+        .set({ value: { min: 6, max: 20, unit: 'mil' } })
+        .where(eq(propertyValues.property, 'filmThickness'))
     }
   })
 
@@ -163,9 +203,16 @@ describe('build-ups', () => {
     expect(refused.body.error.message).toBe('This version is no longer a draft. Begin a new draft from it.')
     const second = (await t.as.lead.post(`/api/build-ups/${made.id}/versions`).send({ from: 1 }).expect(201)).body as BuildUp
     const { body } = await release(second).expect(200)
-    expect((body as BuildUp).versions.map(({ number, status }) => [number, status])).toEqual([[2, 'released'], [1, 'superseded']])
+    expect((body as BuildUp).versions.map(({ number, status }) => [number, status])).toEqual([
+      [2, 'released'],
+      [1, 'superseded'],
+    ])
     expect((await read(made, 1)).opened.evaluation).not.toBeNull()
-    expect(await readReleasedVersion(t.db, first.opened.id, t.time.now)).toMatchObject({ status: 'superseded', version: 1, name: 'Twice released' })
+    expect(await readReleasedVersion(t.db, first.opened.id, t.time.now)).toMatchObject({
+      status: 'superseded',
+      version: 1,
+      name: 'Twice released',
+    })
     await expect(readReleasedVersion(t.db, nobody, t.time.now)).rejects.toMatchObject({ code: 'invalid' })
   })
 
@@ -179,14 +226,24 @@ describe('build-ups', () => {
 
   it('lets an estimator draft, copy and withdraw a draft, but not release or withdraw what is released', async () => {
     const made = await ready('Estimator’s')
-    await t.as.estimator.post(`${place(made)}/release`).send({ version: made.opened.version, reasons: {} }).expect(403)
+    await t.as.estimator
+      .post(`${place(made)}/release`)
+      .send({ version: made.opened.version, reasons: {} })
+      .expect(403)
     const released = (await release(made).expect(200)).body as BuildUp
-    await t.as.estimator.post(`${place(released)}/withdraw`).send({ version: released.opened.version }).expect(403)
-    const copy = (await t.as.estimator.post(`/api/build-ups/${made.id}/copies`).send({ name: 'Adapted', number: 1 }).expect(201)).body as BuildUp
+    await t.as.estimator
+      .post(`${place(released)}/withdraw`)
+      .send({ version: released.opened.version })
+      .expect(403)
+    const copy = (await t.as.estimator.post(`/api/build-ups/${made.id}/copies`).send({ name: 'Adapted', number: 1 }).expect(201))
+      .body as BuildUp
     expect(copy).toMatchObject({ name: 'Adapted', opened: { number: 1, status: 'draft', updatedByName: 'Test estimator' } })
     expect(copy.number).not.toBe(made.number)
     expect(copy.opened.input.courses).toEqual(released.opened.input.courses)
-    const gone = await t.as.estimator.post(`${place(copy)}/withdraw`).send({ version: 1 }).expect(200)
+    const gone = await t.as.estimator
+      .post(`${place(copy)}/withdraw`)
+      .send({ version: 1 })
+      .expect(200)
     expect(gone.body.opened.status).toBe('withdrawn')
     await t.as.crew.get('/api/build-ups').expect(403)
     await t.as.nobody.get('/api/build-ups').expect(401)
@@ -211,15 +268,24 @@ describe('build-ups', () => {
     expect(item.layers[1].thickness).toBeCloseTo(10.6944 * 25.4, 1)
     const all = await find({ sort: 'name', limit: 2 })
     const next = await find({ sort: 'name', limit: 2, cursor: all.nextCursor })
-    expect([...all.items, ...next.items].map(({ name }: { name: string }) => name)).toEqual((await find({ sort: 'name', limit: 4 })).items.map(({ name }: { name: string }) => name))
-    expect((await find({ status: 'released' })).items.every(({ newest }: { newest: { status: string } }) => newest.status === 'released')).toBe(true)
+    expect([...all.items, ...next.items].map(({ name }: { name: string }) => name)).toEqual(
+      (await find({ sort: 'name', limit: 4 })).items.map(({ name }: { name: string }) => name),
+    )
+    expect(
+      (await find({ status: 'released' })).items.every(({ newest }: { newest: { status: string } }) => newest.status === 'released'),
+    ).toBe(true)
   })
 
   it('offers mixes and aggregates to choose, and their facts for a draft at work', async () => {
     const { body } = await t.as.estimator.get('/api/build-ups/choices').query({ q: 'ostrel 22' }).expect(200)
     expect(body.mixes.map(({ name }: { name: string }) => name)).toContain('Ostrel 220')
-    expect((await t.as.estimator.get('/api/build-ups/choices').expect(200)).body.aggregates).toEqual([{ id: sand, name: 'Teasel 40-mesh silica', maker: 'Ostrel' }])
-    const facts = await t.as.estimator.get('/api/build-ups/facts').query({ mixes: `${prime},${nobody}`, products: sand }).expect(200)
+    expect((await t.as.estimator.get('/api/build-ups/choices').expect(200)).body.aggregates).toEqual([
+      { id: sand, name: 'Teasel 40-mesh silica', maker: 'Ostrel' },
+    ])
+    const facts = await t.as.estimator
+      .get('/api/build-ups/facts')
+      .query({ mixes: `${prime},${nobody}`, products: sand })
+      .expect(200)
     expect(Object.keys(facts.body.mixes)).toEqual([prime])
     expect(facts.body.products[sand].facts.length).toBeGreaterThan(0)
     await t.as.estimator.get('/api/build-ups/facts').query({ mixes: 'x' }).expect(400)
@@ -230,6 +296,9 @@ describe('build-ups', () => {
     await t.as.lead.get('/api/build-ups/not-an-id').expect(404)
     const made = await begin('One version')
     await t.as.lead.get(`/api/build-ups/${made.id}`).query({ version: 7 }).expect(404)
-    await t.as.lead.put(`/api/build-ups/${made.id}/versions/9`).send({ version: 1, courses: [], conditions: made.opened.input.conditions }).expect(404)
+    await t.as.lead
+      .put(`/api/build-ups/${made.id}/versions/9`)
+      .send({ version: 1, courses: [], conditions: made.opened.input.conditions })
+      .expect(404)
   })
 })

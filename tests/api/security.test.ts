@@ -8,7 +8,14 @@ describe('headers of every answer (OWASP ASVS 5.0, chapter 3.4)', () => {
   it('let the page load only what this server ships, and nobody frame it', async () => {
     const { headers } = await as.nobody.get('/api/start').expect(200)
     const policy = headers['content-security-policy'] ?? ''
-    for (const part of ["default-src 'self'", "object-src 'none'", "base-uri 'none'", "frame-ancestors 'none'", "script-src 'self' 'wasm-unsafe-eval'"]) expect(policy).toContain(part)
+    for (const part of [
+      "default-src 'self'",
+      "object-src 'none'",
+      "base-uri 'none'",
+      "frame-ancestors 'none'",
+      "script-src 'self' 'wasm-unsafe-eval'",
+    ])
+      expect(policy).toContain(part)
     expect(policy).not.toContain("script-src 'unsafe")
     expect(headers['x-content-type-options']).toBe('nosniff')
     expect(headers['referrer-policy']).toBe('no-referrer')
@@ -25,14 +32,23 @@ describe('a request from another site', () => {
     ['Sec-Fetch-Site', 'cross-site'],
     ['Sec-Fetch-Site', 'same-site'],
   ])('that changes something is refused: %s %s', async (header, value) => {
-    const answer = await as.lead.post('/api/people').set(header, value).send({ name: 'A B', email: 'a@b.example', role: 'crew' }).expect(403)
+    const answer = await as.lead
+      .post('/api/people')
+      .set(header, value)
+      .send({ name: 'A B', email: 'a@b.example', role: 'crew' })
+      .expect(403)
     expect(answer.body.error.code).toBe('wrong-origin')
   })
   it('that only reads is not', async () => {
     await as.lead.get('/api/session').set('Sec-Fetch-Site', 'cross-site').expect(200)
   })
   it('our own passes', async () => {
-    await as.lead.post('/api/people').set('Origin', 'http://localhost:4620').set('Sec-Fetch-Site', 'same-origin').send({ name: 'A B', email: 'a.b@brackenholt.example', role: 'crew' }).expect(201)
+    await as.lead
+      .post('/api/people')
+      .set('Origin', 'http://localhost:4620')
+      .set('Sec-Fetch-Site', 'same-origin')
+      .send({ name: 'A B', email: 'a.b@brackenholt.example', role: 'crew' })
+      .expect(201)
   })
 })
 
@@ -40,7 +56,13 @@ describe('over https', () => {
   it('the browser is told to stay on https, and the cookie is bound to the host', async () => {
     const start = await secure.as.nobody.get('/api/start').expect(200)
     expect(start.headers['strict-transport-security']).toMatch(/max-age=31536000/)
-    const body = { code: 'abc', firmName: 'Brackenholt Floors', name: 'Ines', email: 'ines@brackenholt.example', password: 'three plain words' }
+    const body = {
+      code: 'abc',
+      firmName: 'Brackenholt Floors',
+      name: 'Ines',
+      email: 'ines@brackenholt.example',
+      password: 'three plain words',
+    }
     const made = await secure.as.nobody.post('/api/first-lead').set('X-Forwarded-Proto', 'https').send(body).expect(201)
     expect(made.headers['set-cookie']?.[0]).toMatch(/^__Host-wearcourse=.*Path=\/.*HttpOnly.*Secure.*SameSite=Strict/)
   })
@@ -53,7 +75,10 @@ describe('people and their sessions', () => {
     await as.estimator.get('/api/jobs').expect(200)
     await as.lead.patch(`/api/people/${person.id}`).send({ version: person.version, role: 'crew' }).expect(200)
     await as.estimator.get('/api/jobs').expect(403)
-    await as.lead.patch(`/api/people/${person.id}`).send({ version: person.version + 1, role: 'estimator' }).expect(200)
+    await as.lead
+      .patch(`/api/people/${person.id}`)
+      .send({ version: person.version + 1, role: 'estimator' })
+      .expect(200)
   })
   it('a disabled person loses all sessions', async () => {
     const { body } = await as.lead.get('/api/people?q=crew@').expect(200)
@@ -73,8 +98,14 @@ describe('people and their sessions', () => {
   it('two people changing the same record are told', async () => {
     const { body } = await as.lead.get('/api/firm').expect(200)
     const firm = { name: 'Brackenholt Floors', address: '', phone: '', sheetAgeLimitYears: 3 }
-    await as.lead.put('/api/firm').send({ ...firm, version: body.version }).expect(200)
-    const answer = await as.lead.put('/api/firm').send({ ...firm, version: body.version }).expect(409)
+    await as.lead
+      .put('/api/firm')
+      .send({ ...firm, version: body.version })
+      .expect(200)
+    const answer = await as.lead
+      .put('/api/firm')
+      .send({ ...firm, version: body.version })
+      .expect(409)
     expect(answer.body.error.code).toBe('conflict')
   })
   it('asking for a link answers the same for an unknown address', async () => {

@@ -14,11 +14,15 @@ describe('signing in', () => {
   })
   it('answers the same for a wrong password and an unknown address', async () => {
     const wrong = await as.nobody.post('/api/session').send({ email: 'crew@brackenholt.example', password: 'not the password' }).expect(401)
-    const unknown = await as.nobody.post('/api/session').send({ email: 'nobody@brackenholt.example', password: 'not the password' }).expect(401)
+    const unknown = await as.nobody
+      .post('/api/session')
+      .send({ email: 'nobody@brackenholt.example', password: 'not the password' })
+      .expect(401)
     expect(wrong.body).toEqual(unknown.body)
   })
   it('makes the sixth try in a row wait, whoever it is for', async () => {
-    for (let i = 0; i < 5; i++) await as.nobody.post('/api/session').send({ email: 'x@brackenholt.example', password: 'wrong wrong wrong' }).expect(401)
+    for (let i = 0; i < 5; i++)
+      await as.nobody.post('/api/session').send({ email: 'x@brackenholt.example', password: 'wrong wrong wrong' }).expect(401)
     await as.nobody.post('/api/session').send({ email: 'x@brackenholt.example', password: 'wrong wrong wrong' }).expect(429)
     time.now += 2000
     await as.nobody.post('/api/session').send({ email: 'x@brackenholt.example', password: 'wrong wrong wrong' }).expect(401)

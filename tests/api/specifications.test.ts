@@ -63,7 +63,12 @@ describe('specifications', () => {
   it('has three parts in the order of SectionFormat, numbered, with the usual section number', () => {
     const document = specDocumentSchema.parse(made.document)
     expect(document.parts.map(({ number, title }) => `${number} ${title}`)).toEqual(['1 General', '2 Products', '3 Execution'])
-    expect(document.header).toMatchObject({ sectionNumber: '09 67 23', sectionTitle: 'Resinous flooring', project: 'Filling hall', issue: null })
+    expect(document.header).toMatchObject({
+      sectionNumber: '09 67 23',
+      sectionTitle: 'Resinous flooring',
+      project: 'Filling hall',
+      issue: null,
+    })
     // SectionFormat (CSI), from memory: warranty is the last article of part 1, schedules of part 3
     expect(document.parts[0]?.articles.at(-1)?.id).toBe('warranty')
     expect(document.parts[2]?.articles.at(-1)?.id).toBe('schedules')
@@ -71,13 +76,18 @@ describe('specifications', () => {
 
   it('gives every figure that a sheet states a tag that leads to sheet, revision and page', () => {
     const { document } = made
-    const figures = allLines(document).flat().flatMap((run) => (run.kind === 'figure' ? [run] : []))
+    const figures = allLines(document)
+      .flat()
+      .flatMap((run) => (run.kind === 'figure' ? [run] : []))
     const stated = figures.filter(({ known }) => known === 'stated')
     expect(stated.length).toBeGreaterThan(20)
     const tags = new Set([...document.sources, ...document.workings, ...document.entered, ...document.typicals].map(({ tag }) => tag))
     for (const figure of stated) {
       const [tag] = figure.tags
-      expect(document.sources.find((source) => source.tag === tag)).toMatchObject({ revisionId: figure.citation?.revisionId, page: figure.citation?.page })
+      expect(document.sources.find((source) => source.tag === tag)).toMatchObject({
+        revisionId: figure.citation?.revisionId,
+        page: figure.citation?.page,
+      })
     }
     for (const { tags: used, known } of figures) {
       for (const tag of used) expect(tags).toContain(tag)
@@ -95,11 +105,20 @@ describe('specifications', () => {
     expect(unknowns.find((line) => line.startsWith('Recoat window of Ostrel 110'))).toMatch(/stops at 60 °F.*stops at 75 °F/)
     expect(unknowns.find((line) => /Moisture emission rate/i.test(line))).toMatch(/not stated/)
     expect(unknowns).toContainEqual('Pull-off strength: not stated for Ostrel 110; Ostrel 220. Ask the maker, in writing.')
-    const silent = document.parts[1]?.articles.find(({ id }) => id === 'materials')?.items.flatMap(({ items }) => items.map(({ runs }) => plainText(runs)).filter((line) => line.endsWith(': not stated.'))) ?? []
+    const silent =
+      document.parts[1]?.articles
+        .find(({ id }) => id === 'materials')
+        ?.items.flatMap(({ items }) => items.map(({ runs }) => plainText(runs)).filter((line) => line.endsWith(': not stated.'))) ?? []
     expect(silent.length).toBeGreaterThan(0)
     for (const line of silent) expect(unknowns.some((one) => one.startsWith(line.slice(0, -'.'.length)))).toBe(true)
-    expect(document.front.overrides.map(({ items }) => items.map(({ runs }) => plainText(runs)).join())).toContainEqual('Reason given at release: Agreed with the client on site.')
-    const own = allLines(document).flat().filter(({ kind }) => kind === 'text').map(({ text }) => text).join(' ')
+    expect(document.front.overrides.map(({ items }) => items.map(({ runs }) => plainText(runs)).join())).toContainEqual(
+      'Reason given at release: Agreed with the client on site.',
+    )
+    const own = allLines(document)
+      .flat()
+      .filter(({ kind }) => kind === 'text')
+      .map(({ text }) => text)
+      .join(' ')
     expect(own).not.toMatch(/\bsafe\b/i)
     expect(own).not.toMatch(/\b(must|should|will)\b/i)
   })
@@ -121,37 +140,69 @@ describe('specifications', () => {
     for (const run of allLines(document).flat()) {
       if (run.kind === 'text') expect(run.text).not.toMatch(/\d/)
       if (run.kind !== 'figure' || run.known === 'standard') continue
-      for (const text of run.text.match(/\d[\d,]*\.?\d*/g) ?? []) expect(numbers, `${run.text} (${run.known})`).toContain(Number(text.replaceAll(',', '')))
+      for (const text of run.text.match(/\d[\d,]*\.?\d*/g) ?? [])
+        expect(numbers, `${run.text} (${run.known})`).toContain(Number(text.replaceAll(',', '')))
     }
     // 7,350 ft²: three tests for the first 1,000 ft² and one for each further 1,000 begun is 10 (ASTM F2170, from memory)
-    expect(allLines(document).map(plainText).find((line) => line.includes('ASTM F2170 or'))).toContain('10 tests [W')
+    expect(
+      allLines(document)
+        .map(plainText)
+        .find((line) => line.includes('ASTM F2170 or')),
+    ).toContain('10 tests [W')
     // 1604.17 ft²·mil/gal ÷ 150 ft²/gal = 10.7 mil
     expect(document.workings.map(({ sum }) => sum)).toContainEqual('1,604.17 ft²·mil/gal ÷ 150 ft²/gal = 10.7 mil')
   })
 
-  it.runIf(poppler)('prints no number that is not a fact, a working, a rule named or a number of its own paragraphs and pages', async () => {
-    const { document } = await read()
-    const { body } = await bytes('draft.pdf')
-    const text = poppled('pdftotext', body, ['-'])
-    if (!job.buildUp) throw new Error('no build-up')
-    const { input } = job.buildUp
-    const { findings } = evaluate(input)
-    const rules = input.courses.map((course) => phaseOf(course, input))
-    const statements = allLines(document).flat().flatMap(({ text: words }) => (/^(EUH|H|P)\d{3}/.test(words) ? [words] : []))
-    expect(statements.length).toBeGreaterThan(0)
-    for (const words of statements) expect(`${ghsStatement(words.split(' ')[0] ?? '') ?? ''}`, words).toContain(words.slice(words.indexOf(' ') + 1))
-    const standards = allLines(document).flat().flatMap((run) => (run.kind === 'figure' && run.known === 'standard' ? [run.text] : []))
-    const own = document.parts.flatMap((part) => numberedArticles(part)).flatMap(({ number, items }) => [number, ...items.map(({ label }) => label)])
-    const temperatures = document.schedules.find(({ id }) => id === 'windows')?.columns.map(({ label }) => label)
-    const pages = Number(/Pages:\s+(\d+)/.exec(poppled('pdfinfo', body))?.[1])
-    const kept = [job, input, document.header, document.sources, document.workings, document.typicals, findings, rules, standards, own, temperatures, registersOf(document), titleRows(document.header)]
-    const numbersOf = (words: string) => (words.match(/\d[\d,]*(\.\d+)?/g) ?? []).map((one) => Number(one.replaceAll(',', '')))
-    const known = new Set([...numbersOf(JSON.stringify(kept).replace(/[\da-f]{8}(-[\da-f]{4}){3}-[\da-f]{12}/g, '')), ...Array.from({ length: pages }, (_, index) => index + 1)])
-    const strange = numbersOf(text).filter((number) => !known.has(number))
-    expect(strange).toEqual([])
-    expect([777, 12.5, 33].filter((number) => known.has(number))).toEqual([])
-    expect(numbersOf(text).length).toBeGreaterThan(500)
-  })
+  it.runIf(poppler)(
+    'prints no number that is not a fact, a working, a rule named or a number of its own paragraphs and pages',
+    async () => {
+      const { document } = await read()
+      const { body } = await bytes('draft.pdf')
+      const text = poppled('pdftotext', body, ['-'])
+      if (!job.buildUp) throw new Error('no build-up')
+      const { input } = job.buildUp
+      const { findings } = evaluate(input)
+      const rules = input.courses.map((course) => phaseOf(course, input))
+      const statements = allLines(document)
+        .flat()
+        .flatMap(({ text: words }) => (/^(EUH|H|P)\d{3}/.test(words) ? [words] : []))
+      expect(statements.length).toBeGreaterThan(0)
+      for (const words of statements)
+        expect(`${ghsStatement(words.split(' ')[0] ?? '') ?? ''}`, words).toContain(words.slice(words.indexOf(' ') + 1))
+      const standards = allLines(document)
+        .flat()
+        .flatMap((run) => (run.kind === 'figure' && run.known === 'standard' ? [run.text] : []))
+      const own = document.parts
+        .flatMap((part) => numberedArticles(part))
+        .flatMap(({ number, items }) => [number, ...items.map(({ label }) => label)])
+      const temperatures = document.schedules.find(({ id }) => id === 'windows')?.columns.map(({ label }) => label)
+      const pages = Number(/Pages:\s+(\d+)/.exec(poppled('pdfinfo', body))?.[1])
+      const kept = [
+        job,
+        input,
+        document.header,
+        document.sources,
+        document.workings,
+        document.typicals,
+        findings,
+        rules,
+        standards,
+        own,
+        temperatures,
+        registersOf(document),
+        titleRows(document.header),
+      ]
+      const numbersOf = (words: string) => (words.match(/\d[\d,]*(\.\d+)?/g) ?? []).map((one) => Number(one.replaceAll(',', '')))
+      const known = new Set([
+        ...numbersOf(JSON.stringify(kept).replace(/[\da-f]{8}(-[\da-f]{4}){3}-[\da-f]{12}/g, '')),
+        ...Array.from({ length: pages }, (_, index) => index + 1),
+      ])
+      const strange = numbersOf(text).filter((number) => !known.has(number))
+      expect(strange).toEqual([])
+      expect([777, 12.5, 33].filter((number) => known.has(number))).toEqual([])
+      expect(numbersOf(text).length).toBeGreaterThan(500)
+    },
+  )
 
   it('changes title and number, and tells of a change made meanwhile', async () => {
     const { version } = await read()
@@ -166,7 +217,8 @@ describe('specifications', () => {
 
   it('freezes an issue byte for byte, whatever the facts say later', async () => {
     const before = await read()
-    const issue = (await t.as.estimator.post(`/api/specifications/${made.id}/issues`).send({ version: before.version }).expect(201)).body as SpecIssue
+    const issue = (await t.as.estimator.post(`/api/specifications/${made.id}/issues`).send({ version: before.version }).expect(201))
+      .body as SpecIssue
     expect(issue).toMatchObject({ number: 1, issuedByName: 'Test estimator', restsOnSuperseded: [] })
     expect(issue.document.header.issue).toEqual({ number: 1, by: 'Test estimator' })
     const files = [await bytes('issues/1/files/docx'), await bytes('issues/1/files/pdf')]
@@ -176,19 +228,30 @@ describe('specifications', () => {
     )
     const { id, number: _, buildUp, siteCardUrl: __, updatedAt: ___, crew: ____, ...rest } = job
     const conditions = { ...rest.conditions, slabTemperature: { value: 74, unit: '°F' } }
-    await t.as.estimator.put(`/api/jobs/${id}`).send({ ...rest, conditions, crewIds: [], buildUpVersionId: buildUp?.versionId }).expect(200)
-    const [revision] = await t.db.select().from(sheetRevisions).where(eq(sheetRevisions.id, issue.document.sources[0]?.revisionId ?? ''))
+    await t.as.estimator
+      .put(`/api/jobs/${id}`)
+      .send({ ...rest, conditions, crewIds: [], buildUpVersionId: buildUp?.versionId })
+      .expect(200)
+    const [revision] = await t.db
+      .select()
+      .from(sheetRevisions)
+      .where(eq(sheetRevisions.id, issue.document.sources[0]?.revisionId ?? ''))
     if (!revision) throw new Error('no revision')
-    await t.db.insert(sheetRevisions).values({ ...revision, id: undefined, sha256: 'newer', sequence: revision.sequence + 1, revisionDate: '2026-01-01' })
+    await t.db
+      .insert(sheetRevisions)
+      .values({ ...revision, id: undefined, sha256: 'newer', sequence: revision.sequence + 1, revisionDate: '2026-01-01' })
 
     const kept = (await t.as.lead.get(`/api/specifications/${made.id}/issues/1`).expect(200)).body as SpecIssue
     expect(kept.document).toEqual(issue.document)
     expect(kept.restsOnSuperseded).toEqual([issue.document.sources[0]?.title])
-    expect([await bytes('issues/1/files/docx'), await bytes('issues/1/files/pdf')].map(({ body }) => body)).toEqual(files.map(({ body }) => body))
+    expect([await bytes('issues/1/files/docx'), await bytes('issues/1/files/pdf')].map(({ body }) => body)).toEqual(
+      files.map(({ body }) => body),
+    )
     const after = await read()
     expect(JSON.stringify(after.document)).toContain('74 °F')
     expect(JSON.stringify(kept.document)).not.toContain('74 °F')
-    const second = (await t.as.lead.post(`/api/specifications/${made.id}/issues`).send({ version: after.version }).expect(201)).body as SpecIssue
+    const second = (await t.as.lead.post(`/api/specifications/${made.id}/issues`).send({ version: after.version }).expect(201))
+      .body as SpecIssue
     expect([second.number, second.issuedByName]).toEqual([2, 'Test lead'])
     await t.as.lead.post(`/api/specifications/${made.id}/issues`).send({ version: after.version }).expect(409)
     expect((await read()).issues.map(({ number }) => number)).toEqual([2, 1])
@@ -202,7 +265,10 @@ describe('specifications', () => {
       await new Promise((resolve) => setTimeout(resolve, 2100))
       const again = await bytes(`draft.${kind}`)
       expect(again.body.equals(first.body)).toBe(true)
-      await t.as.estimator.get(`/api/specifications/${made.id}/draft.${kind}`).set('If-None-Match', first.headers['etag'] ?? '').expect(304)
+      await t.as.estimator
+        .get(`/api/specifications/${made.id}/draft.${kind}`)
+        .set('If-None-Match', first.headers['etag'] ?? '')
+        .expect(304)
     }
   }, 60_000)
 
@@ -211,7 +277,8 @@ describe('specifications', () => {
     const entries = textsOfZip((await bytes('draft.docx')).body)
     const part = (name: string) => entries[name] ?? ''
     const body = part('word/document.xml')
-    for (const level of ['"PART %1"', '"%1.%2"', '"%3."', '"%4."', '"%5."', '"%6)"', '"%7)"']) expect(part('word/numbering.xml')).toContain(`w:lvlText w:val=${level}`)
+    for (const level of ['"PART %1"', '"%1.%2"', '"%3."', '"%4."', '"%5."', '"%6)"', '"%7)"'])
+      expect(part('word/numbering.xml')).toContain(`w:lvlText w:val=${level}`)
     expect(part('word/numbering.xml')).toContain('w:numFmt w:val="decimalZero"')
     expect(body.match(/w:pStyle w:val="Heading1"/g)?.length).toBe(5)
     expect(body.match(/w:pStyle w:val="Heading2"/g)?.length).toBeGreaterThan(20)
@@ -240,7 +307,12 @@ describe('specifications', () => {
 
   it('refuses a job without a released build-up, an unknown job, and the crew', async () => {
     const { id: _, number: __, buildUp: ___, siteCardUrl: ____, updatedAt: _____, version: ______, crew: _______, ...rest } = job
-    const bare = (await t.as.estimator.post('/api/jobs').send({ ...rest, name: 'Bare', buildUpVersionId: null, crewIds: [] }).expect(201)).body as Job
+    const bare = (
+      await t.as.estimator
+        .post('/api/jobs')
+        .send({ ...rest, name: 'Bare', buildUpVersionId: null, crewIds: [] })
+        .expect(201)
+    ).body as Job
     const refused = await t.as.estimator.post(`/api/jobs/${bare.id}/specifications`).send({}).expect(422)
     expect(refused.body.error.message).toMatch(/no released build-up/)
     expect((await t.as.estimator.get(`/api/jobs/${bare.id}/specifications`).expect(200)).body.items).toEqual([])

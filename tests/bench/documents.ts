@@ -26,7 +26,10 @@ export async function reading() {
 /** Printing the demo's specification, beside the bare library printing the same words as paragraphs. */
 export async function exporting(tree: unknown) {
   const document = specDocumentSchema.parse(tree)
-  const words = JSON.stringify(document).match(/"text":"[^"]*"/g)?.map((text) => text.slice(8, -1)) ?? []
+  const words =
+    JSON.stringify(document)
+      .match(/"text":"[^"]*"/g)
+      ?.map((text) => text.slice(8, -1)) ?? []
   const barePdf = () => printPdf({ content: words.map((text) => ({ text })) })
   const bareDocx = () => Packer.toBuffer(new Document({ sections: [{ children: words.map((text) => new Paragraph(text)) }] }))
   return {

@@ -30,7 +30,13 @@ async function weight(manifest: Manifest, names: string[], folder: string): Prom
 }
 
 async function built(folder: string, outDir: string): Promise<Manifest> {
-  await build({ root: folder, configFile: folder === root ? join(root, 'vite.config.ts') : false, logLevel: 'silent', ...(folder === root ? {} : { plugins: [react()] }), build: { outDir, manifest: true, emptyOutDir: true } })
+  await build({
+    root: folder,
+    configFile: folder === root ? join(root, 'vite.config.ts') : false,
+    logLevel: 'silent',
+    ...(folder === root ? {} : { plugins: [react()] }),
+    build: { outDir, manifest: true, emptyOutDir: true },
+  })
   return JSON.parse(await readFile(join(outDir, '.vite/manifest.json'), 'utf8')) as Manifest
 }
 

@@ -33,7 +33,11 @@ it('the specification goes out as DOCX and PDF, and an issue stays as it was', a
   await look(page, 'estimator-specification-1440')
   for (const kind of ['DOCX', 'PDF']) {
     const waiting = page.waitForEvent('download')
-    await page.getByRole('link', { name: new RegExp(kind) }).or(page.getByRole('button', { name: new RegExp(kind) })).first().click()
+    await page
+      .getByRole('link', { name: new RegExp(kind) })
+      .or(page.getByRole('button', { name: new RegExp(kind) }))
+      .first()
+      .click()
     const download = await waiting
     const head = (await readFile(await download.path())).subarray(0, 4).toString('latin1')
     expect(head).toBe(kind === 'PDF' ? '%PDF' : 'PK\u0003\u0004')

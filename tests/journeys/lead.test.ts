@@ -18,12 +18,24 @@ it('a technical lead adds a product, uploads its sheet and ties a value to the p
 
   const folder = await mkdtemp(join(tmpdir(), 'wearcourse-sheet-'))
   const path = join(folder, 'ostrel-90-flex.pdf')
-  await writeFile(path, await printPdf({ content: [{ text: 'Ostrel 90 Flex, Part A', fontSize: 22 }, { text: 'Safety data sheet' }, { text: 'Density 9.3 lb/gal', margin: [0, 40, 0, 0] }] }))
+  await writeFile(
+    path,
+    await printPdf({
+      content: [
+        { text: 'Ostrel 90 Flex, Part A', fontSize: 22 },
+        { text: 'Safety data sheet' },
+        { text: 'Density 9.3 lb/gal', margin: [0, 40, 0, 0] },
+      ],
+    }),
+  )
   const answer = await page.request.get('/api/openapi.json')
   expect(answer.ok()).toBe(true)
   await page.goto('/sheets')
   await page.locator('input[type="file"]').first().setInputFiles(path)
-  await page.getByText(/ostrel-90-flex\.pdf/).first().waitFor()
+  await page
+    .getByText(/ostrel-90-flex\.pdf/)
+    .first()
+    .waitFor()
   await look(page, 'lead-upload-1440')
 
   await page.goto(`/products/${id}/values/new?property=density`)
@@ -43,7 +55,10 @@ it('a technical lead adds a product, uploads its sheet and ties a value to the p
 it('a technical lead sees what stops a draft; a released floor stays as it is', async () => {
   const page = await product.as('lead')
   await page.goto(`/build-ups/${await idOf(page, 'build-ups', 'Water-borne primer')}`)
-  await page.getByText(/Ratio by volume and by weight agree|ratio by volume and by weight agree/).first().waitFor()
+  await page
+    .getByText(/Ratio by volume and by weight agree|ratio by volume and by weight agree/)
+    .first()
+    .waitFor()
   await look(page, 'lead-draft-1440')
   await page.goto(`/build-ups/${await idOf(page, 'build-ups', 'Slurry-filled')}`)
   await page.getByRole('heading', { name: /Slurry-filled freight floor/ }).waitFor()
@@ -55,7 +70,19 @@ it('a technical lead sees what stops a draft; a released floor stays as it is', 
 it('every list of the office can be read by everyone, at the desk and on a phone', async () => {
   for (const width of [1440, 390]) {
     const page = await product.as('lead', width)
-    for (const path of ['/products', '/mixes', '/sheets', '/build-ups', '/jobs', '/people', '/firm', '/outbox', '/changes', '/account', '/nothing-here']) {
+    for (const path of [
+      '/products',
+      '/mixes',
+      '/sheets',
+      '/build-ups',
+      '/jobs',
+      '/people',
+      '/firm',
+      '/outbox',
+      '/changes',
+      '/account',
+      '/nothing-here',
+    ]) {
       await page.goto(path)
       await page.locator('h1').first().waitFor()
       await look(page, `list${path.replaceAll('/', '-')}-${width}`)

@@ -20,7 +20,14 @@ it('one figure, followed from the page of its sheet to the specification and the
   await look(page, 'figure-sheet-1440')
 
   // The page itself says so: the words inside the box of the citation.
-  const mix = (await (await page.request.get(`/api/mixes/${mixId}`)).json()) as { facts: { property: string; at?: { temperature?: { value: number } }; origin: { citation?: { quote: string; revisionId: string } }; value: object }[] }
+  const mix = (await (await page.request.get(`/api/mixes/${mixId}`)).json()) as {
+    facts: {
+      property: string
+      at?: { temperature?: { value: number } }
+      origin: { citation?: { quote: string; revisionId: string } }
+      value: object
+    }[]
+  }
   const fact = mix.facts.find(({ property, at }) => property === 'recoatWindow' && at?.temperature?.value === 70)
   expect(fact?.value).toEqual({ min: 9, max: 38, unit: 'h' })
   expect(fact?.origin.citation?.revisionId).toBe(revisionId)

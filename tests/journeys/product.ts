@@ -44,7 +44,9 @@ export async function startProduct(): Promise<Product> {
   const port = await freePort()
   const address = `http://localhost:${port}`
   const server: ChildProcess = spawn(process.execPath, ['--import', 'tsx', 'server/main.ts'], {
-    cwd: root, stdio: 'ignore', env: { ...process.env, PORT: String(port), DATA_DIR: dataDir, DEMO: 'auto' },
+    cwd: root,
+    stdio: 'ignore',
+    env: { ...process.env, PORT: String(port), DATA_DIR: dataDir, DEMO: 'auto' },
   })
   const browser: Browser = await chromium.launch({ executablePath: '/usr/bin/chromium', args: ['--no-sandbox'] })
   const complaints: string[] = []
@@ -60,7 +62,11 @@ export async function startProduct(): Promise<Product> {
   return {
     address,
     async as(who, width = 1440) {
-      const context: BrowserContext = await browser.newContext({ viewport: { width, height: 900 }, baseURL: address, acceptDownloads: true })
+      const context: BrowserContext = await browser.newContext({
+        viewport: { width, height: 900 },
+        baseURL: address,
+        acceptDownloads: true,
+      })
       const page = await context.newPage()
       page.on('console', (message) => {
         if (message.type() === 'error' && !refusedOnPurpose.test(message.text())) complaints.push(message.text())

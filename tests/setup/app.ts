@@ -33,7 +33,9 @@ export interface TestApp {
 }
 
 /** The whole application on its own real database and folder, with one person of each role signed in. Closed after the file's tests. */
-export async function testApp(options: { publicUrl?: string; withPeople?: boolean; firstLeadCode?: string; requestsPerMinute?: number } = {}): Promise<TestApp> {
+export async function testApp(
+  options: { publicUrl?: string; withPeople?: boolean; firstLeadCode?: string; requestsPerMinute?: number } = {},
+): Promise<TestApp> {
   const dataDir = await mkdtemp(join(tmpdir(), 'wearcourse-test-'))
   const database = await testDatabase()
   const time = { now: Date.now() }
@@ -62,7 +64,11 @@ export async function testApp(options: { publicUrl?: string; withPeople?: boolea
   const as = { nobody: supertest.agent(app) } as TestApp['as']
   for (const role of roles) {
     as[role] = supertest.agent(app)
-    if (withPeople) await as[role].post('/api/session').send({ email: `${role}@brackenholt.example`, password: testPassword }).expect(200)
+    if (withPeople)
+      await as[role]
+        .post('/api/session')
+        .send({ email: `${role}@brackenholt.example`, password: testPassword })
+        .expect(200)
   }
   return { app, db: database.db, files, mail, dataDir, time, as, ids, logged }
 }

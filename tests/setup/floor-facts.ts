@@ -19,7 +19,16 @@ async function addSheet(db: Database, subject: Subject, { kind, title, dated }: 
   files += 1
   const [revision] = await db
     .insert(sheetRevisions)
-    .values({ sheetId: sheet.id, sha256: `test-${files}-${title}`, bytes: 1000, fileName: `${title}.pdf`, revisionDate: dated, state: 'ready', pages: 2, sequence: 1 })
+    .values({
+      sheetId: sheet.id,
+      sha256: `test-${files}-${title}`,
+      bytes: 1000,
+      fileName: `${title}.pdf`,
+      revisionDate: dated,
+      state: 'ready',
+      pages: 2,
+      sequence: 1,
+    })
     .returning({ id: sheetRevisions.id })
   if (!revision) throw new Error('no revision')
   await db.insert(sheetSubjects).values({ sheetId: sheet.id, ...subject })
@@ -28,20 +37,45 @@ async function addSheet(db: Database, subject: Subject, { kind, title, dated }: 
 
 async function state(db: Database, subject: Subject & { revisionId: string }, facts: readonly Stated[]) {
   if (facts.length === 0) return
-  await db.insert(propertyValues).values(
-    facts.map((fact, position) => ({
-      ...subject, position, kind: 'stated' as const, page: 1, byName: 'Test lead', part: fact.part ?? 'mixed', property: fact.property, value: fact.value, at: fact.at ?? null,
-      film: fact.film ?? null, of: fact.of ?? null, thinned: fact.thinned ?? null,
-    })),
-  )
+  await db
+    .insert(propertyValues)
+    .values(
+      facts.map((fact, position) => ({
+        ...subject,
+        position,
+        kind: 'stated' as const,
+        page: 1,
+        byName: 'Test lead',
+        part: fact.part ?? 'mixed',
+        property: fact.property,
+        value: fact.value,
+        at: fact.at ?? null,
+        film: fact.film ?? null,
+        of: fact.of ?? null,
+        thinned: fact.thinned ?? null,
+      })),
+    )
 }
 
 const exactly = (value: number, unit: 'lb/gal') => ({ min: value, max: value, unit })
 
 /** A component with a safety sheet and what a check needs of it. Invented. */
-export async function addProduct(db: Database, name: string, more: { kind?: 'resin' | 'hardener' | 'aggregate'; density?: number; dated?: string } = {}) {
+export async function addProduct(
+  db: Database,
+  name: string,
+  more: { kind?: 'resin' | 'hardener' | 'aggregate'; density?: number; dated?: string } = {},
+) {
   const { kind = 'resin', density = 9.2, dated = '2025-05-02' } = more
-  const [row] = await db.insert(products).values({ name, maker: 'Ostrel', kind, chemistry: kind === 'aggregate' ? 'silica' : 'epoxy', searchText: `${name} ostrel`.toLowerCase() }).returning({ id: products.id })
+  const [row] = await db
+    .insert(products)
+    .values({
+      name,
+      maker: 'Ostrel',
+      kind,
+      chemistry: kind === 'aggregate' ? 'silica' : 'epoxy',
+      searchText: `${name} ostrel`.toLowerCase(),
+    })
+    .returning({ id: products.id })
   if (!row) throw new Error('no product')
   const revisionId = await addSheet(db, { productId: row.id }, { kind: 'safety', title: `${name}, safety sheet`, dated })
   await state(db, { productId: row.id, revisionId }, [
@@ -56,7 +90,10 @@ export async function addProduct(db: Database, name: string, more: { kind?: 'res
 export async function addMix(db: Database, name: string, more: { color?: string; dated?: string; without?: string[] } = {}) {
   const partA = await addProduct(db, `${name} A`, { density: 9.6, ...(more.dated ? { dated: more.dated } : {}) })
   const partB = await addProduct(db, `${name} B`, { kind: 'hardener', density: 8.3, ...(more.dated ? { dated: more.dated } : {}) })
-  const [row] = await db.insert(mixes).values({ name, maker: 'Ostrel', chemistry: 'epoxy', color: more.color ?? '#8f9a98', searchText: `${name} ostrel`.toLowerCase() }).returning({ id: mixes.id })
+  const [row] = await db
+    .insert(mixes)
+    .values({ name, maker: 'Ostrel', chemistry: 'epoxy', color: more.color ?? '#8f9a98', searchText: `${name} ostrel`.toLowerCase() })
+    .returning({ id: mixes.id })
   if (!row) throw new Error('no mix')
   await db.insert(mixParts).values([
     { mixId: row.id, part: 'A', productId: partA },
@@ -86,6 +123,10 @@ export async function addMix(db: Database, name: string, more: { color?: string;
     { property: 'moistureEmission', value: { max: 5, unit: 'lb/1000 ft²·24 h' } },
     { property: 'surfaceProfile', value: { min: 2, max: 4, unit: 'CSP' } },
   ]
-  await state(db, { mixId: row.id, revisionId }, facts.filter(({ property }) => !more.without?.includes(property)))
+  await state(
+    db,
+    { mixId: row.id, revisionId },
+    facts.filter(({ property }) => !more.without?.includes(property)),
+  )
   return row.id
 }

@@ -19,20 +19,23 @@ describe('the demo’s sheets', () => {
     expect(demoMixes.length).toBeGreaterThanOrEqual(10)
   })
 
-  it.each(sheets.map((sheet) => [sheet.file, sheet] as const))('%s reads as it is kept, and every value stands in its box', async (_, sheet) => {
-    const bytes = new Uint8Array(await readFile(join(demoFolder, sheet.file)))
-    expect(createHash('sha256').update(bytes).digest('hex')).toBe(sheet.sha256)
-    const read = await readPages(bytes)
-    expect('pages' in read && read.pages).toEqual(sheet.pages)
-    if (sheet.of === scannedProduct) expect(sheet.facts).toEqual([])
-    else expect(sheet.facts.length).toBeGreaterThan(4)
-    for (const { statement, page, box, quote } of sheet.facts) {
-      expect(valueProblem(statement.property, statement.value), quote).toBeUndefined()
-      const inBox = wordsIn(sheet.pages[page - 1]?.words ?? [], box, 1).map(([word]) => word)
-      expect(inBox.length, quote).toBeGreaterThan(0)
-      for (const word of inBox) if (!('codes' in statement.value)) expect(letters(quote)).toContain(letters(word))
-    }
-  })
+  it.each(sheets.map((sheet) => [sheet.file, sheet] as const))(
+    '%s reads as it is kept, and every value stands in its box',
+    async (_, sheet) => {
+      const bytes = new Uint8Array(await readFile(join(demoFolder, sheet.file)))
+      expect(createHash('sha256').update(bytes).digest('hex')).toBe(sheet.sha256)
+      const read = await readPages(bytes)
+      expect('pages' in read && read.pages).toEqual(sheet.pages)
+      if (sheet.of === scannedProduct) expect(sheet.facts).toEqual([])
+      else expect(sheet.facts.length).toBeGreaterThan(4)
+      for (const { statement, page, box, quote } of sheet.facts) {
+        expect(valueProblem(statement.property, statement.value), quote).toBeUndefined()
+        const inBox = wordsIn(sheet.pages[page - 1]?.words ?? [], box, 1).map(([word]) => word)
+        expect(inBox.length, quote).toBeGreaterThan(0)
+        for (const word of inBox) if (!('codes' in statement.value)) expect(letters(quote)).toContain(letters(word))
+      }
+    },
+  )
 
   it('contradict themselves once: a ratio by volume that is not that by weight', () => {
     const off = demoMixes.flatMap((mix) => {

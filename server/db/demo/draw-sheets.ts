@@ -30,14 +30,33 @@ export interface DemoSheet {
 export const demoFolder = join(import.meta.dirname, '../../../fixtures/demo-sheets')
 const fileName = (name: string, kind: SheetKind, suffix = '') => `${name.toLowerCase().replace(/[^a-z0-9]+/g, '-')}-${kind}${suffix}.pdf`
 
-type Drawing = Omit<DemoSheet, 'sha256' | 'bytes' | 'pages' | 'facts'> & { bytes: Uint8Array<ArrayBuffer>; facts: (pages: DemoSheet['pages']) => LocatedFact[] }
+type Drawing = Omit<DemoSheet, 'sha256' | 'bytes' | 'pages' | 'facts'> & {
+  bytes: Uint8Array<ArrayBuffer>
+  facts: (pages: DemoSheet['pages']) => LocatedFact[]
+}
 
 async function drawings(): Promise<Drawing[]> {
   const wordsOf = (pages: DemoSheet['pages']) => pages.map(({ words }) => words)
-  const older = demoMixes.filter(({ name }) => name === supersededRevision.mix).map((mix) => ({ ...mix, dated: supersededRevision.dated, table: mix.table && { ...mix.table, rows: mix.table.rows.map((row) => (row.property === 'recoatWindow' ? { ...row, cells: supersededRevision.windows } : row)) } }))
+  const older = demoMixes
+    .filter(({ name }) => name === supersededRevision.mix)
+    .map((mix) => ({
+      ...mix,
+      dated: supersededRevision.dated,
+      table: mix.table && {
+        ...mix.table,
+        rows: mix.table.rows.map((row) => (row.property === 'recoatWindow' ? { ...row, cells: supersededRevision.windows } : row)),
+      },
+    }))
   const data = async (mix: (typeof demoMixes)[number], superseded: boolean): Promise<Drawing> => ({
-    file: fileName(mix.name, 'data', superseded ? `-${mix.dated.slice(0, 4)}` : ''), kind: 'data', title: `${mix.name}, data sheet`, maker: mix.maker, dated: mix.dated, of: mix.name, superseded,
-    bytes: await printPdf(dataSheet(mix)), facts: (pages) => dataFacts(mix, wordsOf(pages)),
+    file: fileName(mix.name, 'data', superseded ? `-${mix.dated.slice(0, 4)}` : ''),
+    kind: 'data',
+    title: `${mix.name}, data sheet`,
+    maker: mix.maker,
+    dated: mix.dated,
+    of: mix.name,
+    superseded,
+    bytes: await printPdf(dataSheet(mix)),
+    facts: (pages) => dataFacts(mix, wordsOf(pages)),
   })
   const all: Drawing[] = []
   for (const mix of older) all.push(await data(mix as (typeof demoMixes)[number], true))
@@ -45,8 +64,15 @@ async function drawings(): Promise<Drawing[]> {
   for (const product of demoProducts) {
     const scanned = product.name === scannedProduct
     all.push({
-      file: fileName(product.name, 'safety'), kind: 'safety', title: `${product.name}, safety sheet`, maker: product.maker, dated: product.dated, of: product.name, superseded: false,
-      bytes: scanned ? await scan(product.name) : await printPdf(safetySheet(product)), facts: (pages) => (scanned ? [] : safetyFacts(product, wordsOf(pages))),
+      file: fileName(product.name, 'safety'),
+      kind: 'safety',
+      title: `${product.name}, safety sheet`,
+      maker: product.maker,
+      dated: product.dated,
+      of: product.name,
+      superseded: false,
+      bytes: scanned ? await scan(product.name) : await printPdf(safetySheet(product)),
+      facts: (pages) => (scanned ? [] : safetyFacts(product, wordsOf(pages))),
     })
   }
   return all
@@ -63,11 +89,31 @@ async function scan(name: string): Promise<Uint8Array<ArrayBuffer>> {
   context.font = 'bold 34px sans-serif'
   context.fillText('Safety data sheet', 90, 130)
   context.font = '22px sans-serif'
-  const lines = [name, '', '1. Identification', 'Supplier: Corbel Minerals, Quarry Lane, Withy Hollow', 'Emergency telephone: 1-800-555-0162', '', '2. Hazard identification', 'Not classified as hazardous.', '', '7. Handling and storage', 'Avoid raising dust. Keep bags dry.', '', '16. Other information', 'October 2, 2023']
+  const lines = [
+    name,
+    '',
+    '1. Identification',
+    'Supplier: Corbel Minerals, Quarry Lane, Withy Hollow',
+    'Emergency telephone: 1-800-555-0162',
+    '',
+    '2. Hazard identification',
+    'Not classified as hazardous.',
+    '',
+    '7. Handling and storage',
+    'Avoid raising dust. Keep bags dry.',
+    '',
+    '16. Other information',
+    'October 2, 2023',
+  ]
   lines.forEach((line, index) => context.fillText(line, 90, 190 + index * 40))
   const image = `data:image/jpeg;base64,${canvas.toBuffer('image/jpeg', 70).toString('base64')}`
   const created = new Date('2023-10-02T09:00:00Z')
-  return printPdf({ pageSize: 'LETTER', pageMargins: 0, info: { creationDate: created, modDate: created }, content: [{ image, width: 612 }] })
+  return printPdf({
+    pageSize: 'LETTER',
+    pageMargins: 0,
+    info: { creationDate: created, modDate: created },
+    content: [{ image, width: 612 }],
+  })
 }
 
 /** Draws every sheet of the demo anew and writes what was read off it beside it. */

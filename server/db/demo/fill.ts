@@ -57,7 +57,11 @@ export async function fillDemo({ db, files, now }: Filling): Promise<void> {
     const crewIds = people.filter(({ role }) => role === 'crew').map(({ id }) => id)
     const jobIds: string[] = []
     for (const [index, { buildUp, body }] of demoJobs.entries()) {
-      const jobId = await addJob(tx, { ...body, buildUpVersionId: versions.get(buildUp) ?? null, crewIds: index === 0 ? crewIds.slice(0, 1) : crewIds }, lead.id)
+      const jobId = await addJob(
+        tx,
+        { ...body, buildUpVersionId: versions.get(buildUp) ?? null, crewIds: index === 0 ? crewIds.slice(0, 1) : crewIds },
+        lead.id,
+      )
       jobIds.push(jobId)
     }
     const title = 'Resinous flooring, filling hall'
@@ -69,7 +73,8 @@ export async function fillDemo({ db, files, now }: Filling): Promise<void> {
 
 async function fillCatalogue(tx: Transaction, sheets: readonly DemoSheet[], lead: Writer): Promise<Known> {
   const [products, mixes] = [new Map<string, string>(), new Map<string, string>()]
-  for (const { name, maker, kind, chemistry } of demoProducts) products.set(name, await addProduct(tx, { name, maker, kind, chemistry, note: '' }, lead))
+  for (const { name, maker, kind, chemistry } of demoProducts)
+    products.set(name, await addProduct(tx, { name, maker, kind, chemistry, note: '' }, lead))
   const idIn = (map: Map<string, string>) => (name: string) => {
     const id = map.get(name)
     if (!id) throw new Error(`The demo has no ${name}.`)
@@ -83,14 +88,21 @@ async function fillCatalogue(tx: Transaction, sheets: readonly DemoSheet[], lead
   await fillSheets(tx, sheets, { known, lead })
   for (const { name, price } of demoMixes) {
     const statement: FactBody['statement'] = { property: 'packPrice', part: 'mixed', value: { min: price, max: price, unit: 'USD' } }
-    await addFactsAtOnce(tx, ofMix(known.mix(name)), { bodies: [{ statement, how: { kind: 'entered', reason: 'Price list of October 2026' } }], by: lead })
+    await addFactsAtOnce(tx, ofMix(known.mix(name)), {
+      bodies: [{ statement, how: { kind: 'entered', reason: 'Price list of October 2026' } }],
+      by: lead,
+    })
   }
   for (const name of ['Corbel 40-mesh silica', 'Corbel 20-40 mesh quartz, dried']) {
     const bag: FactBody['statement'] = { property: 'packSize', part: 'mixed', value: { min: 50, max: 50, unit: 'lb' } }
     const price: FactBody['statement'] = { property: 'packPrice', part: 'mixed', value: { min: 14, max: 14, unit: 'USD' } }
-    await addFactsAtOnce(tx, ofProduct(known.product(name)), { by: lead, bodies: [
-      { statement: bag, how: { kind: 'entered', reason: 'Printed on the bag, delivery of 3 October 2026' } }, { statement: price, how: { kind: 'entered', reason: 'Price list of October 2026' } },
-    ] })
+    await addFactsAtOnce(tx, ofProduct(known.product(name)), {
+      by: lead,
+      bodies: [
+        { statement: bag, how: { kind: 'entered', reason: 'Printed on the bag, delivery of 3 October 2026' } },
+        { statement: price, how: { kind: 'entered', reason: 'Price list of October 2026' } },
+      ],
+    })
   }
   return known
 }
@@ -100,13 +112,18 @@ async function fillSheets(tx: Transaction, sheets: readonly DemoSheet[], { known
   const ids = new Map<string, string>()
   for (const sheet of sheets) {
     const subject = sheet.kind === 'data' ? { mixId: known.mix(sheet.of) } : { productId: known.product(sheet.of) }
-    const sheetId = ids.get(sheet.title) ?? (await addSheet(tx, { kind: sheet.kind, title: sheet.title, maker: sheet.maker, subjects: [subject] }, lead.id))
+    const sheetId =
+      ids.get(sheet.title) ??
+      (await addSheet(tx, { kind: sheet.kind, title: sheet.title, maker: sheet.maker, subjects: [subject] }, lead.id))
     ids.set(sheet.title, sheetId)
     const { sha256, bytes, file: fileName, dated: revisionDate, pages } = sheet
     const uploadedAt = new Date(Date.parse(sheet.dated) + 40 * 86_400_000).toISOString()
     const revisionId = await addRevision(tx, { sheetId, sha256, bytes, fileName, revisionDate, pages, uploadedBy: lead.id, uploadedAt })
     if (sheet.superseded) continue
-    const stated = sheet.facts.map(({ statement, page, box, quote }): FactBody => ({ statement, how: { kind: 'stated', revisionId, page, box, quote } }))
+    const stated = sheet.facts.map(({ statement, page, box, quote }): FactBody => ({
+      statement,
+      how: { kind: 'stated', revisionId, page, box, quote },
+    }))
     await addFactsAtOnce(tx, 'mixId' in subject ? ofMix(subject.mixId) : ofProduct(subject.productId), { bodies: stated, by: lead })
   }
 }
@@ -114,7 +131,11 @@ async function fillSheets(tx: Transaction, sheets: readonly DemoSheet[], { known
 const acceptedBecause = 'Looked into by the technical lead; the maker has been asked in writing.'
 
 /** Makes a build-up with its versions, releasing those that are to be; returns the newest released version, or the draft. */
-async function fillBuildUp(tx: Transaction, { name, versions }: DemoBuildUp, { known, lead, now }: { known: Known; lead: User; now: number }): Promise<string> {
+async function fillBuildUp(
+  tx: Transaction,
+  { name, versions }: DemoBuildUp,
+  { known, lead, now }: { known: Known; lead: User; now: number },
+): Promise<string> {
   let buildUpId = ''
   let newest = ''
   for (const [index, version] of versions.entries()) {

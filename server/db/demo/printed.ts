@@ -28,7 +28,11 @@ interface Extra {
 }
 
 /** A range with its unit; null is an end that the sheet does not state. */
-export function range(property: Property, label: string, [min, max, unit, extra = {}]: [number | null, number | null, Unit, Extra?]): PrintedValue {
+export function range(
+  property: Property,
+  label: string,
+  [min, max, unit, extra = {}]: [number | null, number | null, Unit, Extra?],
+): PrintedValue {
   const { after, ...rest } = extra
   const value = { ...(min === null ? {} : { min }), ...(max === null ? {} : { max }), unit } as Statement['value']
   const words = [sayRange(min ?? undefined, max ?? undefined, unit), rest.film, after].filter(Boolean).join(' ')
@@ -40,11 +44,11 @@ export function ratio(label: string, parts: number[], basis: 'volume' | 'weight'
 }
 
 export function split(allowed: boolean): PrintedValue {
-  return { label: 'Kits', words: allowed ? 'Part kits may be mixed on a scale.' : 'Mix full kits only.', statement: { property: 'splitKit', part: 'mixed', value: { is: allowed } } }
-}
-
-export function words(property: Property, label: string, text: string): PrintedValue {
-  return { label, words: text, statement: { property, part: 'mixed', value: { text } } }
+  return {
+    label: 'Kits',
+    words: allowed ? 'Part kits may be mixed on a scale.' : 'Mix full kits only.',
+    statement: { property: 'splitKit', part: 'mixed', value: { is: allowed } },
+  }
 }
 
 /** A row of a table over temperature: the same property at each, ends of windows with a null where none is stated. */
@@ -59,10 +63,18 @@ export interface TemperatureRow {
 }
 
 /** The cells of a row as printed values. */
-export function cellsOf({ property, label, unit, cells, mass, volume }: TemperatureRow, temperatures: number[], degree: '°F' | '°C'): PrintedValue[] {
+export function cellsOf(
+  { property, label, unit, cells, mass, volume }: TemperatureRow,
+  temperatures: number[],
+  degree: '°F' | '°C',
+): PrintedValue[] {
   return cells.map((cell, index) => {
     const [min, max] = typeof cell === 'number' ? [cell, cell] : cell
-    const at: At = { temperature: { value: temperatures[index] ?? 0, unit: degree }, ...(mass ? { mass } : {}), ...(volume ? { volume } : {}) }
+    const at: At = {
+      temperature: { value: temperatures[index] ?? 0, unit: degree },
+      ...(mass ? { mass } : {}),
+      ...(volume ? { volume } : {}),
+    }
     return range(property, label, [min, max, unit, { at }])
   })
 }

@@ -15,7 +15,11 @@ type Pages = readonly (readonly PlacedWord[])[]
 
 /** What a data sheet states, found on its pages. */
 export function dataFacts(mix: DemoMix, pages: Pages): LocatedFact[] {
-  const listed = mix.values.map(({ label, words, statement }) => ({ statement, quote: `${label} ${words}`, ...placeInRow(pages, { label, words }) }))
+  const listed = mix.values.map(({ label, words, statement }) => ({
+    statement,
+    quote: `${label} ${words}`,
+    ...placeInRow(pages, { label, words }),
+  }))
   return [...listed, ...tableFacts(mix, pages)]
 }
 
@@ -26,7 +30,9 @@ function tableFacts({ maker, table }: DemoMix, pages: Pages): LocatedFact[] {
   return rows.flatMap((row, rowIndex) => {
     const cells = cellsOf(row, temperatures, degree)
     return cells.map(({ words, statement }, column) => {
-      const others = across ? cells.slice(0, column).map((cell) => cell.words) : rows.slice(0, rowIndex).map((other) => cellsOf(other, temperatures, degree)[column]?.words)
+      const others = across
+        ? cells.slice(0, column).map((cell) => cell.words)
+        : rows.slice(0, rowIndex).map((other) => cellsOf(other, temperatures, degree)[column]?.words)
       const nth = others.filter((other) => other === words).length
       const head = `${temperatures[column] ?? ''} ${degree}`
       const place = placeInRow(pages, { label: across ? tableLabel(row) : head, words, nth })
@@ -39,7 +45,9 @@ function tableFacts({ maker, table }: DemoMix, pages: Pages): LocatedFact[] {
 export function safetyFacts(product: DemoProduct, pages: Pages): LocatedFact[] {
   const { hazards } = product
   const at = (property: Property, value: Statement['value'], row: { label: string; words: string }): LocatedFact => ({
-    statement: { property, part: 'mixed', value }, quote: `${row.label} ${row.words}`, ...placeInRow(pages, row),
+    statement: { property, part: 'mixed', value },
+    quote: `${row.label} ${row.words}`,
+    ...placeInRow(pages, row),
   })
   const text = (property: Property, label: string, words: string) => at(property, { text: words }, { label, words })
   const codes = (property: Property, list: readonly string[]): LocatedFact[] => {
@@ -48,7 +56,12 @@ export function safetyFacts(product: DemoProduct, pages: Pages): LocatedFact[] {
     const [first] = places
     if (!first) return []
     const together = places.filter(({ page }) => page === first.page).map(({ box }) => box)
-    const box = [Math.min(...together.map((b) => b[0])), Math.min(...together.map((b) => b[1])), Math.max(...together.map((b) => b[2])), Math.max(...together.map((b) => b[3]))] as LocatedFact['box']
+    const box = [
+      Math.min(...together.map((b) => b[0])),
+      Math.min(...together.map((b) => b[1])),
+      Math.max(...together.map((b) => b[2])),
+      Math.max(...together.map((b) => b[3])),
+    ] as LocatedFact['box']
     return [{ statement: { property, part: 'mixed', value: { codes: [...list] } }, quote: list.join(' '), page: first.page, box }]
   }
   const { transport } = hazards
@@ -58,15 +71,38 @@ export function safetyFacts(product: DemoProduct, pages: Pages): LocatedFact[] {
     text('emergencyPhone', 'Emergency telephone', phoneOf(product.maker)),
     at('revisionDate', { date: product.dated }, { label: 'Revision date', words: dateWords(product.maker, product.dated) }),
     ...(hazards.signal ? [text('signalWord', 'Signal word', hazards.signal)] : []),
-    ...codes('hazardStatements', hazards.h), ...codes('supplementalStatements', hazards.euh ?? []), ...codes('precautionaryStatements', hazards.p),
+    ...codes('hazardStatements', hazards.h),
+    ...codes('supplementalStatements', hazards.euh ?? []),
+    ...codes('precautionaryStatements', hazards.p),
     ...hazards.ingredients.map((row): LocatedFact => {
       const [name, cas, min, max] = row
       const place = placeInRow(pages, { label: cas, words: shareWords(row) })
-      return { statement: { property: 'ingredient', part: 'mixed', value: { name, cas, ...(min === null ? {} : { min }), max, unit: '%' } }, quote: `${name} ${cas} ${shareWords(row)}`, ...place }
+      return {
+        statement: { property: 'ingredient', part: 'mixed', value: { name, cas, ...(min === null ? {} : { min }), max, unit: '%' } },
+        quote: `${name} ${cas} ${shareWords(row)}`,
+        ...place,
+      }
     }),
-    text('gloves', 'Gloves', hazards.gloves), text('eyeProtection', 'Eye protection', hazards.eyes), text('respiratoryProtection', 'Respiratory protection', hazards.breathing),
-    ...(product.flashPoint ? [at('flashPoint', { min: product.flashPoint[0], max: product.flashPoint[0], unit: product.flashPoint[1] }, { label: 'Flash point', words: `${product.flashPoint[0]} ${product.flashPoint[1]}` })] : []),
+    text('gloves', 'Gloves', hazards.gloves),
+    text('eyeProtection', 'Eye protection', hazards.eyes),
+    text('respiratoryProtection', 'Respiratory protection', hazards.breathing),
+    ...(product.flashPoint
+      ? [
+          at(
+            'flashPoint',
+            { min: product.flashPoint[0], max: product.flashPoint[0], unit: product.flashPoint[1] },
+            { label: 'Flash point', words: `${product.flashPoint[0]} ${product.flashPoint[1]}` },
+          ),
+        ]
+      : []),
     at('density', { min: density, max: density, unit }, { label: 'Density', words: `${density} ${unit}` }),
-    ...(transport ? [text('unNumber', 'UN number', transport[0]), text('properShippingName', 'Proper shipping name', transport[1]), text('transportClass', 'Class', transport[2]), text('packingGroup', 'Packing group', transport[3])] : []),
+    ...(transport
+      ? [
+          text('unNumber', 'UN number', transport[0]),
+          text('properShippingName', 'Proper shipping name', transport[1]),
+          text('transportClass', 'Class', transport[2]),
+          text('packingGroup', 'Packing group', transport[3]),
+        ]
+      : []),
   ]
 }

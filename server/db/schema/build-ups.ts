@@ -5,7 +5,10 @@ import type { Evaluation } from '../../../shared/domain/evaluation.ts'
 import { people } from './people.ts'
 
 const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 'string' })
-const key = () => uuid('id').primaryKey().default(sql`gen_random_uuid()`)
+const key = () =>
+  uuid('id')
+    .primaryKey()
+    .default(sql`gen_random_uuid()`)
 
 export const buildUps = pgTable(
   'build_ups',
@@ -20,16 +23,23 @@ export const buildUps = pgTable(
     createdAt: instant('created_at').notNull().defaultNow(),
     searchText: text('search_text').notNull().default(''),
   },
-  (table) => [index('build_ups_name').on(table.name, table.id), index('build_ups_search').using('gin', sql`${table.searchText} gin_trgm_ops`)],
+  (table) => [
+    index('build_ups_name').on(table.name, table.id),
+    index('build_ups_search').using('gin', sql`${table.searchText} gin_trgm_ops`),
+  ],
 )
 
 export const buildUpVersions = pgTable(
   'build_up_versions',
   {
     id: key(),
-    buildUpId: uuid('build_up_id').notNull().references(() => buildUps.id),
+    buildUpId: uuid('build_up_id')
+      .notNull()
+      .references(() => buildUps.id),
     number: integer('number').notNull(),
-    status: text('status', { enum: ['draft', 'released', 'superseded', 'withdrawn'] }).notNull().default('draft'),
+    status: text('status', { enum: ['draft', 'released', 'superseded', 'withdrawn'] })
+      .notNull()
+      .default('draft'),
     conditions: jsonb('conditions').$type<Conditions>().notNull(),
     /** Edit counter of the draft; a save with another number is a conflict. */
     version: integer('version').notNull().default(1),
@@ -44,7 +54,10 @@ export const buildUpVersions = pgTable(
     frozenInput: jsonb('frozen_input').$type<EvaluationInput>(),
     frozenEvaluation: jsonb('frozen_evaluation').$type<Evaluation>(),
   },
-  (table) => [uniqueIndex('build_up_versions_number').on(table.buildUpId, table.number), index('build_up_versions_status').on(table.status)],
+  (table) => [
+    uniqueIndex('build_up_versions_number').on(table.buildUpId, table.number),
+    index('build_up_versions_status').on(table.status),
+  ],
 )
 
 /** One row a course, bottom up by position. */
@@ -52,7 +65,9 @@ export const courses = pgTable(
   'courses',
   {
     id: key(),
-    versionId: uuid('version_id').notNull().references(() => buildUpVersions.id, { onDelete: 'cascade' }),
+    versionId: uuid('version_id')
+      .notNull()
+      .references(() => buildUpVersions.id, { onDelete: 'cascade' }),
     /** The course's own id within its version, stable across saves. */
     courseId: text('course_id').notNull(),
     position: integer('position').notNull(),

@@ -6,7 +6,10 @@ import { people } from './people.ts'
 import { sheetRevisions, sheets } from './sheets.ts'
 
 const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 'string' })
-const key = () => uuid('id').primaryKey().default(sql`gen_random_uuid()`)
+const key = () =>
+  uuid('id')
+    .primaryKey()
+    .default(sql`gen_random_uuid()`)
 
 export const products = pgTable(
   'products',
@@ -17,7 +20,9 @@ export const products = pgTable(
     kind: text('kind', { enum: ['resin', 'hardener', 'primer', 'aggregate', 'filler', 'additive'] }).notNull(),
     chemistry: text('chemistry').notNull(),
     note: text('note').notNull().default(''),
-    status: text('status', { enum: ['active', 'withdrawn'] }).notNull().default('active'),
+    status: text('status', { enum: ['active', 'withdrawn'] })
+      .notNull()
+      .default('active'),
     version: integer('version').notNull().default(1),
     createdAt: instant('created_at').notNull().defaultNow(),
     updatedAt: instant('updated_at').notNull().defaultNow(),
@@ -40,7 +45,9 @@ export const mixes = pgTable(
     chemistry: text('chemistry').notNull(),
     color: text('color').notNull(),
     note: text('note').notNull().default(''),
-    status: text('status', { enum: ['active', 'withdrawn'] }).notNull().default('active'),
+    status: text('status', { enum: ['active', 'withdrawn'] })
+      .notNull()
+      .default('active'),
     version: integer('version').notNull().default(1),
     createdAt: instant('created_at').notNull().defaultNow(),
     updatedAt: instant('updated_at').notNull().defaultNow(),
@@ -56,9 +63,13 @@ export const mixes = pgTable(
 export const mixParts = pgTable(
   'mix_parts',
   {
-    mixId: uuid('mix_id').notNull().references(() => mixes.id),
+    mixId: uuid('mix_id')
+      .notNull()
+      .references(() => mixes.id),
     part: text('part', { enum: ['A', 'B', 'C'] }).notNull(),
-    productId: uuid('product_id').notNull().references(() => products.id),
+    productId: uuid('product_id')
+      .notNull()
+      .references(() => products.id),
   },
   (table) => [primaryKey({ columns: [table.mixId, table.part] }), index('mix_parts_product').on(table.productId)],
 )
@@ -71,7 +82,9 @@ export const propertyValues = pgTable(
     productId: uuid('product_id').references(() => products.id),
     mixId: uuid('mix_id').references(() => mixes.id),
     property: text('property').notNull(),
-    part: text('part', { enum: ['mixed', 'A', 'B', 'C'] }).notNull().default('mixed'),
+    part: text('part', { enum: ['mixed', 'A', 'B', 'C'] })
+      .notNull()
+      .default('mixed'),
     value: jsonb('value').$type<PropertyValue>().notNull(),
     at: jsonb('at').$type<ValueConditions>(),
     film: text('film', { enum: ['wet', 'dry'] }),
@@ -106,7 +119,9 @@ export const sheetSubjects = pgTable(
   'sheet_subjects',
   {
     id: key(),
-    sheetId: uuid('sheet_id').notNull().references(() => sheets.id),
+    sheetId: uuid('sheet_id')
+      .notNull()
+      .references(() => sheets.id),
     productId: uuid('product_id').references(() => products.id),
     mixId: uuid('mix_id').references(() => mixes.id),
   },

@@ -5,7 +5,10 @@ import { buildUpVersions } from './build-ups.ts'
 import { people } from './people.ts'
 
 const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 'string' })
-const key = () => uuid('id').primaryKey().default(sql`gen_random_uuid()`)
+const key = () =>
+  uuid('id')
+    .primaryKey()
+    .default(sql`gen_random_uuid()`)
 
 export const jobs = pgTable(
   'jobs',
@@ -16,7 +19,9 @@ export const jobs = pgTable(
     name: text('name').notNull(),
     client: text('client').notNull().default(''),
     site: text('site').notNull().default(''),
-    status: text('status', { enum: ['open', 'closed'] }).notNull().default('open'),
+    status: text('status', { enum: ['open', 'closed'] })
+      .notNull()
+      .default('open'),
     buildUpVersionId: uuid('build_up_version_id').references(() => buildUpVersions.id),
     conditions: jsonb('conditions').$type<JobConditions>().notNull(),
     loss: jsonb('loss').$type<Loss>().notNull(),
@@ -34,7 +39,9 @@ export const bays = pgTable(
   'bays',
   {
     id: key(),
-    jobId: uuid('job_id').notNull().references(() => jobs.id),
+    jobId: uuid('job_id')
+      .notNull()
+      .references(() => jobs.id),
     bayId: text('bay_id').notNull(),
     position: integer('position').notNull(),
     bay: jsonb('bay').$type<Bay>().notNull(),
@@ -46,8 +53,12 @@ export const bays = pgTable(
 export const jobPeople = pgTable(
   'job_people',
   {
-    jobId: uuid('job_id').notNull().references(() => jobs.id),
-    personId: uuid('person_id').notNull().references(() => people.id),
+    jobId: uuid('job_id')
+      .notNull()
+      .references(() => jobs.id),
+    personId: uuid('person_id')
+      .notNull()
+      .references(() => people.id),
   },
   (table) => [primaryKey({ columns: [table.jobId, table.personId] }), index('job_people_person').on(table.personId)],
 )
@@ -57,14 +68,18 @@ export const logEntries = pgTable(
   'log_entries',
   {
     id: uuid('id').primaryKey(),
-    jobId: uuid('job_id').notNull().references(() => jobs.id),
+    jobId: uuid('job_id')
+      .notNull()
+      .references(() => jobs.id),
     bayId: text('bay_id'),
     courseId: text('course_id'),
     kind: text('kind').notNull(),
     entry: jsonb('entry').notNull(),
     deviceAt: instant('device_at').notNull(),
     receivedAt: instant('received_at').notNull().defaultNow(),
-    personId: uuid('person_id').notNull().references(() => people.id),
+    personId: uuid('person_id')
+      .notNull()
+      .references(() => people.id),
     correctsId: uuid('corrects_id'),
   },
   (table) => [index('log_entries_job').on(table.jobId, table.receivedAt)],

@@ -6,7 +6,9 @@ const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 's
 export const people = pgTable(
   'people',
   {
-    id: uuid('id').primaryKey().default(sql`gen_random_uuid()`),
+    id: uuid('id')
+      .primaryKey()
+      .default(sql`gen_random_uuid()`),
     name: text('name').notNull(),
     /** Lower case; one account an address. */
     email: text('email').notNull().unique(),
@@ -23,8 +25,12 @@ export const people = pgTable(
 export const passwordLinks = pgTable(
   'password_links',
   {
-    id: uuid('id').primaryKey().default(sql`gen_random_uuid()`),
-    personId: uuid('person_id').notNull().references(() => people.id),
+    id: uuid('id')
+      .primaryKey()
+      .default(sql`gen_random_uuid()`),
+    personId: uuid('person_id')
+      .notNull()
+      .references(() => people.id),
     purpose: text('purpose', { enum: ['invitation', 'reset'] }).notNull(),
     tokenHash: text('token_hash').notNull().unique(),
     expiresAt: instant('expires_at').notNull(),
@@ -43,10 +49,6 @@ export const signInFailures = pgTable('sign_in_failures', {
 /** The table of connect-pg-simple. */
 export const session = pgTable(
   'session',
-  {
-    sid: varchar('sid').primaryKey(),
-    sess: json('sess').notNull(),
-    expire: timestamp('expire', { precision: 6 }).notNull(),
-  },
+  { sid: varchar('sid').primaryKey(), sess: json('sess').notNull(), expire: timestamp('expire', { precision: 6 }).notNull() },
   (table) => [index('session_expire').on(table.expire)],
 )

@@ -1,9 +1,24 @@
 import { sql } from 'drizzle-orm'
-import { bigint, doublePrecision, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uniqueIndex, uuid } from 'drizzle-orm/pg-core'
+import {
+  bigint,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  timestamp,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core'
 import { people } from './people.ts'
 
 const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 'string' })
-const key = () => uuid('id').primaryKey().default(sql`gen_random_uuid()`)
+const key = () =>
+  uuid('id')
+    .primaryKey()
+    .default(sql`gen_random_uuid()`)
 
 /** A stretch of text on a page: the words and left, top, right, bottom in points from the top-left corner as shown. */
 export type PlacedText = [text: string, left: number, top: number, right: number, bottom: number]
@@ -19,10 +34,7 @@ export const sheets = pgTable(
     createdAt: instant('created_at').notNull().defaultNow(),
     searchText: text('search_text').notNull().default(''),
   },
-  (table) => [
-    index('sheets_search').using('gin', sql`${table.searchText} gin_trgm_ops`),
-    index('sheets_title').on(table.title, table.id),
-  ],
+  (table) => [index('sheets_search').using('gin', sql`${table.searchText} gin_trgm_ops`), index('sheets_title').on(table.title, table.id)],
 )
 
 /** Each dated PDF of a sheet. The file is kept by its SHA-256 and never altered. */
@@ -30,7 +42,9 @@ export const sheetRevisions = pgTable(
   'sheet_revisions',
   {
     id: key(),
-    sheetId: uuid('sheet_id').notNull().references(() => sheets.id),
+    sheetId: uuid('sheet_id')
+      .notNull()
+      .references(() => sheets.id),
     sha256: text('sha256').notNull(),
     bytes: bigint('bytes', { mode: 'number' }).notNull(),
     fileName: text('file_name').notNull(),
@@ -53,7 +67,9 @@ export const sheetRevisions = pgTable(
 export const sheetPages = pgTable(
   'sheet_pages',
   {
-    revisionId: uuid('revision_id').notNull().references(() => sheetRevisions.id),
+    revisionId: uuid('revision_id')
+      .notNull()
+      .references(() => sheetRevisions.id),
     page: integer('page').notNull(),
     width: doublePrecision('width').notNull(),
     height: doublePrecision('height').notNull(),

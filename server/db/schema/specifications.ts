@@ -4,13 +4,18 @@ import { jobs } from './jobs.ts'
 import { people } from './people.ts'
 
 const instant = (name: string) => timestamp(name, { withTimezone: true, mode: 'string' })
-const key = () => uuid('id').primaryKey().default(sql`gen_random_uuid()`)
+const key = () =>
+  uuid('id')
+    .primaryKey()
+    .default(sql`gen_random_uuid()`)
 
 export const specifications = pgTable(
   'specifications',
   {
     id: key(),
-    jobId: uuid('job_id').notNull().references(() => jobs.id),
+    jobId: uuid('job_id')
+      .notNull()
+      .references(() => jobs.id),
     title: text('title').notNull(),
     /** `09 67 23` unless chosen otherwise. */
     sectionNumber: text('section_number').notNull(),
@@ -26,7 +31,9 @@ export const specificationIssues = pgTable(
   'specification_issues',
   {
     id: key(),
-    specificationId: uuid('specification_id').notNull().references(() => specifications.id),
+    specificationId: uuid('specification_id')
+      .notNull()
+      .references(() => specifications.id),
     number: integer('number').notNull(),
     issuedAt: instant('issued_at').notNull(),
     issuedBy: uuid('issued_by').references(() => people.id),

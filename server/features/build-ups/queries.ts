@@ -37,7 +37,10 @@ export async function readFactsFor(db: Reader, drafts: readonly Course[]): Promi
   return readFacts(db, { mixIds, productIds })
 }
 
-export async function readFacts(db: Reader, ids: { mixIds: string[]; productIds: string[] }): Promise<Pick<EvaluationInput, 'mixes' | 'products'>> {
+export async function readFacts(
+  db: Reader,
+  ids: { mixIds: string[]; productIds: string[] },
+): Promise<Pick<EvaluationInput, 'mixes' | 'products'>> {
   const mixes = await readMixFacts(db, [...new Set(ids.mixIds)])
   const products = await readProductFacts(db, [...new Set(ids.productIds)])
   return { mixes, products }
@@ -92,7 +95,11 @@ export async function readBuildUp(db: Reader, buildUpId: string, place: { number
   if (!summary) throw new AppError('not-found')
   const row = await readRow(db, eq(buildUpVersions.id, summary.id))
   const opened = {
-    ...summary, version: row.version, releaseReasons: row.releaseReasons ?? {}, input: await inputOfVersion(db, row, place.now), evaluation: row.frozenEvaluation,
+    ...summary,
+    version: row.version,
+    releaseReasons: row.releaseReasons ?? {},
+    input: await inputOfVersion(db, row, place.now),
+    evaluation: row.frozenEvaluation,
   }
   return { ...head, opened }
 }
@@ -113,8 +120,16 @@ export async function readVersion(db: Reader, versionId: string, now: number) {
   if (!found) return undefined
   const { version, number, name } = found
   return {
-    buildUpId: version.buildUpId, versionId, number, name, version: version.number, status: version.status, releasedAt: version.releasedAt,
-    releasedByName: version.releasedByName, releaseReasons: version.releaseReasons ?? {}, input: await inputOfVersion(db, version, now),
+    buildUpId: version.buildUpId,
+    versionId,
+    number,
+    name,
+    version: version.number,
+    status: version.status,
+    releasedAt: version.releasedAt,
+    releasedByName: version.releasedByName,
+    releaseReasons: version.releaseReasons ?? {},
+    input: await inputOfVersion(db, version, now),
     /** As reckoned at release; null for what was never released. */
     evaluation: version.frozenEvaluation,
   }
@@ -129,7 +144,10 @@ export async function readReleasedVersion(db: Reader, versionId: string, now: nu
   const found = await readVersion(db, versionId, now)
   const usable = found && (found.status === 'released' || found.status === 'superseded')
   if (!usable || !found.evaluation) {
-    throw new AppError('invalid', { message: 'Choose a released version of a build-up.', fields: { buildUpVersionId: 'This version is not released.' } })
+    throw new AppError('invalid', {
+      message: 'Choose a released version of a build-up.',
+      fields: { buildUpVersionId: 'This version is not released.' },
+    })
   }
   return { ...found, evaluation: found.evaluation }
 }
@@ -142,7 +160,12 @@ interface ListWanted {
   status?: BuildUpStatus | undefined
 }
 
-const sortColumns = { number: buildUps.number, name: sql`lower(${buildUps.name})`, status: buildUpVersions.status, updatedAt: buildUpVersions.updatedAt }
+const sortColumns = {
+  number: buildUps.number,
+  name: sql`lower(${buildUps.name})`,
+  status: buildUpVersions.status,
+  updatedAt: buildUpVersions.updatedAt,
+}
 
 /** A page of build-ups by their newest version, with the rows that the list is reckoned from. */
 export async function listNewest(db: Database, wanted: ListWanted) {
@@ -157,7 +180,11 @@ export async function listNewest(db: Database, wanted: ListWanted) {
   const order = wanted.sort.startsWith('-') ? desc(column) : asc(column)
   const joined = eq(buildUpVersions.buildUpId, buildUps.id)
   const rows = await db
-    .select({ buildUp: { id: buildUps.id, number: buildUps.number, name: buildUps.name }, version: buildUpVersions, updatedByName: people.name })
+    .select({
+      buildUp: { id: buildUps.id, number: buildUps.number, name: buildUps.name },
+      version: buildUpVersions,
+      updatedByName: people.name,
+    })
     .from(buildUps)
     .innerJoin(buildUpVersions, joined)
     .leftJoin(people, eq(people.id, buildUpVersions.updatedBy))
@@ -173,7 +200,8 @@ export async function listNewest(db: Database, wanted: ListWanted) {
 export async function readChoices(db: Reader, typed: string) {
   const q = typed.toLowerCase()
   const most = 200
-  const near = (text: typeof mixes.searchText | typeof products.searchText) => (q ? or(sql`${text} like ${containing(q)}`, sql`word_similarity(${q}, ${text}) >= 0.4`) : undefined)
+  const near = (text: typeof mixes.searchText | typeof products.searchText) =>
+    q ? or(sql`${text} like ${containing(q)}`, sql`word_similarity(${q}, ${text}) >= 0.4`) : undefined
   const found = await db
     .select({ id: mixes.id, name: mixes.name, maker: mixes.maker, chemistry: mixes.chemistry, color: mixes.color })
     .from(mixes)

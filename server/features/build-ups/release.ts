@@ -14,7 +14,8 @@ interface ReleaseWanted {
   now: number
 }
 
-const fieldsOf = (findings: readonly Finding[]) => Object.fromEntries(findings.map((finding) => [reasonKey(finding), `${finding.title}. ${finding.says}`]))
+const fieldsOf = (findings: readonly Finding[]) =>
+  Object.fromEntries(findings.map((finding) => [reasonKey(finding), `${finding.title}. ${finding.says}`]))
 
 /** Throws when a stop refuses the release, or a caution or unknown has no reason yet. */
 function refuseUnready(findings: readonly Finding[], reasons: Record<string, string>): void {

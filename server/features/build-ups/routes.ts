@@ -20,13 +20,17 @@ export function buildUpRoutes({ db, clock }: AppContext): Router {
   })
   serve(router, wire.addBuildUp, async ({ body, user }) => {
     const now = clock()
-    const { buildUpId } = await db.transaction((tx) => addBuildUp(tx, { name: body.name, work: workOfStages(body.stages) }, { by: user, now }))
+    const { buildUpId } = await db.transaction((tx) =>
+      addBuildUp(tx, { name: body.name, work: workOfStages(body.stages) }, { by: user, now }),
+    )
     return readBuildUp(db, buildUpId, { now })
   })
   serve(router, wire.readCourseFacts, ({ query }) => readFacts(db, { mixIds: query.mixes, productIds: query.products }))
   serve(router, wire.listChoices, ({ query }) => readChoices(db, query.q))
   serve(router, wire.readBuildUp, ({ params, query }) => readBuildUp(db, params.buildUpId, { number: query.version, now: clock() }))
-  serve(router, wire.renameBuildUp, ({ params, body, user }) => db.transaction((tx) => renameBuildUp(tx, params.buildUpId, { ...body, by: user })))
+  serve(router, wire.renameBuildUp, ({ params, body, user }) =>
+    db.transaction((tx) => renameBuildUp(tx, params.buildUpId, { ...body, by: user })),
+  )
   serve(router, wire.copyBuildUp, async ({ params, body, user }) => {
     const now = clock()
     const { buildUpId } = await db.transaction((tx) => copyBuildUp(tx, params.buildUpId, { ...body, by: user, now }))
@@ -39,7 +43,9 @@ export function buildUpRoutes({ db, clock }: AppContext): Router {
   })
   serve(router, wire.saveDraft, async ({ params, body, user }) => {
     const { version, courses, conditions } = body
-    const { input, ...saved } = await db.transaction((tx) => saveDraft(tx, { ...params, version }, { work: { courses, conditions }, by: user, now: clock() }))
+    const { input, ...saved } = await db.transaction((tx) =>
+      saveDraft(tx, { ...params, version }, { work: { courses, conditions }, by: user, now: clock() }),
+    )
     return { ...saved, findings: countFindings(evaluate(input).findings) }
   })
   serve(router, wire.releaseVersion, async ({ params, body, user }) => {

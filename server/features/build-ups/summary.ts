@@ -24,17 +24,33 @@ export async function summarise(db: Database, rows: readonly Newest[], now: numb
   const facts = await readFactsFor(db, [...courses.values()].flat())
   const { sheetAgeLimitYears } = await readFirm(db)
   const onDate = new Date(now).toISOString().slice(0, 10)
-  const released = await readReleased(db, rows.map(({ buildUp }) => buildUp.id))
+  const released = await readReleased(
+    db,
+    rows.map(({ buildUp }) => buildUp.id),
+  )
   const inputOf = ({ version }: Newest): EvaluationInput =>
-    version.frozenInput ?? { ...factsUsed(facts, courses.get(version.id) ?? []), courses: courses.get(version.id) ?? [], conditions: version.conditions, onDate, sheetAgeLimitYears }
+    version.frozenInput ?? {
+      ...factsUsed(facts, courses.get(version.id) ?? []),
+      courses: courses.get(version.id) ?? [],
+      conditions: version.conditions,
+      onDate,
+      sheetAgeLimitYears,
+    }
   return rows.map((row) => {
     const input = inputOf(row)
-    return { ...headOf(row), released: released.get(row.buildUp.id) ?? null, ...figuresOf(input, row.version.frozenEvaluation ?? evaluate(input)) }
+    return {
+      ...headOf(row),
+      released: released.get(row.buildUp.id) ?? null,
+      ...figuresOf(input, row.version.frozenEvaluation ?? evaluate(input)),
+    }
   })
 }
 
 function headOf({ buildUp, version, updatedByName }: Newest) {
-  return { ...buildUp, newest: { versionId: version.id, number: version.number, status: version.status, updatedAt: version.updatedAt, updatedByName } }
+  return {
+    ...buildUp,
+    newest: { versionId: version.id, number: version.number, status: version.status, updatedAt: version.updatedAt, updatedByName },
+  }
 }
 
 function figuresOf(input: EvaluationInput, evaluation: Evaluation) {
@@ -47,11 +63,20 @@ function figuresOf(input: EvaluationInput, evaluation: Evaluation) {
 }
 
 /** Of the page's facts, those that one build-up rests on. */
-function factsUsed(facts: Pick<EvaluationInput, 'mixes' | 'products'>, list: readonly Course[]): Pick<EvaluationInput, 'mixes' | 'products'> {
+function factsUsed(
+  facts: Pick<EvaluationInput, 'mixes' | 'products'>,
+  list: readonly Course[],
+): Pick<EvaluationInput, 'mixes' | 'products'> {
   const pick = <T>(from: Record<string, T>, ids: (string | null | undefined)[]) =>
     Object.fromEntries(ids.flatMap((id) => (id && from[id] !== undefined ? [[id, from[id]]] : []))) as Record<string, T>
   return {
-    mixes: pick(facts.mixes, list.map((course) => course.mixId)),
-    products: pick(facts.products, list.flatMap((course) => [course.filler?.productId, course.broadcast?.productId])),
+    mixes: pick(
+      facts.mixes,
+      list.map((course) => course.mixId),
+    ),
+    products: pick(
+      facts.products,
+      list.flatMap((course) => [course.filler?.productId, course.broadcast?.productId]),
+    ),
   }
 }

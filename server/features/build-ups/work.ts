@@ -16,9 +16,19 @@ export function workOfStages(stages: readonly Stage[]): Work {
 
 /** What changed between two lists of courses, course by course, for the trail. */
 export function differences(before: Work, after: Work) {
-  const changedIn = (list: readonly Course[], other: readonly Course[]) => list.filter((course) => !isDeepStrictEqual(course, other.find(({ id }) => id === course.id)))
+  const changedIn = (list: readonly Course[], other: readonly Course[]) =>
+    list.filter(
+      (course) =>
+        !isDeepStrictEqual(
+          course,
+          other.find(({ id }) => id === course.id),
+        ),
+    )
   const conditions = !isDeepStrictEqual(before.conditions, after.conditions)
-  const order = !isDeepStrictEqual(before.courses.map(({ id }) => id), after.courses.map(({ id }) => id))
+  const order = !isDeepStrictEqual(
+    before.courses.map(({ id }) => id),
+    after.courses.map(({ id }) => id),
+  )
   const side = (of: Work, other: Work) => ({
     courses: changedIn(of.courses, other.courses),
     ...(order ? { order: of.courses.map(({ id }) => id) } : {}),

@@ -18,16 +18,20 @@ async function keepSearchText(tx: Transaction, buildUpId: string): Promise<void>
     where c.version_id = (select v.id from build_up_versions v where v.build_up_id = ${buildUpId} order by v.number desc limit 1))`
   await tx
     .update(buildUps)
-    .set({ searchText: sql`lower(${buildUps.name} || ' bu-' || lpad(${buildUps.number}::text, 3, '0') || ' ' || coalesce(${mixName}, ''))` })
+    .set({
+      searchText: sql`lower(${buildUps.name} || ' bu-' || lpad(${buildUps.number}::text, 3, '0') || ' ' || coalesce(${mixName}, ''))`,
+    })
     .where(eq(buildUps.id, buildUpId))
 }
 
 async function writeCourses(tx: Transaction, versionId: string, list: readonly Course[]): Promise<void> {
   await tx.delete(courses).where(eq(courses.versionId, versionId))
   if (list.length === 0) return
-  await tx.insert(courses).values(
-    list.map((course, position) => ({ versionId, courseId: course.id, position, stage: course.stage, mixId: course.mixId, course })),
-  )
+  await tx
+    .insert(courses)
+    .values(
+      list.map((course, position) => ({ versionId, courseId: course.id, position, stage: course.stage, mixId: course.mixId, course })),
+    )
 }
 
 /** Refuses courses that name a mix or product that is not in the catalogue. */
@@ -62,12 +66,18 @@ async function addVersion(tx: Transaction, { buildUpId, number, work, by, now }:
 }
 
 /** Makes a build-up with its first draft. `by` null: the system itself. */
-export async function addBuildUp(tx: Transaction, { name, work }: { name: string; work: Work }, who: { by: User | null; now: number; copiedFrom?: string }) {
+export async function addBuildUp(
+  tx: Transaction,
+  { name, work }: { name: string; work: Work },
+  who: { by: User | null; now: number; copiedFrom?: string },
+) {
   const [row] = await tx.insert(buildUps).values({ name }).returning({ id: buildUps.id, number: buildUps.number })
   if (!row) throw new AppError('unavailable')
   const versionId = await addVersion(tx, { buildUpId: row.id, number: 1, work, ...who })
   await recordChange(tx, {
-    personId: who.by?.id ?? null, action: 'added', subject: { kind: 'build-up', id: row.id },
+    personId: who.by?.id ?? null,
+    action: 'added',
+    subject: { kind: 'build-up', id: row.id },
     to: { name, number: label(row.number), courses: work.courses.length, ...(who.copiedFrom ? { copiedFrom: who.copiedFrom } : {}) },
   })
   return { buildUpId: row.id, versionId }
@@ -78,9 +88,18 @@ export async function renameBuildUp(tx: Transaction, buildUpId: string, change: 
   if (!before) throw new AppError('not-found')
   if (before.version !== change.version) throw new AppError('conflict')
   const to = { name: change.name, note: change.note }
-  await tx.update(buildUps).set({ ...to, version: before.version + 1 }).where(eq(buildUps.id, buildUpId))
+  await tx
+    .update(buildUps)
+    .set({ ...to, version: before.version + 1 })
+    .where(eq(buildUps.id, buildUpId))
   await keepSearchText(tx, buildUpId)
-  await recordChange(tx, { personId: change.by.id, action: 'renamed', subject: { kind: 'build-up', id: buildUpId }, from: { name: before.name, note: before.note }, to })
+  await recordChange(tx, {
+    personId: change.by.id,
+    action: 'renamed',
+    subject: { kind: 'build-up', id: buildUpId },
+    from: { name: before.name, note: before.note },
+    to,
+  })
   return { ...to, version: before.version + 1 }
 }
 
@@ -88,11 +107,19 @@ export async function renameBuildUp(tx: Transaction, buildUpId: string, change: 
 export async function copyBuildUp(tx: Transaction, buildUpId: string, wanted: { name: string; number: number; by: User; now: number }) {
   const source = await readRow(tx, and(eq(buildUpVersions.buildUpId, buildUpId), eq(buildUpVersions.number, wanted.number)))
   const work = source.frozenInput ?? (await readWork(tx, source))
-  return addBuildUp(tx, { name: wanted.name, work: { courses: work.courses, conditions: work.conditions } }, { by: wanted.by, now: wanted.now, copiedFrom: source.id })
+  return addBuildUp(
+    tx,
+    { name: wanted.name, work: { courses: work.courses, conditions: work.conditions } },
+    { by: wanted.by, now: wanted.now, copiedFrom: source.id },
+  )
 }
 
 /** Begins a draft from a version, or from unsaved work that began on it. Returns its number. */
-export async function addDraft(tx: Transaction, buildUpId: string, wanted: { from: number; work?: Work | undefined; by: User; now: number }): Promise<number> {
+export async function addDraft(
+  tx: Transaction,
+  buildUpId: string,
+  wanted: { from: number; work?: Work | undefined; by: User; now: number },
+): Promise<number> {
   await tx.select({ id: buildUps.id }).from(buildUps).where(eq(buildUps.id, buildUpId)).for('update')
   const { versions } = await readHead(tx, buildUpId)
   const source = versions.find((version) => version.number === wanted.from)
@@ -101,7 +128,12 @@ export async function addDraft(tx: Transaction, buildUpId: string, wanted: { fro
   if (wanted.work) refuseUnknown(work.courses, await readFactsFor(tx, work.courses))
   const number = (versions[0]?.number ?? 0) + 1
   const versionId = await addVersion(tx, { buildUpId, number, work, by: wanted.by, now: wanted.now })
-  await recordChange(tx, { personId: wanted.by.id, action: 'drafted', subject: { kind: 'build-up', id: buildUpId }, to: { version: number, versionId, from: wanted.from } })
+  await recordChange(tx, {
+    personId: wanted.by.id,
+    action: 'drafted',
+    subject: { kind: 'build-up', id: buildUpId },
+    to: { version: number, versionId, from: wanted.from },
+  })
   return number
 }
 
@@ -136,13 +168,25 @@ export async function saveDraft(tx: Transaction, place: VersionPlace, { work, by
   await keepSearchText(tx, place.buildUpId)
   const updatedAt = new Date(now).toISOString()
   const version = row.version + 1
-  await tx.update(buildUpVersions).set({ conditions: work.conditions, version, updatedAt, updatedBy: by.id }).where(eq(buildUpVersions.id, row.id))
-  await recordChange(tx, { personId: by.id, action: 'saved', subject: { kind: 'build-up-version', id: row.id }, ...differences(before, work) })
+  await tx
+    .update(buildUpVersions)
+    .set({ conditions: work.conditions, version, updatedAt, updatedBy: by.id })
+    .where(eq(buildUpVersions.id, row.id))
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'saved',
+    subject: { kind: 'build-up-version', id: row.id },
+    ...differences(before, work),
+  })
   return { version, updatedAt, updatedByName: by.name, input }
 }
 
 /** Takes a draft with what it is reckoned from at this moment, for release. */
-export async function takeForRelease(tx: Transaction, place: VersionPlace, now: number): Promise<{ row: VersionRow; input: EvaluationInput }> {
+export async function takeForRelease(
+  tx: Transaction,
+  place: VersionPlace,
+  now: number,
+): Promise<{ row: VersionRow; input: EvaluationInput }> {
   const row = await takeVersion(tx, place)
   if (row.status !== 'draft') throw new AppError('conflict', { message: 'This version is no longer a draft.' })
   return { row, input: await inputOf(tx, await readWork(tx, row), now) }
@@ -167,19 +211,43 @@ export async function keepRelease(tx: Transaction, row: VersionRow, { input, eva
   await tx
     .update(buildUpVersions)
     .set({
-      status: 'released', version: row.version + 1, updatedAt: at, updatedBy: by.id, releasedAt: at, releasedBy: by.id, releasedByName: by.name,
-      releaseReasons: reasons, frozenInput: input, frozenEvaluation: evaluation,
+      status: 'released',
+      version: row.version + 1,
+      updatedAt: at,
+      updatedBy: by.id,
+      releasedAt: at,
+      releasedBy: by.id,
+      releasedByName: by.name,
+      releaseReasons: reasons,
+      frozenInput: input,
+      frozenEvaluation: evaluation,
     })
     .where(eq(buildUpVersions.id, row.id))
   const subject = (id: string) => ({ kind: 'build-up-version', id })
-  await recordChange(tx, { personId: by.id, action: 'released', subject: subject(row.id), from: { status: row.status }, to: { status: 'released', number: row.number, reasons } })
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'released',
+    subject: subject(row.id),
+    from: { status: row.status },
+    to: { status: 'released', number: row.number, reasons },
+  })
   for (const one of earlier) {
-    await recordChange(tx, { personId: by.id, action: 'superseded', subject: subject(one.id), from: { status: 'released' }, to: { status: 'superseded', by: row.number } })
+    await recordChange(tx, {
+      personId: by.id,
+      action: 'superseded',
+      subject: subject(one.id),
+      from: { status: 'released' },
+      to: { status: 'superseded', by: row.number },
+    })
   }
 }
 
 /** Takes a version out of use. Its facts stay; jobs that are laid by it keep it. */
-export async function withdrawVersion(tx: Transaction, place: VersionPlace, who: { by: User; mayRelease: boolean; now: number }): Promise<void> {
+export async function withdrawVersion(
+  tx: Transaction,
+  place: VersionPlace,
+  who: { by: User; mayRelease: boolean; now: number },
+): Promise<void> {
   const row = await takeVersion(tx, place)
   if (row.status !== 'draft' && !who.mayRelease) throw new AppError('forbidden')
   if (row.status === 'withdrawn') throw new AppError('conflict', { message: 'This version is already withdrawn.' })
@@ -188,6 +256,10 @@ export async function withdrawVersion(tx: Transaction, place: VersionPlace, who:
     .set({ status: 'withdrawn', version: row.version + 1, updatedAt: new Date(who.now).toISOString(), updatedBy: who.by.id })
     .where(eq(buildUpVersions.id, row.id))
   await recordChange(tx, {
-    personId: who.by.id, action: 'withdrawn', subject: { kind: 'build-up-version', id: row.id }, from: { status: row.status }, to: { status: 'withdrawn' },
+    personId: who.by.id,
+    action: 'withdrawn',
+    subject: { kind: 'build-up-version', id: row.id },
+    from: { status: row.status },
+    to: { status: 'withdrawn' },
   })
 }

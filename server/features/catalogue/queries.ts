@@ -20,10 +20,13 @@ const grouped = <T>(rows: { key: string; item: T }[]) => {
   return groups
 }
 
-const valueColumns = {
-  value: propertyValues, sheetId: sheets.id, sheetTitle: sheets.title, revisionDate: sheetRevisions.revisionDate,
+const valueColumns = { value: propertyValues, sheetId: sheets.id, sheetTitle: sheets.title, revisionDate: sheetRevisions.revisionDate }
+type ValueRow = {
+  value: typeof propertyValues.$inferSelect
+  sheetId: string | null
+  sheetTitle: string | null
+  revisionDate: string | null
 }
-type ValueRow = { value: typeof propertyValues.$inferSelect; sheetId: string | null; sheetTitle: string | null; revisionDate: string | null }
 
 /** A row of the table as a fact with its citation. */
 function factOfRow({ value: row, sheetId, sheetTitle, revisionDate }: ValueRow): Fact {
@@ -31,8 +34,17 @@ function factOfRow({ value: row, sheetId, sheetTitle, revisionDate }: ValueRow):
   const origin: Fact['origin'] =
     row.kind === 'stated' && row.revisionId && sheetId
       ? {
-          kind: 'stated', ...person,
-          citation: { sheetId, revisionId: row.revisionId, sheetTitle: sheetTitle ?? '', revisionDate, page: row.page ?? 1, box: row.box, quote: row.quote },
+          kind: 'stated',
+          ...person,
+          citation: {
+            sheetId,
+            revisionId: row.revisionId,
+            sheetTitle: sheetTitle ?? '',
+            revisionDate,
+            page: row.page ?? 1,
+            box: row.box,
+            quote: row.quote,
+          },
         }
       : { kind: 'entered', reason: row.reason ?? '', ...person }
   return {
@@ -54,7 +66,10 @@ const inOrder = (rows: ValueRow[]) => rows.map(factOfRow).sort((a, b) => (rank.g
 
 /** Live facts of products and mixes, by their ids. */
 export async function readFactsOf(db: Reader, { productIds, mixIds }: Subjects): Promise<Map<string, Fact[]>> {
-  const wanted = [...(productIds.length > 0 ? [inArray(propertyValues.productId, productIds)] : []), ...(mixIds.length > 0 ? [inArray(propertyValues.mixId, mixIds)] : [])]
+  const wanted = [
+    ...(productIds.length > 0 ? [inArray(propertyValues.productId, productIds)] : []),
+    ...(mixIds.length > 0 ? [inArray(propertyValues.mixId, mixIds)] : []),
+  ]
   if (wanted.length === 0) return new Map()
   const rows = await db
     .select(valueColumns)
@@ -69,12 +84,21 @@ export async function readFactsOf(db: Reader, { productIds, mixIds }: Subjects):
 
 /** The sheets of products and mixes at the revision in force, by the ids of what they speak of. */
 export async function readSheetsOf(db: Reader, { productIds, mixIds }: Subjects): Promise<Map<string, SheetSummary[]>> {
-  const wanted = [...(productIds.length > 0 ? [inArray(sheetSubjects.productId, productIds)] : []), ...(mixIds.length > 0 ? [inArray(sheetSubjects.mixId, mixIds)] : [])]
+  const wanted = [
+    ...(productIds.length > 0 ? [inArray(sheetSubjects.productId, productIds)] : []),
+    ...(mixIds.length > 0 ? [inArray(sheetSubjects.mixId, mixIds)] : []),
+  ]
   if (wanted.length === 0) return new Map()
   const rows = await db
     .select({
-      productId: sheetSubjects.productId, mixId: sheetSubjects.mixId, id: sheets.id, kind: sheets.kind, title: sheets.title,
-      revisionId: sheetRevisions.id, revisionDate: sheetRevisions.revisionDate, pages: sheetRevisions.pages,
+      productId: sheetSubjects.productId,
+      mixId: sheetSubjects.mixId,
+      id: sheets.id,
+      kind: sheets.kind,
+      title: sheets.title,
+      revisionId: sheetRevisions.id,
+      revisionDate: sheetRevisions.revisionDate,
+      pages: sheetRevisions.pages,
     })
     .from(sheetSubjects)
     .innerJoin(sheets, eq(sheets.id, sheetSubjects.sheetId))
@@ -90,7 +114,14 @@ export async function readSheetsOf(db: Reader, { productIds, mixIds }: Subjects)
   return grouped(rows.map(({ productId, mixId, ...sheet }) => ({ key: productId ?? mixId ?? '', item: { ...sheet, superseded: false } })))
 }
 
-const productColumns = { id: products.id, name: products.name, maker: products.maker, kind: products.kind, chemistry: products.chemistry, status: products.status }
+const productColumns = {
+  id: products.id,
+  name: products.name,
+  maker: products.maker,
+  kind: products.kind,
+  chemistry: products.chemistry,
+  status: products.status,
+}
 
 /** Products with what is known of them, by id; those that are not there are left out. */
 export async function readProductFacts(db: Reader, ids: string[]): Promise<Record<string, ProductFacts>> {
@@ -115,7 +146,8 @@ export async function readMixFacts(db: Reader, ids: string[]): Promise<Record<st
     .from(mixes)
     .where(inArray(mixes.id, ids))
   const found = { productIds: [], mixIds: rows.map(({ id }) => id) }
-  const parts = found.mixIds.length > 0 ? await db.select().from(mixParts).where(inArray(mixParts.mixId, found.mixIds)).orderBy(asc(mixParts.part)) : []
+  const parts =
+    found.mixIds.length > 0 ? await db.select().from(mixParts).where(inArray(mixParts.mixId, found.mixIds)).orderBy(asc(mixParts.part)) : []
   const productFacts = await readProductFacts(db, [...new Set(parts.map(({ productId }) => productId))])
   const facts = await readFactsOf(db, found)
   const sheetsOf = await readSheetsOf(db, found)
@@ -125,10 +157,12 @@ export async function readMixFacts(db: Reader, ids: string[]): Promise<Record<st
       {
         ...row,
         chemistry: row.chemistry as MixFacts['chemistry'],
-        parts: parts.filter(({ mixId }) => mixId === row.id).flatMap(({ part, productId }) => {
-          const product = productFacts[productId]
-          return product ? [{ part, product }] : []
-        }),
+        parts: parts
+          .filter(({ mixId }) => mixId === row.id)
+          .flatMap(({ part, productId }) => {
+            const product = productFacts[productId]
+            return product ? [{ part, product }] : []
+          }),
         facts: facts.get(row.id) ?? [],
         sheets: sheetsOf.get(row.id) ?? [],
       },

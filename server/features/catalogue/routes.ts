@@ -23,20 +23,43 @@ export function catalogueRoutes({ db }: AppContext): Router {
   serve(router, wire.exportProducts, async ({ query, http }) => {
     const rows = await allProducts(db, query)
     const heading = ['id', 'name', 'maker', 'kind', 'chemistry', 'standing', 'values', 'sheets', 'changed']
-    sendCsv(http.response, 'products.csv', csvOf(heading, rows.map((row) => [row.id, row.name, row.maker, row.kind, row.chemistry, row.status, row.facts, row.sheets, row.updatedAt])))
+    sendCsv(
+      http.response,
+      'products.csv',
+      csvOf(
+        heading,
+        rows.map((row) => [row.id, row.name, row.maker, row.kind, row.chemistry, row.status, row.facts, row.sheets, row.updatedAt]),
+      ),
+    )
   })
-  serve(router, wire.addProduct, async ({ body, user }) => readProduct(db, await db.transaction((tx) => addProduct(tx, body, writer(user)))))
+  serve(router, wire.addProduct, async ({ body, user }) =>
+    readProduct(db, await db.transaction((tx) => addProduct(tx, body, writer(user)))),
+  )
   serve(router, wire.readProduct, ({ params }) => readProduct(db, params.productId))
   serve(router, wire.changeProduct, async ({ params, body, user }) => {
     await db.transaction((tx) => changeProduct(tx, params.productId, { ...body, by: writer(user) }))
     return readProduct(db, params.productId)
   })
-  serve(router, wire.addProductFact, ({ params, body, user }) => db.transaction((tx) => addFact(tx, ofProduct(params.productId), { body, by: writer(user) })))
+  serve(router, wire.addProductFact, ({ params, body, user }) =>
+    db.transaction((tx) => addFact(tx, ofProduct(params.productId), { body, by: writer(user) })),
+  )
   serve(router, wire.listMixes, ({ query }) => listMixes(db, query))
   serve(router, wire.exportMixes, async ({ query, http }) => {
     const rows = await allMixes(db, query)
     const heading = ['id', 'name', 'maker', 'chemistry', 'part A', 'part B', 'part C', 'standing', 'values', 'sheets', 'changed']
-    const cells = ({ parts: [a, b, c], ...row }: (typeof rows)[number]) => [row.id, row.name, row.maker, row.chemistry, a ?? '', b ?? '', c ?? '', row.status, row.facts, row.sheets, row.updatedAt]
+    const cells = ({ parts: [a, b, c], ...row }: (typeof rows)[number]) => [
+      row.id,
+      row.name,
+      row.maker,
+      row.chemistry,
+      a ?? '',
+      b ?? '',
+      c ?? '',
+      row.status,
+      row.facts,
+      row.sheets,
+      row.updatedAt,
+    ]
     sendCsv(http.response, 'mixes.csv', csvOf(heading, rows.map(cells)))
   })
   serve(router, wire.addMix, async ({ body, user }) => readMix(db, await db.transaction((tx) => addMix(tx, body, writer(user)))))
@@ -45,8 +68,12 @@ export function catalogueRoutes({ db }: AppContext): Router {
     await db.transaction((tx) => changeMix(tx, params.mixId, { ...body, by: writer(user) }))
     return readMix(db, params.mixId)
   })
-  serve(router, wire.addMixFact, ({ params, body, user }) => db.transaction((tx) => addFact(tx, ofMix(params.mixId), { body, by: writer(user) })))
-  serve(router, wire.amendFact, ({ params, body, user }) => db.transaction((tx) => amendFact(tx, params.factId, { body, by: writer(user) })))
+  serve(router, wire.addMixFact, ({ params, body, user }) =>
+    db.transaction((tx) => addFact(tx, ofMix(params.mixId), { body, by: writer(user) })),
+  )
+  serve(router, wire.amendFact, ({ params, body, user }) =>
+    db.transaction((tx) => amendFact(tx, params.factId, { body, by: writer(user) })),
+  )
   serve(router, wire.endFact, ({ params, user }) => db.transaction((tx) => endFact(tx, params.factId, writer(user))))
   serve(router, wire.listMakers, async () => ({ items: await listMakers(db) }))
 

@@ -15,8 +15,12 @@ const mixText = sql`lower(concat_ws(' ', mixes.name, mixes.maker, mixes.chemistr
 
 /** Brings the text that a product is searched by up to date, and that of the mixes it is part of. */
 export async function keepProductSearchText(tx: Transaction, productId: string): Promise<void> {
-  await tx.execute(sql`update products set search_text = lower(concat_ws(' ', name, maker, kind, chemistry, ${wordsOf(sql`v.product_id = products.id`)})) where id = ${productId}`)
-  await tx.execute(sql`update mixes set search_text = ${mixText} where id in (select mix_id from mix_parts where product_id = ${productId})`)
+  await tx.execute(
+    sql`update products set search_text = lower(concat_ws(' ', name, maker, kind, chemistry, ${wordsOf(sql`v.product_id = products.id`)})) where id = ${productId}`,
+  )
+  await tx.execute(
+    sql`update mixes set search_text = ${mixText} where id in (select mix_id from mix_parts where product_id = ${productId})`,
+  )
 }
 
 /** Brings the text that a mix is searched by up to date. */

@@ -6,8 +6,12 @@ type Use = MixRecord['usedIn'][number]
 
 /** Where a product or a mix is used: mixes it is part of, build-up versions that lay it, jobs done by those and their specifications. */
 export async function readUses(db: Database, { productId, mixId }: { productId?: string; mixId?: string }): Promise<Use[]> {
-  const mixesOf = productId ? sql`select m.id, m.name from mixes m join mix_parts p on p.mix_id = m.id where p.product_id = ${productId}` : sql`select id, name from mixes where id = ${mixId}`
-  const bySand = productId ? sql`or c.course->'filler'->>'productId' = ${productId} or c.course->'broadcast'->>'productId' = ${productId}` : sql``
+  const mixesOf = productId
+    ? sql`select m.id, m.name from mixes m join mix_parts p on p.mix_id = m.id where p.product_id = ${productId}`
+    : sql`select id, name from mixes where id = ${mixId}`
+  const bySand = productId
+    ? sql`or c.course->'filler'->>'productId' = ${productId} or c.course->'broadcast'->>'productId' = ${productId}`
+    : sql``
   const { rows } = await db.execute<{ kind: Use['kind']; id: string; name: string; version: number | null }>(sql`
     with used_mixes as (${mixesOf}),
     versions as (

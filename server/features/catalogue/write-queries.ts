@@ -13,7 +13,10 @@ import { readUses } from './use-queries.ts'
 
 /** @throws AppError `not-found` */
 export async function readProduct(db: Database, id: string): Promise<ProductRecord> {
-  const [row] = await db.select({ note: products.note, version: products.version, updatedAt: products.updatedAt }).from(products).where(eq(products.id, id))
+  const [row] = await db
+    .select({ note: products.note, version: products.version, updatedAt: products.updatedAt })
+    .from(products)
+    .where(eq(products.id, id))
   const facts = (await readProductFacts(db, [id]))[id]
   if (!row || !facts) throw new AppError('not-found')
   return { ...facts, ...row, updatedAt: new Date(row.updatedAt).toISOString(), usedIn: await readUses(db, { productId: id }) }
@@ -21,17 +24,32 @@ export async function readProduct(db: Database, id: string): Promise<ProductReco
 
 /** @throws AppError `not-found` */
 export async function readMix(db: Database, id: string): Promise<MixRecord> {
-  const [row] = await db.select({ note: mixes.note, version: mixes.version, updatedAt: mixes.updatedAt }).from(mixes).where(eq(mixes.id, id))
+  const [row] = await db
+    .select({ note: mixes.note, version: mixes.version, updatedAt: mixes.updatedAt })
+    .from(mixes)
+    .where(eq(mixes.id, id))
   const facts = (await readMixFacts(db, [id]))[id]
   if (!row || !facts) throw new AppError('not-found')
   return { ...facts, ...row, updatedAt: new Date(row.updatedAt).toISOString(), usedIn: await readUses(db, { mixId: id }) }
 }
 
-const taken = () => new AppError('duplicate', { message: 'This maker already has one of this name.', fields: { name: 'This maker already has one of this name.' } })
+const taken = () =>
+  new AppError('duplicate', {
+    message: 'This maker already has one of this name.',
+    fields: { name: 'This maker already has one of this name.' },
+  })
 
-async function refuseTaken(tx: Transaction, table: typeof products | typeof mixes, { name, maker, except }: { name: string; maker: string; except?: string }): Promise<void> {
+async function refuseTaken(
+  tx: Transaction,
+  table: typeof products | typeof mixes,
+  { name, maker, except }: { name: string; maker: string; except?: string },
+): Promise<void> {
   const sameName = and(sql`lower(${table.name}) = lower(${name})`, sql`lower(${table.maker}) = lower(${maker})`)
-  const rows = await tx.select({ id: table.id }).from(table).where(and(sameName, except ? ne(table.id, except) : undefined)).limit(1)
+  const rows = await tx
+    .select({ id: table.id })
+    .from(table)
+    .where(and(sameName, except ? ne(table.id, except) : undefined))
+    .limit(1)
   if (rows.length > 0) throw taken()
 }
 
@@ -47,7 +65,12 @@ async function unlessTaken<T>(write: PromiseLike<T>): Promise<T> {
 
 export async function addProduct(tx: Transaction, body: z.output<typeof wire.addProduct.body>, by: Writer): Promise<string> {
   await refuseTaken(tx, products, body)
-  const [row] = await unlessTaken(tx.insert(products).values({ ...body, searchText: '' }).returning({ id: products.id }))
+  const [row] = await unlessTaken(
+    tx
+      .insert(products)
+      .values({ ...body, searchText: '' })
+      .returning({ id: products.id }),
+  )
   if (!row) throw new AppError('unavailable')
   await keepProductSearchText(tx, row.id)
   await recordChange(tx, { personId: by.id, action: 'added', subject: { kind: 'product', id: row.id }, to: body })
@@ -67,14 +90,23 @@ function actionOf(to: { status?: string | undefined }): string {
 }
 
 /** @throws AppError `not-found`, `conflict` when someone has changed it since, `duplicate` */
-export async function changeProduct(tx: Transaction, id: string, { by, version, ...body }: z.output<typeof wire.changeProduct.body> & { by: Writer }): Promise<void> {
+export async function changeProduct(
+  tx: Transaction,
+  id: string,
+  { by, version, ...body }: z.output<typeof wire.changeProduct.body> & { by: Writer },
+): Promise<void> {
   const [before] = await tx.select().from(products).where(eq(products.id, id)).for('update')
   if (!before) throw new AppError('not-found')
   if (before.version !== version) throw new AppError('conflict')
   const { to, from } = changesOf(body, before)
   if (Object.keys(to).length === 0) return
   await refuseTaken(tx, products, { name: body.name ?? before.name, maker: body.maker ?? before.maker, except: id })
-  await unlessTaken(tx.update(products).set({ ...to, version: version + 1, updatedAt: sql`now()` }).where(eq(products.id, id)))
+  await unlessTaken(
+    tx
+      .update(products)
+      .set({ ...to, version: version + 1, updatedAt: sql`now()` })
+      .where(eq(products.id, id)),
+  )
   await keepProductSearchText(tx, id)
   await recordChange(tx, { personId: by.id, action: actionOf(to), subject: { kind: 'product', id }, from, to })
 }
@@ -84,12 +116,17 @@ type Parts = z.output<typeof wire.addMix.body>['parts']
 /** Parts must be in the catalogue; what is withdrawn stays where it is but is not newly chosen. */
 async function keepParts(tx: Transaction, mixId: string, { parts, before }: { parts: Parts; before: Parts }): Promise<void> {
   const ids = parts.map(({ productId }) => productId)
-  const found = new Map((await tx.select({ id: products.id, status: products.status }).from(products).where(inArray(products.id, ids))).map(({ id, status }) => [id, status]))
+  const found = new Map(
+    (await tx.select({ id: products.id, status: products.status }).from(products).where(inArray(products.id, ids))).map(
+      ({ id, status }) => [id, status],
+    ),
+  )
   const fields: Record<string, string> = {}
   for (const [index, { productId }] of parts.entries()) {
     const field = `parts.${index}.productId`
     if (!found.has(productId)) fields[field] = 'This product is not in the catalogue.'
-    else if (found.get(productId) === 'withdrawn' && !before.some((part) => part.productId === productId)) fields[field] = 'This product is withdrawn. Choose another.'
+    else if (found.get(productId) === 'withdrawn' && !before.some((part) => part.productId === productId))
+      fields[field] = 'This product is withdrawn. Choose another.'
   }
   if (Object.keys(fields).length > 0) throw new AppError('invalid', { fields })
   await tx.delete(mixParts).where(eq(mixParts.mixId, mixId))
@@ -98,7 +135,12 @@ async function keepParts(tx: Transaction, mixId: string, { parts, before }: { pa
 
 export async function addMix(tx: Transaction, { ratio, parts, ...body }: z.output<typeof wire.addMix.body>, by: Writer): Promise<string> {
   await refuseTaken(tx, mixes, body)
-  const [row] = await unlessTaken(tx.insert(mixes).values({ ...body, searchText: '' }).returning({ id: mixes.id }))
+  const [row] = await unlessTaken(
+    tx
+      .insert(mixes)
+      .values({ ...body, searchText: '' })
+      .returning({ id: mixes.id }),
+  )
   if (!row) throw new AppError('unavailable')
   await keepParts(tx, row.id, { parts, before: [] })
   await keepMixSearchText(tx, row.id)
@@ -111,20 +153,39 @@ export async function addMix(tx: Transaction, { ratio, parts, ...body }: z.outpu
 }
 
 /** @throws AppError `not-found`, `conflict` when someone has changed it since, `duplicate` */
-export async function changeMix(tx: Transaction, id: string, { by, version, parts, ...body }: z.output<typeof wire.changeMix.body> & { by: Writer }): Promise<void> {
+export async function changeMix(
+  tx: Transaction,
+  id: string,
+  { by, version, parts, ...body }: z.output<typeof wire.changeMix.body> & { by: Writer },
+): Promise<void> {
   const [before] = await tx.select().from(mixes).where(eq(mixes.id, id)).for('update')
   if (!before) throw new AppError('not-found')
   if (before.version !== version) throw new AppError('conflict')
-  const partsBefore = await tx.select({ part: mixParts.part, productId: mixParts.productId }).from(mixParts).where(eq(mixParts.mixId, id)).orderBy(asc(mixParts.part))
+  const partsBefore = await tx
+    .select({ part: mixParts.part, productId: mixParts.productId })
+    .from(mixParts)
+    .where(eq(mixParts.mixId, id))
+    .orderBy(asc(mixParts.part))
   const { to, from } = changesOf(body, before)
-  const changed = parts && JSON.stringify(parts.map(({ productId }) => productId)) !== JSON.stringify(partsBefore.map(({ productId }) => productId)) ? parts : undefined
+  const changed =
+    parts && JSON.stringify(parts.map(({ productId }) => productId)) !== JSON.stringify(partsBefore.map(({ productId }) => productId))
+      ? parts
+      : undefined
   if (Object.keys(to).length === 0 && !changed) return
   await refuseTaken(tx, mixes, { name: body.name ?? before.name, maker: body.maker ?? before.maker, except: id })
-  await unlessTaken(tx.update(mixes).set({ ...to, version: version + 1, updatedAt: sql`now()` }).where(eq(mixes.id, id)))
+  await unlessTaken(
+    tx
+      .update(mixes)
+      .set({ ...to, version: version + 1, updatedAt: sql`now()` })
+      .where(eq(mixes.id, id)),
+  )
   if (changed) await keepParts(tx, id, { parts: changed, before: partsBefore })
   await recordChange(tx, {
-    personId: by.id, action: actionOf(to), subject: { kind: 'mix', id },
-    from: { ...from, ...(changed ? { parts: partsBefore } : {}) }, to: { ...to, ...(changed ? { parts: changed } : {}) },
+    personId: by.id,
+    action: actionOf(to),
+    subject: { kind: 'mix', id },
+    from: { ...from, ...(changed ? { parts: partsBefore } : {}) },
+    to: { ...to, ...(changed ? { parts: changed } : {}) },
   })
   if (changed && changed.length !== partsBefore.length) await endFactsOfLostParts(tx, id, { parts: changed.length, by })
   await keepMixSearchText(tx, id)

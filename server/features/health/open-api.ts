@@ -10,7 +10,9 @@ const schemaOf = (schema: z.ZodType, io: 'input' | 'output') => {
 }
 
 const failures = Object.fromEntries(
-  [...new Set(Object.values(errorCodes).map(({ status }) => status))].sort().map((status) => [String(status), { $ref: '#/components/responses/error' }]),
+  [...new Set(Object.values(errorCodes).map(({ status }) => status))]
+    .sort()
+    .map((status) => [String(status), { $ref: '#/components/responses/error' }]),
 )
 
 /** The roles that may call an endpoint; anyone signed in unless an action is named. */
@@ -21,7 +23,10 @@ function rolesFor(access: Endpoint['access']) {
 function parametersOf({ params, query }: Endpoint) {
   const list = (schema: z.ZodObject | undefined, place: 'path' | 'query') =>
     Object.entries(schema?.shape ?? {}).map(([name, part]) => ({
-      name, in: place, required: place === 'path' || !(part as z.ZodType).safeParse(undefined).success, schema: schemaOf(part as z.ZodType, 'input'),
+      name,
+      in: place,
+      required: place === 'path' || !(part as z.ZodType).safeParse(undefined).success,
+      schema: schemaOf(part as z.ZodType, 'input'),
     }))
   return [...list(params, 'path'), ...list(query, 'query')]
 }
@@ -30,14 +35,19 @@ function requestBodyOf({ body }: Endpoint) {
   if (!body) return {}
   const content =
     body === 'files'
-      ? { 'multipart/form-data': { schema: { type: 'object', properties: { files: { type: 'array', items: { type: 'string', format: 'binary' } } } } } }
+      ? {
+          'multipart/form-data': {
+            schema: { type: 'object', properties: { files: { type: 'array', items: { type: 'string', format: 'binary' } } } },
+          },
+        }
       : { 'application/json': { schema: schemaOf(body, 'input') } }
   return { requestBody: { required: true, content } }
 }
 
 function responseOf({ response }: Endpoint) {
   if (response === 'nothing') return { description: 'Done.' }
-  if ('file' in response) return { description: 'The file.', content: { [response.file]: { schema: { type: 'string', format: 'binary' } } } }
+  if ('file' in response)
+    return { description: 'The file.', content: { [response.file]: { schema: { type: 'string', format: 'binary' } } } }
   return { description: 'Done.', content: { 'application/json': { schema: schemaOf(response, 'output') } } }
 }
 
@@ -67,7 +77,9 @@ export function openApiDocument(): Record<string, unknown> {
     'x-actions': actions,
     components: {
       securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'wearcourse' } },
-      responses: { error: { description: 'What went wrong.', content: { 'application/json': { schema: schemaOf(errorBodySchema, 'output') } } } },
+      responses: {
+        error: { description: 'What went wrong.', content: { 'application/json': { schema: schemaOf(errorBodySchema, 'output') } } },
+      },
     },
   }
 }

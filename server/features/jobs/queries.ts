@@ -13,7 +13,13 @@ import { readVersion } from '../build-ups/queries.ts'
 
 type Reader = Database | Transaction
 
-const sortColumns = { number: jobs.number, name: jobs.name, client: jobs.client, startsAt: jobs.startsAt, updatedAt: jobs.updatedAt } as const
+const sortColumns = {
+  number: jobs.number,
+  name: jobs.name,
+  client: jobs.client,
+  startsAt: jobs.startsAt,
+  updatedAt: jobs.updatedAt,
+} as const
 
 interface JobsWanted {
   q: string
@@ -39,9 +45,19 @@ export async function listJobs(db: Database, { q, sort, limit, cursor, status, o
   const [rows, [counted]] = await Promise.all([
     db
       .select({
-        id: jobs.id, number: jobs.number, name: jobs.name, client: jobs.client, site: jobs.site, status: jobs.status, startsAt: jobs.startsAt, updatedAt: jobs.updatedAt,
+        id: jobs.id,
+        number: jobs.number,
+        name: jobs.name,
+        client: jobs.client,
+        site: jobs.site,
+        status: jobs.status,
+        startsAt: jobs.startsAt,
+        updatedAt: jobs.updatedAt,
         bays: sql<number>`(select count(*)::int from ${bays} where ${bays.jobId} = ${jobs.id})`,
-        buildUpId: buildUps.id, buildUpNumber: buildUps.number, buildUpName: buildUps.name, buildUpVersion: buildUpVersions.number,
+        buildUpId: buildUps.id,
+        buildUpNumber: buildUps.number,
+        buildUpName: buildUps.name,
+        buildUpVersion: buildUpVersions.number,
       })
       .from(jobs)
       .leftJoin(buildUpVersions, eq(buildUpVersions.id, jobs.buildUpVersionId))
@@ -56,7 +72,10 @@ export async function listJobs(db: Database, { q, sort, limit, cursor, status, o
     ...job,
     startsAt: instant(job.startsAt),
     updatedAt: instant(job.updatedAt) ?? '',
-    buildUp: buildUpId && buildUpNumber && buildUpName && buildUpVersion ? { id: buildUpId, number: buildUpNumber, name: buildUpName, version: buildUpVersion } : null,
+    buildUp:
+      buildUpId && buildUpNumber && buildUpName && buildUpVersion
+        ? { id: buildUpId, number: buildUpNumber, name: buildUpName, version: buildUpVersion }
+        : null,
   }))
   return pageOf(items, { offset, limit, total: counted?.total ?? 0 })
 }
@@ -71,7 +90,10 @@ export type JobRecord = Omit<Job, 'buildUp' | 'siteCardUrl'> & { buildUpVersionI
 
 /** Is the person one of the job's crew? */
 export async function isOnJob(db: Reader, { jobId, personId }: { jobId: string; personId: string }): Promise<boolean> {
-  const rows = await db.select({ id: jobPeople.jobId }).from(jobPeople).where(and(eq(jobPeople.jobId, jobId), eq(jobPeople.personId, personId)))
+  const rows = await db
+    .select({ id: jobPeople.jobId })
+    .from(jobPeople)
+    .where(and(eq(jobPeople.jobId, jobId), eq(jobPeople.personId, personId)))
   return rows.length > 0
 }
 
@@ -109,13 +131,20 @@ export async function addJob(tx: Transaction, body: JobBody, personId: string | 
 }
 
 /** Changes a job whole; another version than the person saw is a conflict. */
-export async function changeJob(tx: Transaction, jobId: string, { version, by, ...body }: JobBody & { version: number; by: User }): Promise<void> {
+export async function changeJob(
+  tx: Transaction,
+  jobId: string,
+  { version, by, ...body }: JobBody & { version: number; by: User },
+): Promise<void> {
   const [locked] = await tx.select({ version: jobs.version }).from(jobs).where(eq(jobs.id, jobId)).for('update')
   if (!locked) throw new AppError('not-found')
   if (locked.version !== version) throw new AppError('conflict')
   await refuseUnknownReferences(tx, body)
   const { version: _version, updatedAt: _updatedAt, id: _id, number: _number, ...before } = await readJobRecord(tx, jobId)
-  await tx.update(jobs).set({ ...columnsOf(body), version: version + 1 }).where(eq(jobs.id, jobId))
+  await tx
+    .update(jobs)
+    .set({ ...columnsOf(body), version: version + 1 })
+    .where(eq(jobs.id, jobId))
   await keepParts(tx, jobId, body)
   await recordChange(tx, { personId: by.id, action: 'changed', subject: { kind: 'job', id: jobId }, from: before, to: body })
 }
@@ -131,12 +160,19 @@ async function keepParts(tx: Transaction, jobId: string, { bays: list, crewIds }
 /** A job may name only what is here, and only a version that has been released: drafts are not laid. */
 async function refuseUnknownReferences(tx: Transaction, { buildUpVersionId, crewIds }: JobBody): Promise<void> {
   if (buildUpVersionId) {
-    const [version] = await tx.select({ releasedAt: buildUpVersions.releasedAt }).from(buildUpVersions).where(eq(buildUpVersions.id, buildUpVersionId))
+    const [version] = await tx
+      .select({ releasedAt: buildUpVersions.releasedAt })
+      .from(buildUpVersions)
+      .where(eq(buildUpVersions.id, buildUpVersionId))
     if (!version) throw new AppError('invalid', { fields: { buildUpVersionId: 'This build-up version is not here.' } })
-    if (!version.releasedAt) throw new AppError('invalid', { fields: { buildUpVersionId: 'This version is a draft. A technical lead has to release it first.' } })
+    if (!version.releasedAt)
+      throw new AppError('invalid', { fields: { buildUpVersionId: 'This version is a draft. A technical lead has to release it first.' } })
   }
   if (crewIds.length === 0) return
-  const known = await tx.select({ id: people.id }).from(people).where(and(inArray(people.id, crewIds), eq(people.role, 'crew')))
+  const known = await tx
+    .select({ id: people.id })
+    .from(people)
+    .where(and(inArray(people.id, crewIds), eq(people.role, 'crew')))
   const unknown = crewIds.findIndex((id) => !known.some((person) => person.id === id))
   if (unknown >= 0) throw new AppError('invalid', { fields: { [`crewIds.${unknown}`]: 'This person is not one of the crew.' } })
 }
@@ -152,7 +188,9 @@ function dayOf(startsAt: string | null, now: number): string {
  */
 export async function readJob(db: Database, { jobId, now }: { jobId: string; now: number }): Promise<Omit<Job, 'siteCardUrl'>> {
   const { buildUpVersionId, ...job } = await readJobRecord(db, jobId)
-  const buildUp = buildUpVersionId ? await buildUpOf(db, { versionId: buildUpVersionId, conditions: job.conditions, startsAt: job.startsAt, now }) : null
+  const buildUp = buildUpVersionId
+    ? await buildUpOf(db, { versionId: buildUpVersionId, conditions: job.conditions, startsAt: job.startsAt, now })
+    : null
   return { ...job, buildUp }
 }
 

@@ -7,7 +7,10 @@ import { addJob, changeJob, listJobs, readJob } from './queries.ts'
 /** Jobs: the floors to be done, for the office. What a crew sees of one is its site card. */
 export function jobRoutes({ db, clock, publicUrl }: AppContext): Router {
   const router = Router()
-  const answer = async (jobId: string): Promise<Job> => ({ ...(await readJob(db, { jobId, now: clock() })), siteCardUrl: `${publicUrl}/site-cards/${jobId}` })
+  const answer = async (jobId: string): Promise<Job> => ({
+    ...(await readJob(db, { jobId, now: clock() })),
+    siteCardUrl: `${publicUrl}/site-cards/${jobId}`,
+  })
 
   serve(router, wire.listJobs, ({ query }) => listJobs(db, query))
   serve(router, wire.addJob, async ({ body, user }) => answer(await db.transaction((tx) => addJob(tx, body, user.id))))

@@ -20,7 +20,9 @@ export function peopleRoutes({ db, mail, clock, publicUrl }: AppContext): Router
     await mail.send(linkMail({ to: person.email, purpose: 'invitation', token, publicUrl, firmName }))
     return person
   })
-  serve(router, wire.changePerson, ({ params, body, user }) => db.transaction((tx) => changePerson(tx, params.personId, { ...body, by: user })))
+  serve(router, wire.changePerson, ({ params, body, user }) =>
+    db.transaction((tx) => changePerson(tx, params.personId, { ...body, by: user })),
+  )
   serve(router, wire.sendLink, async ({ params, user }) => {
     const person = await readPerson(db, params.personId)
     const purpose = person.status === 'invited' ? 'invitation' : 'reset'

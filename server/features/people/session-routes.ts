@@ -8,7 +8,17 @@ import { serve } from '../../http/serve.ts'
 import { linkMail } from './link-mail.ts'
 import { hashPassword, passwordFits } from './password.ts'
 import {
-  addPerson, endSessions, findByEmail, hasPeople, makeFirm, makeLink, readFirm, readPasswordHash, recordSignIn, setPassword, setPasswordByLink,
+  addPerson,
+  endSessions,
+  findByEmail,
+  hasPeople,
+  makeFirm,
+  makeLink,
+  readFirm,
+  readPasswordHash,
+  recordSignIn,
+  setPassword,
+  setPasswordByLink,
 } from './queries.ts'
 
 /** Sign-in, sign-out and passwords. What is asked of an unknown address is answered like that of a known one. */
@@ -33,34 +43,63 @@ export function sessionRoutes({ db, mail, clock, publicUrl, sessions, firstLeadC
     await recordSignIn(db, { personId: user.id, action: 'signed-out', email: user.email })
     http.response.setHeader('Clear-Site-Data', '"cache", "storage"')
   })
-  serve(router, wire.changePassword, async ({ body, user, http }) => {
-    if (!(await passwordFits(await readPasswordHash(db, user.id), body.currentPassword))) {
-      throw new AppError('invalid', { fields: { currentPassword: 'This is not your present password.' } })
-    }
-    const passwordHash = await hashPassword(body.newPassword)
-    await db.transaction((tx) => setPassword(tx, user.id, { passwordHash, exceptSid: http.request.sessionID }))
-    await mail.send({ to: user.email, subject: 'Your password was changed', text: 'Your Wearcourse password was changed just now. If it was not you, tell your technical lead at once.\n' })
-  }, slowly)
-  serve(router, wire.askForLink, ({ body }) => {
-    sendResetLink(body.email).catch((error: unknown) => log(`mail ${String(error)}`))
-  }, slowly)
-  serve(router, wire.setPassword, async ({ body }) => {
-    const passwordHash = await hashPassword(body.password)
-    const person = await db.transaction((tx) => setPasswordByLink(tx, { token: body.token, passwordHash, now: clock() }))
-    await mail.send({ to: person.email, subject: 'Your password was set', text: 'A new Wearcourse password was set for this address just now. If it was not you, tell your technical lead at once.\n' })
-  }, slowly)
-  serve(router, wire.makeFirstLead, async ({ body, http }) => {
-    if (firstLeadCode === undefined || !sameText(body.code, firstLeadCode)) throw new AppError('invalid', { fields: { code: 'This is not the code printed at the start.' } })
-    const passwordHash = await hashPassword(body.password)
-    const person = await db.transaction(async (tx) => {
-      if (await hasPeople(tx)) throw new AppError('not-found')
-      await makeFirm(tx, { name: body.firmName, isDemo: false })
-      return addPerson(tx, { name: body.name, email: body.email, role: 'lead', passwordHash }, null)
-    })
-    const user = { id: person.id, name: person.name, email: person.email, role: person.role }
-    await sessions.start(http.request, user)
-    return { user }
-  }, slowly)
+  serve(
+    router,
+    wire.changePassword,
+    async ({ body, user, http }) => {
+      if (!(await passwordFits(await readPasswordHash(db, user.id), body.currentPassword))) {
+        throw new AppError('invalid', { fields: { currentPassword: 'This is not your present password.' } })
+      }
+      const passwordHash = await hashPassword(body.newPassword)
+      await db.transaction((tx) => setPassword(tx, user.id, { passwordHash, exceptSid: http.request.sessionID }))
+      await mail.send({
+        to: user.email,
+        subject: 'Your password was changed',
+        text: 'Your Wearcourse password was changed just now. If it was not you, tell your technical lead at once.\n',
+      })
+    },
+    slowly,
+  )
+  serve(
+    router,
+    wire.askForLink,
+    ({ body }) => {
+      sendResetLink(body.email).catch((error: unknown) => log(`mail ${String(error)}`))
+    },
+    slowly,
+  )
+  serve(
+    router,
+    wire.setPassword,
+    async ({ body }) => {
+      const passwordHash = await hashPassword(body.password)
+      const person = await db.transaction((tx) => setPasswordByLink(tx, { token: body.token, passwordHash, now: clock() }))
+      await mail.send({
+        to: person.email,
+        subject: 'Your password was set',
+        text: 'A new Wearcourse password was set for this address just now. If it was not you, tell your technical lead at once.\n',
+      })
+    },
+    slowly,
+  )
+  serve(
+    router,
+    wire.makeFirstLead,
+    async ({ body, http }) => {
+      if (firstLeadCode === undefined || !sameText(body.code, firstLeadCode))
+        throw new AppError('invalid', { fields: { code: 'This is not the code printed at the start.' } })
+      const passwordHash = await hashPassword(body.password)
+      const person = await db.transaction(async (tx) => {
+        if (await hasPeople(tx)) throw new AppError('not-found')
+        await makeFirm(tx, { name: body.firmName, isDemo: false })
+        return addPerson(tx, { name: body.name, email: body.email, role: 'lead', passwordHash }, null)
+      })
+      const user = { id: person.id, name: person.name, email: person.email, role: person.role }
+      await sessions.start(http.request, user)
+      return { user }
+    },
+    slowly,
+  )
 
   /** Runs after the answer has gone, so that its time tells nothing about the address. */
   async function sendResetLink(email: string): Promise<void> {

@@ -17,7 +17,10 @@ export function waitAfter(failures: number): number {
  * The person with this address and password, or undefined. Unknown address, wrong password and disabled account are one answer that takes the same work.
  * @throws AppError `too-many` while the address has to wait.
  */
-export async function checkPassword(db: Database, credentials: { email: string; password: string; now: number }): Promise<User | undefined> {
+export async function checkPassword(
+  db: Database,
+  credentials: { email: string; password: string; now: number },
+): Promise<User | undefined> {
   const { password, now } = credentials
   const email = credentials.email.trim().toLowerCase()
   const before = await readFailures(db, email)

@@ -17,7 +17,9 @@ const withoutPrices = (facts: Fact[]) => facts.filter((fact) => fact.property !=
 
 /** The facts of a build-up as a crew may have them. */
 function forCrew(input: EvaluationInput): EvaluationInput {
-  const products = Object.fromEntries(Object.entries(input.products).map(([id, product]) => [id, { ...product, facts: withoutPrices(product.facts) }]))
+  const products = Object.fromEntries(
+    Object.entries(input.products).map(([id, product]) => [id, { ...product, facts: withoutPrices(product.facts) }]),
+  )
   const mixes = Object.fromEntries(
     Object.entries(input.mixes).map(([id, mix]) => [
       id,

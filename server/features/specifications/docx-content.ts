@@ -1,4 +1,16 @@
-import { BorderStyle, HeadingLevel, type IRunOptions, ImageRun, Paragraph, Table, TableCell, TableLayoutType, TableRow, TextRun, WidthType } from 'docx'
+import {
+  BorderStyle,
+  HeadingLevel,
+  type IRunOptions,
+  ImageRun,
+  Paragraph,
+  Table,
+  TableCell,
+  TableLayoutType,
+  TableRow,
+  TextRun,
+  WidthType,
+} from 'docx'
 import { type Run, type SpecDocument, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
 import { numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
 import { frontList, partList, pencil } from './docx-styles.ts'
@@ -31,7 +43,9 @@ export function partBlocks({ parts }: SpecDocument): Block[] {
     ...(part.articles.length === 0 ? [new Paragraph({ text: 'Not used' })] : []),
     ...numberedArticles(part).flatMap((article) => [
       new Paragraph({ text: article.title.toUpperCase(), heading: HeadingLevel.HEADING_2, numbering: { reference: partList, level: 1 } }),
-      ...article.items.map(({ level, runs }) => new Paragraph({ children: inline(runs), numbering: { reference: partList, level: level + 2 } })),
+      ...article.items.map(
+        ({ level, runs }) => new Paragraph({ children: inline(runs), numbering: { reference: partList, level: level + 2 } }),
+      ),
     ]),
   ])
 }
@@ -43,7 +57,9 @@ export function frontBlocks({ front }: SpecDocument): Block[] {
     ...kinds.flatMap((kind, instance) => [
       headingTwo(frontTitles[kind]),
       ...(front[kind].length === 0 ? [new Paragraph({ text: 'None.' })] : []),
-      ...numberedItems(front[kind]).map(({ level, runs }) => new Paragraph({ children: inline(runs), numbering: { reference: frontList, level, instance } })),
+      ...numberedItems(front[kind]).map(
+        ({ level, runs }) => new Paragraph({ children: inline(runs), numbering: { reference: frontList, level, instance } }),
+      ),
     ]),
   ]
 }
@@ -62,12 +78,26 @@ export function grid({ columns, rows, head = true }: Grid): Table {
   const total = columns.reduce((sum, { width }) => sum + width, 0)
   const widths = columns.map(({ width }) => Math.round((pageWidth * width) / total))
   const cell = (children: readonly TextRun[], index: number) =>
-    new TableCell({ width: { size: widths[index] ?? 0, type: WidthType.DXA }, margins: { top: 40, bottom: 40, left: 60, right: 60 }, children: [new Paragraph({ style: 'TableText', children })] })
+    new TableCell({
+      width: { size: widths[index] ?? 0, type: WidthType.DXA },
+      margins: { top: 40, bottom: 40, left: 60, right: 60 },
+      children: [new Paragraph({ style: 'TableText', children })],
+    })
   return new Table({
-    width: { size: pageWidth, type: WidthType.DXA }, columnWidths: widths, layout: TableLayoutType.FIXED,
+    width: { size: pageWidth, type: WidthType.DXA },
+    columnWidths: widths,
+    layout: TableLayoutType.FIXED,
     borders: { top: hair, bottom: hair, left: none, right: none, insideHorizontal: hair, insideVertical: none },
     rows: [
-      ...(head ? [new TableRow({ tableHeader: true, cantSplit: true, children: columns.map(({ label }, index) => cell([runOf({ text: label, bold: true })], index)) })] : []),
+      ...(head
+        ? [
+            new TableRow({
+              tableHeader: true,
+              cantSplit: true,
+              children: columns.map(({ label }, index) => cell([runOf({ text: label, bold: true })], index)),
+            }),
+          ]
+        : []),
       ...rows.map((row) => new TableRow({ cantSplit: true, children: row.map(cell) })),
     ],
   })
@@ -76,18 +106,28 @@ export function grid({ columns, rows, head = true }: Grid): Table {
 const note = (text: string) => (text ? [new Paragraph({ text, style: 'TableNote' })] : [])
 
 export function scheduleBlocks({ schedules }: SpecDocument): Block[] {
-  return schedules.flatMap(({ title, columns, rows, note: words }) => [headingTwo(title), grid({ columns, rows: rows.map((row) => row.map(inline)) }), ...note(words)])
+  return schedules.flatMap(({ title, columns, rows, note: words }) => [
+    headingTwo(title),
+    grid({ columns, rows: rows.map((row) => row.map(inline)) }),
+    ...note(words),
+  ])
 }
 
 export function registerBlocks(document: SpecDocument): Block[] {
-  return registersOf(document).flatMap(({ title, columns, rows }: Register) => [headingTwo(title), grid({ columns, rows: rows.map((row) => row.map((text) => [new TextRun({ text })])) })])
+  return registersOf(document).flatMap(({ title, columns, rows }: Register) => [
+    headingTwo(title),
+    grid({ columns, rows: rows.map((row) => row.map((text) => [new TextRun({ text })])) }),
+  ])
 }
 
 /** The section drawing, as lines and as a picture for word processors that draw no SVG, with its words for those who do not see it. */
 export function drawingBlocks({ svg, png, width, height, alternative }: Awaited<ReturnType<typeof paintSection>>): Block[] {
   const wide = 600
   const image = new ImageRun({
-    type: 'svg', data: Buffer.from(svg), fallback: { type: 'png', data: png }, transformation: { width: wide, height: Math.round((height * wide) / width) },
+    type: 'svg',
+    data: Buffer.from(svg),
+    fallback: { type: 'png', data: png },
+    transformation: { width: wide, height: Math.round((height * wide) / width) },
     altText: { id: '1', name: 'Section through the floor', title: 'Section through the floor', description: alternative },
   })
   return [headingTwo('Section through the floor'), new Paragraph({ children: [image] }), ...note(alternative)]

@@ -10,9 +10,18 @@ import { titleRows } from '../../../shared/domain/specification/title-block.ts'
 const textEdge = 9360
 
 function pageEdges({ header }: SpecDocument) {
-  const edge = (children: (TextRun | string)[]) => new Paragraph({ style: 'PageEdge', tabStops: [{ type: TabStopType.RIGHT, position: textEdge }], children: children.map((one) => (typeof one === 'string' ? new TextRun(one) : one)) })
+  const edge = (children: (TextRun | string)[]) =>
+    new Paragraph({
+      style: 'PageEdge',
+      tabStops: [{ type: TabStopType.RIGHT, position: textEdge }],
+      children: children.map((one) => (typeof one === 'string' ? new TextRun(one) : one)),
+    })
   return {
-    headers: { default: new Header({ children: [edge([header.project, runOf({ children: [new Tab(), issueWords(header)], bold: !header.issue })])] }) },
+    headers: {
+      default: new Header({
+        children: [edge([header.project, runOf({ children: [new Tab(), issueWords(header)], bold: !header.issue })])],
+      }),
+    },
     footers: {
       default: new Footer({
         children: [
@@ -31,7 +40,14 @@ function titleBlocks({ header }: SpecDocument) {
   return [
     new Paragraph({ text: `SECTION ${header.sectionNumber}`, alignment: AlignmentType.CENTER }),
     new Paragraph({ text: header.sectionTitle.toUpperCase(), style: 'Title' }),
-    grid({ columns: [{ label: '', width: 15 }, { label: '', width: 85 }], rows, head: false }),
+    grid({
+      columns: [
+        { label: '', width: 15 },
+        { label: '', width: 85 },
+      ],
+      rows,
+      head: false,
+    }),
   ]
 }
 
@@ -55,7 +71,8 @@ const escaped = (text: string) => text.replace(/[<>&"']/g, (sign) => `&#${sign.c
 /** Title and dates of the file (ECMA-376 part 2, core properties): the document's own date, not the clock's. */
 function coreProperties({ header }: SpecDocument, title: string): string {
   const at = `${header.date}T00:00:00Z`
-  const names = 'xmlns:cp="http://schemas.openxmlformats.org/package/2006/metadata/core-properties" xmlns:dc="http://purl.org/dc/elements/1.1/" xmlns:dcterms="http://purl.org/dc/terms/" xmlns:xsi="http://www.w3.org/2001/XMLSchema-instance"'
+  const names =
+    'xmlns:cp="http://schemas.openxmlformats.org/package/2006/metadata/core-properties" xmlns:dc="http://purl.org/dc/elements/1.1/" xmlns:dcterms="http://purl.org/dc/terms/" xmlns:xsi="http://www.w3.org/2001/XMLSchema-instance"'
   const date = (name: string) => `<dcterms:${name} xsi:type="dcterms:W3CDTF">${at}</dcterms:${name}>`
   return `<?xml version="1.0" encoding="UTF-8"?><cp:coreProperties ${names}><dc:title>${escaped(title)}</dc:title><dc:creator>${escaped(header.firm.name)}</dc:creator><dc:language>en-US</dc:language>${date('created')}${date('modified')}</cp:coreProperties>`
 }
@@ -64,8 +81,17 @@ function coreProperties({ header }: SpecDocument, title: string): string {
 export async function toDocx(document: SpecDocument): Promise<Buffer> {
   const title = `${document.header.sectionNumber} ${document.header.sectionTitle}, ${document.header.project}`
   const file = new Document({
-    title, creator: document.header.firm.name, styles, numbering,
-    sections: [{ properties: { page: { size: { width: 12240, height: 15840 }, margin: { top: 1440, right: 1440, bottom: 1300, left: 1440 } } }, ...pageEdges(document), children: await bodyOf(document) }],
+    title,
+    creator: document.header.firm.name,
+    styles,
+    numbering,
+    sections: [
+      {
+        properties: { page: { size: { width: 12240, height: 15840 }, margin: { top: 1440, right: 1440, bottom: 1300, left: 1440 } } },
+        ...pageEdges(document),
+        children: await bodyOf(document),
+      },
+    ],
   })
   const core = { path: 'docProps/core.xml', data: coreProperties(document, title) }
   return withoutZipDates(await Packer.toBuffer(file, undefined, [core]))

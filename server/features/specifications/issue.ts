@@ -17,7 +17,10 @@ interface IssueWanted {
  * Issues a specification: writes it from the facts of this moment, numbers, dates and signs it, and freezes its tree, its facts and the bytes of its files.
  * Returns the issue's number.
  */
-export async function issueSpecification({ db, files, now }: { db: Database; files: FileStore; now: number }, { specificationId, version, by }: IssueWanted): Promise<number> {
+export async function issueSpecification(
+  { db, files, now }: { db: Database; files: FileStore; now: number },
+  { specificationId, version, by }: IssueWanted,
+): Promise<number> {
   const summary = await readSummary(db, specificationId)
   const number = (summary.issues[0]?.number ?? 0) + 1
   const { document, facts } = await writeDocument(db, { summary, issue: { number, by: by.name }, now })
@@ -26,8 +29,16 @@ export async function issueSpecification({ db, files, now }: { db: Database; fil
   const [docxSha256, pdfSha256] = [await files.keep(docx), await files.keep(pdf)]
   await db.transaction((tx) =>
     keepIssue(tx, {
-      specificationId, version, number, by, tree, docxSha256, pdfSha256, facts,
-      issuedAt: new Date(now).toISOString(), treeSha256: createHash('sha256').update(tree).digest('hex'),
+      specificationId,
+      version,
+      number,
+      by,
+      tree,
+      docxSha256,
+      pdfSha256,
+      facts,
+      issuedAt: new Date(now).toISOString(),
+      treeSha256: createHash('sha256').update(tree).digest('hex'),
     }),
   )
   return number

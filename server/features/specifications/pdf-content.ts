@@ -1,5 +1,12 @@
 import type { Content, ContentNode } from 'pdfmake'
-import { type Run, type Runs, type SpecDocument, type SpecTable, frontTitles, tagText } from '../../../shared/domain/specification/document.ts'
+import {
+  type Run,
+  type Runs,
+  type SpecDocument,
+  type SpecTable,
+  frontTitles,
+  tagText,
+} from '../../../shared/domain/specification/document.ts'
 import { type NumberedItem, numberedArticles, numberedItems } from '../../../shared/domain/specification/numbering.ts'
 import { registersOf } from '../../../shared/domain/specification/registers.ts'
 import { drawSection } from './section-drawing.ts'
@@ -36,14 +43,24 @@ function paragraph({ label, level, runs }: NumberedItem): Content {
   }
 }
 
-const heading = (text: string, id: string, more: ContentNode = {}): ContentNode => ({ text, id, outline: true, outlineText: text, outlineExpanded: false, ...more })
+const heading = (text: string, id: string, more: ContentNode = {}): ContentNode => ({
+  text,
+  id,
+  outline: true,
+  outlineText: text,
+  outlineExpanded: false,
+  ...more,
+})
 
 function parts({ parts: all }: SpecDocument): Content[] {
   return all.flatMap((part): Content[] => {
     const title = `PART ${part.number} ${part.title.toUpperCase()}`
     const id = `part-${part.number}`
     const articles = numberedArticles(part).flatMap((article): Content[] => {
-      const head = heading(`${article.number}  ${article.title.toUpperCase()}`, `${id}-${article.id}`, { style: 'article', outlineParentId: id })
+      const head = heading(`${article.number}  ${article.title.toUpperCase()}`, `${id}-${article.id}`, {
+        style: 'article',
+        outlineParentId: id,
+      })
       return together(head, article.items.map(paragraph))
     })
     return together(heading(title, id, { style: 'part' }), articles.length > 0 ? articles : [{ text: 'Not used', margin: [0, 6, 0, 0] }])
@@ -55,7 +72,10 @@ function front({ front: lists }: SpecDocument): Content[] {
   return [
     heading('READ FIRST', 'front', { style: 'part' }),
     ...kinds.flatMap((kind) =>
-      together({ text: frontTitles[kind], style: 'article' }, lists[kind].length > 0 ? numberedItems(lists[kind]).map(paragraph) : [{ text: 'None.', margin: [0, 3, 0, 0] }]),
+      together(
+        { text: frontTitles[kind], style: 'article' },
+        lists[kind].length > 0 ? numberedItems(lists[kind]).map(paragraph) : [{ text: 'None.', margin: [0, 3, 0, 0] }],
+      ),
     ),
   ]
 }
@@ -79,11 +99,15 @@ function grid({ id, title, columns, rows, note }: Grid): Content[] {
   return [
     {
       table: {
-        headerRows: 2, keepWithHeaderRows: 1, dontBreakRows: true,
+        headerRows: 2,
+        keepWithHeaderRows: 1,
+        dontBreakRows: true,
         widths: columns.map(({ width }) => `${(100 * width) / total}%`),
         body: [titleRow({ id, title, columns }), columns.map(({ label }) => ({ text: label, bold: true })), ...rows],
       },
-      layout: 'schedule', fontSize: 8.5, margin: [0, 8, 0, 0],
+      layout: 'schedule',
+      fontSize: 8.5,
+      margin: [0, 8, 0, 0],
     },
     ...(note ? [{ text: note, fontSize: 8.5, color: pencil, margin: [0, 3, 0, 0] }] : []),
   ]

@@ -17,7 +17,10 @@ const hairlines = {
   hLineWidth: () => 0.4,
   vLineWidth: () => 0,
   hLineColor: () => '#c9c7c0',
-  paddingLeft: () => 3, paddingRight: () => 3, paddingTop: () => 2.5, paddingBottom: () => 2.5,
+  paddingLeft: () => 3,
+  paddingRight: () => 3,
+  paddingTop: () => 2.5,
+  paddingBottom: () => 2.5,
 }
 /** Its first row is the title, its second the head. */
 const schedule = {
@@ -50,7 +53,9 @@ function pageHead({ header }: SpecDocument): Content {
       { width: '*', text: header.project },
       { width: 'auto', text: issueWords(header), bold: !header.issue, alignment: 'right' },
     ],
-    fontSize: 8.5, color: pencil, margin: [side, 36, side, 0],
+    fontSize: 8.5,
+    color: pencil,
+    margin: [side, 36, side, 0],
   }
 }
 
@@ -59,7 +64,9 @@ const pageFoot = ({ header }: SpecDocument, page: number, pages: number): Conten
     { width: '*', text: `${header.sectionNumber} ${header.sectionTitle}, ${writtenDate(header.date)}` },
     { width: 'auto', text: `Page ${page} of ${pages}`, alignment: 'right' },
   ],
-  fontSize: 8.5, color: pencil, margin: [side, 20, side, 0],
+  fontSize: 8.5,
+  color: pencil,
+  margin: [side, 20, side, 0],
 })
 
 /** The document as PDF. The same tree gives the same bytes: the only date is the document's own. */
@@ -75,8 +82,17 @@ export async function toPdf(document: SpecDocument): Promise<Buffer> {
       pageMargins: [side, inch * 0.9, side, inch * 0.85],
       defaultStyle: { font: fontName, fontSize: 10, lineHeight: 1.12, color: ink },
       styles: { part: { fontSize: 12, bold: true, margin: [0, 18, 0, 2] }, article: { fontSize: 10.5, bold: true, margin: [0, 11, 0, 1] } },
-      info: { title, author: header.firm.name, subject: header.site, creator: 'Wearcourse', producer: 'Wearcourse', creationDate: new Date(`${header.date}T00:00:00Z`) },
-      version: '1.7', language: 'en-US', displayTitle: true,
+      info: {
+        title,
+        author: header.firm.name,
+        subject: header.site,
+        creator: 'Wearcourse',
+        producer: 'Wearcourse',
+        creationDate: new Date(`${header.date}T00:00:00Z`),
+      },
+      version: '1.7',
+      language: 'en-US',
+      displayTitle: true,
     })
     .getBuffer()
 }

@@ -25,7 +25,10 @@ async function issuesOf(db: Reader, ids: string[]): Promise<Map<string, SpecIssu
 }
 
 async function summaries(db: Reader, rows: (typeof specifications.$inferSelect)[]): Promise<SpecSummary[]> {
-  const issued = await issuesOf(db, rows.map(({ id }) => id))
+  const issued = await issuesOf(
+    db,
+    rows.map(({ id }) => id),
+  )
   return rows.map(({ createdAt: _, updatedAt, ...row }) => ({ ...row, updatedAt: iso(updatedAt), issues: issued.get(row.id) ?? [] }))
 }
 
@@ -33,7 +36,14 @@ async function summaries(db: Reader, rows: (typeof specifications.$inferSelect)[
 export async function listSpecifications(db: Reader, jobId: string): Promise<SpecSummary[]> {
   const [job] = await db.select({ id: jobs.id }).from(jobs).where(eq(jobs.id, jobId))
   if (!job) throw new AppError('not-found')
-  return summaries(db, await db.select().from(specifications).where(eq(specifications.jobId, jobId)).orderBy(asc(specifications.createdAt), asc(specifications.id)))
+  return summaries(
+    db,
+    await db
+      .select()
+      .from(specifications)
+      .where(eq(specifications.jobId, jobId))
+      .orderBy(asc(specifications.createdAt), asc(specifications.id)),
+  )
 }
 
 /** @throws AppError `not-found` */
@@ -50,17 +60,34 @@ interface Named {
 }
 
 /** Begins a specification; returns its id. `personId` null: the system itself. */
-export async function addSpecification(tx: Transaction, { jobId, title, sectionNumber }: Named & { jobId: string }, personId: string | null): Promise<string> {
+export async function addSpecification(
+  tx: Transaction,
+  { jobId, title, sectionNumber }: Named & { jobId: string },
+  personId: string | null,
+): Promise<string> {
   const [row] = await tx.insert(specifications).values({ jobId, title, sectionNumber }).returning({ id: specifications.id })
   if (!row) throw new AppError('unavailable')
   await recordChange(tx, { personId, action: 'added', subject: { kind: 'specification', id: row.id }, to: { jobId, title, sectionNumber } })
   return row.id
 }
 
-export async function changeSpecification(tx: Transaction, id: string, { version, by, ...to }: Named & { version: number; by: User }): Promise<void> {
+export async function changeSpecification(
+  tx: Transaction,
+  id: string,
+  { version, by, ...to }: Named & { version: number; by: User },
+): Promise<void> {
   const before = await takeSpecification(tx, { id, version })
-  await tx.update(specifications).set({ ...to, version: version + 1, updatedAt: sql`now()` }).where(eq(specifications.id, id))
-  await recordChange(tx, { personId: by.id, action: 'changed', subject: { kind: 'specification', id }, from: { title: before.title, sectionNumber: before.sectionNumber }, to })
+  await tx
+    .update(specifications)
+    .set({ ...to, version: version + 1, updatedAt: sql`now()` })
+    .where(eq(specifications.id, id))
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'changed',
+    subject: { kind: 'specification', id },
+    from: { title: before.title, sectionNumber: before.sectionNumber },
+    to,
+  })
 }
 
 /** Locks a specification for changing; another version than the person saw is a conflict. */
@@ -87,12 +114,23 @@ interface Frozen {
 /** Keeps an issue for good. One issued meanwhile under the same number is a conflict. */
 export async function keepIssue(tx: Transaction, { version, by, ...issue }: Frozen): Promise<void> {
   await takeSpecification(tx, { id: issue.specificationId, version })
-  const [last] = await tx.select({ number: sql<number | null>`max(${issues.number})` }).from(issues).where(eq(issues.specificationId, issue.specificationId))
+  const [last] = await tx
+    .select({ number: sql<number | null>`max(${issues.number})` })
+    .from(issues)
+    .where(eq(issues.specificationId, issue.specificationId))
   if ((last?.number ?? 0) + 1 !== issue.number) throw new AppError('conflict')
   await tx.insert(issues).values({ ...issue, issuedBy: by.id, issuedByName: by.name })
-  await tx.update(specifications).set({ version: version + 1, updatedAt: sql`now()` }).where(eq(specifications.id, issue.specificationId))
+  await tx
+    .update(specifications)
+    .set({ version: version + 1, updatedAt: sql`now()` })
+    .where(eq(specifications.id, issue.specificationId))
   const { number, treeSha256, docxSha256, pdfSha256 } = issue
-  await recordChange(tx, { personId: by.id, action: 'issued', subject: { kind: 'specification', id: issue.specificationId }, to: { number, treeSha256, docxSha256, pdfSha256 } })
+  await recordChange(tx, {
+    personId: by.id,
+    action: 'issued',
+    subject: { kind: 'specification', id: issue.specificationId },
+    to: { number, treeSha256, docxSha256, pdfSha256 },
+  })
 }
 
 /** @throws AppError `not-found` */

@@ -22,9 +22,17 @@ function fileName({ header }: SpecDocument, kind: FileKind): string {
 }
 
 /** Answers with bytes made this moment; the same bytes are not sent twice. */
-function sendMade(bytes: Buffer, { name, kind, request, response }: { name: string; kind: FileKind; request: Request; response: Response }): void {
+function sendMade(
+  bytes: Buffer,
+  { name, kind, request, response }: { name: string; kind: FileKind; request: Request; response: Response },
+): void {
   const etag = `"${createHash('sha256').update(bytes).digest('hex')}"`
-  response.set({ ETag: etag, 'Content-Disposition': attachment(name), 'Cache-Control': 'private, no-cache', 'X-Content-Type-Options': 'nosniff' })
+  response.set({
+    ETag: etag,
+    'Content-Disposition': attachment(name),
+    'Cache-Control': 'private, no-cache',
+    'X-Content-Type-Options': 'nosniff',
+  })
   if (request.headers['if-none-match'] === etag) response.status(304).end()
   else response.type(types[kind]).send(bytes)
 }
@@ -74,7 +82,11 @@ export function specificationRoutes({ db, files, clock }: AppContext): Router {
     const document = await draft(params.specificationId)
     sendMade(await render.pdf(document), { name: fileName(document, 'pdf'), kind: 'pdf', ...http })
   })
-  const sendIssued = async (place: { specificationId: string; number: number }, kind: FileKind, http: { request: Request; response: Response }) => {
+  const sendIssued = async (
+    place: { specificationId: string; number: number },
+    kind: FileKind,
+    http: { request: Request; response: Response },
+  ) => {
     const { tree, docxSha256, pdfSha256 } = await readIssueRow(db, place)
     const name = fileName(specDocumentSchema.parse(JSON.parse(tree)), kind)
     await sendFile({ files, sha256: kind === 'docx' ? docxSha256 : pdfSha256, name, type: types[kind], ...http })

@@ -27,7 +27,10 @@ export async function paintSection(document: SpecDocument) {
   context.fillStyle = '#ffffff'
   context.fillRect(0, 0, canvas.width, canvas.height)
   // The picture is drawn at the size that the SVG names.
-  const large = drawing.svg.replace(`width="${drawing.width}" height="${drawing.height}"`, `width="${canvas.width}" height="${canvas.height}"`)
+  const large = drawing.svg.replace(
+    `width="${drawing.width}" height="${drawing.height}"`,
+    `width="${canvas.width}" height="${canvas.height}"`,
+  )
   const image = await loadImage(Buffer.from(large))
   context.drawImage(image, 0, 0, canvas.width, canvas.height)
   return { ...drawing, png: await canvas.encode('png') }

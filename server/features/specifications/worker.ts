@@ -16,6 +16,7 @@ const make = ({ kind, document }: Task): Promise<Uint8Array> => (kind === 'docx'
 parentPort?.on('message', (task: Task) => {
   make(task).then(
     (bytes) => parentPort?.postMessage({ bytes } satisfies Made),
-    (error: unknown) => parentPort?.postMessage({ problem: error instanceof Error ? (error.stack ?? error.message) : String(error) } satisfies Made),
+    (error: unknown) =>
+      parentPort?.postMessage({ problem: error instanceof Error ? (error.stack ?? error.message) : String(error) } satisfies Made),
   )
 })

@@ -44,8 +44,14 @@ export interface Written {
 
 /** Every sheet revision that a floor's facts and records rest on. */
 export function revisionsOf({ mixes, products }: EvaluationInput): string[] {
-  const holders = [...Object.values(mixes), ...Object.values(mixes).flatMap(({ parts }) => parts.map(({ product }) => product)), ...Object.values(products)]
-  const cited = holders.flatMap(({ facts }) => facts.flatMap(({ origin }) => (origin.kind === 'stated' ? [origin.citation.revisionId] : [])))
+  const holders = [
+    ...Object.values(mixes),
+    ...Object.values(mixes).flatMap(({ parts }) => parts.map(({ product }) => product)),
+    ...Object.values(products),
+  ]
+  const cited = holders.flatMap(({ facts }) =>
+    facts.flatMap(({ origin }) => (origin.kind === 'stated' ? [origin.citation.revisionId] : [])),
+  )
   return [...new Set([...holders.flatMap(({ sheets }) => sheets.map(({ revisionId }) => revisionId)), ...cited])]
 }
 
@@ -56,11 +62,21 @@ export async function writeDocument(db: Database, { summary, issue, now }: Wante
   const facts: SpecInput = {
     header: {
       firm: { name: firm.name, address: firm.address, phone: firm.phone },
-      project: job.name, jobNumber: job.number, client: job.client, site: job.site,
-      sectionNumber: summary.sectionNumber, sectionTitle: summary.title, date: dayIn(job.timeZone, now), issue,
+      project: job.name,
+      jobNumber: job.number,
+      client: job.client,
+      site: job.site,
+      sectionNumber: summary.sectionNumber,
+      sectionTitle: summary.title,
+      date: dayIn(job.timeZone, now),
+      issue,
     },
     buildUp: { number, name, version, status, releasedAt, releasedByName },
-    input, reasons: releaseReasons, bays: job.bays, texture: job.conditions.texture, loss: job.loss,
+    input,
+    reasons: releaseReasons,
+    bays: job.bays,
+    texture: job.conditions.texture,
+    loss: job.loss,
   }
   return { document: specify(facts), job, facts, revisionIds: revisionsOf(input) }
 }

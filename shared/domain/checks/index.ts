@@ -11,8 +11,18 @@ import { windowCloses, windowOpens } from './window.ts'
 
 /** The table of all checks. Builder, specification and site card read the same findings. */
 export const checks = [
-  profileForFilm, prepReachesProfile, filmInRange, windowOpens, windowCloses, ratioBasesAgree, temperatureInRange, dewPointMarginKept, moistureLimit, vocLimit,
-  sheetPresent, sheetCurrent,
+  profileForFilm,
+  prepReachesProfile,
+  filmInRange,
+  windowOpens,
+  windowCloses,
+  ratioBasesAgree,
+  temperatureInRange,
+  dewPointMarginKept,
+  moistureLimit,
+  vocLimit,
+  sheetPresent,
+  sheetCurrent,
 ] as const satisfies readonly Check[]
 
 const order = { stop: 0, caution: 1, unknown: 2, met: 3 } as const

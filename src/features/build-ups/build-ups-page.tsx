@@ -41,7 +41,13 @@ export function BuildUpsPage() {
       </Dialog>
       <Card>
         <div className="flex flex-wrap gap-4 border-b border-rule p-4">
-          <TextField label="Search" type="search" defaultValue={address.q} onChange={(event) => address.set({ q: event.target.value })} className="w-full max-w-sm" />
+          <TextField
+            label="Search"
+            type="search"
+            defaultValue={address.q}
+            onChange={(event) => address.set({ q: event.target.value })}
+            className="w-full max-w-sm"
+          />
           <SelectField label="Status" value={status} onChange={(event) => address.set({ status: event.target.value })}>
             <option value="">any</option>
             <option>draft</option>
@@ -54,7 +60,11 @@ export function BuildUpsPage() {
             page.items.length > 0 ? (
               <BuildUpTable page={page} address={address} stale={list.isPlaceholderData} />
             ) : (
-              <Notice>{address.q || status ? 'No build-up matches. Search for part of its name, its number or a mix in it.' : 'No build-ups yet. Begin one: a floor from the slab upward.'}</Notice>
+              <Notice>
+                {address.q || status
+                  ? 'No build-up matches. Search for part of its name, its number or a mix in it.'
+                  : 'No build-ups yet. Begin one: a floor from the slab upward.'}
+              </Notice>
             )
           }
         </Asking>
@@ -89,7 +99,13 @@ function BuildUpTable({ page, address, stale }: BuildUpTableProps) {
       },
       { id: 'number', header: 'Number', cell: ({ row }) => buildUpNumber(row.original.number) },
       { id: 'status', header: 'Status', cell: ({ row }) => <Standing summary={row.original} /> },
-      { id: 'thickness', header: 'Thickness, dry', enableSorting: false, meta: { numeric: true }, cell: ({ row }) => <FigureView figure={row.original.thickness} /> },
+      {
+        id: 'thickness',
+        header: 'Thickness, dry',
+        enableSorting: false,
+        meta: { numeric: true },
+        cell: ({ row }) => <FigureView figure={row.original.thickness} />,
+      },
       { id: 'findings', header: 'Checks', enableSorting: false, cell: ({ row }) => <Counts findings={row.original.findings} /> },
       {
         id: 'updatedAt',
@@ -106,8 +122,14 @@ function BuildUpTable({ page, address, stale }: BuildUpTableProps) {
   )
   return (
     <ListTable
-      caption="Build-ups by their newest version" columns={columns} page={page} sort={address.sort} stale={stale} rowKey={(row) => row.id}
-      onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+      caption="Build-ups by their newest version"
+      columns={columns}
+      page={page}
+      sort={address.sort}
+      stale={stale}
+      rowKey={(row) => row.id}
+      onSort={(sort) => address.set({ sort })}
+      onCursor={(cursor) => address.set({ cursor })}
     />
   )
 }

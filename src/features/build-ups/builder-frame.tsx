@@ -87,7 +87,9 @@ function VersionSwitch({ buildUp }: { buildUp: BuildUp }) {
   const navigate = useNavigate()
   return (
     <select
-      aria-label="Version" className="border-b border-pencil bg-transparent py-0.5" value={buildUp.opened.number}
+      aria-label="Version"
+      className="border-b border-pencil bg-transparent py-0.5"
+      value={buildUp.opened.number}
       onChange={(event) => void navigate(paths.buildUp(buildUp.id, Number(event.target.value)))}
     >
       {buildUp.versions.map(({ number, status }) => (
@@ -147,13 +149,22 @@ function Asked({ buildUp, evaluation, titles, version, asking, onClose }: Builde
     <>
       <Dialog title="Rename" open={asking === 'rename'} onClose={onClose}>
         <NameForm
-          schema={buildUpEndpoints.renameBuildUp.body} rest={{ version: buildUp.version }} name={buildUp.name} note={buildUp.note} verb="Rename" onDone={onClose}
+          schema={buildUpEndpoints.renameBuildUp.body}
+          rest={{ version: buildUp.version }}
+          name={buildUp.name}
+          note={buildUp.note}
+          verb="Rename"
+          onDone={onClose}
           send={(body) => rename(buildUp.id, body)}
         />
       </Dialog>
       <Dialog title="Copy into a build-up of its own" open={asking === 'copy'} onClose={onClose}>
         <NameForm
-          schema={buildUpEndpoints.copyBuildUp.body} rest={{ number }} name={`${buildUp.name}, copy`} verb="Copy" onDone={onClose}
+          schema={buildUpEndpoints.copyBuildUp.body}
+          rest={{ number }}
+          name={`${buildUp.name}, copy`}
+          verb="Copy"
+          onDone={onClose}
           send={async (body) => {
             const made = await copy(buildUp.id, body)
             await navigate(paths.buildUp(made.id, 1))
@@ -162,7 +173,8 @@ function Asked({ buildUp, evaluation, titles, version, asking, onClose }: Builde
       </Dialog>
       <Dialog title={`Release version ${number}`} open={asking === 'release'} onClose={onClose} wide>
         <ReleaseForm
-          findings={evaluation.findings} titles={titles}
+          findings={evaluation.findings}
+          titles={titles}
           release={async (reasons) => {
             await release(place, { version: version(), reasons })
             onClose()
@@ -173,7 +185,11 @@ function Asked({ buildUp, evaluation, titles, version, asking, onClose }: Builde
       <Dialog title={`Withdraw version ${number}`} open={asking === 'withdraw'} onClose={onClose}>
         <p className="mb-3">A withdrawn version is kept and can still be read. No new job can be laid by it; a job that is keeps it.</p>
         {withdraw.error && <Notice tone="stop">{sentenceOf(withdraw.error)}</Notice>}
-        <Button look="stop" busy={withdraw.isPending} onClick={() => withdraw.mutate({ ...place, version: version() }, { onSuccess: onClose })}>
+        <Button
+          look="stop"
+          busy={withdraw.isPending}
+          onClick={() => withdraw.mutate({ ...place, version: version() }, { onSuccess: onClose })}
+        >
           Withdraw version {number}
         </Button>
       </Dialog>

@@ -12,12 +12,19 @@ export function BuilderPage() {
   const { buildUpId = '' } = useParams()
   const [search] = useSearchParams()
   const asked = Number(search.get('version'))
-  const query = useQuery({ ...buildUpOptions(buildUpId, Number.isInteger(asked) && asked > 0 ? asked : undefined), refetchOnMount: 'always' })
+  const query = useQuery({
+    ...buildUpOptions(buildUpId, Number.isInteger(asked) && asked > 0 ? asked : undefined),
+    refetchOnMount: 'always',
+  })
   const mayDraft = useCan('build-up:draft')
   return (
     <Asking query={query} says={sentenceOf}>
       {(buildUp) =>
-        buildUp.opened.status === 'draft' && mayDraft ? <DraftBuilder key={buildUp.opened.id} buildUp={buildUp} /> : <FixedBuilder key={buildUp.opened.id} buildUp={buildUp} />
+        buildUp.opened.status === 'draft' && mayDraft ? (
+          <DraftBuilder key={buildUp.opened.id} buildUp={buildUp} />
+        ) : (
+          <FixedBuilder key={buildUp.opened.id} buildUp={buildUp} />
+        )
       }
     </Asking>
   )

@@ -10,7 +10,16 @@ export function MixPicker({ chosen, onChoose }: { chosen: Chosen; onChoose: (mix
   const all = useChoices('').data?.mixes ?? []
   const near = useChoices(typed).data?.mixes ?? []
   const choices = joined(all, near).map(({ id, name, maker, chemistry, color }) => ({ id, name, detail: `${maker}, ${chemistry}`, color }))
-  return <Picker label="Mix" none="type part of its name" choices={choices} chosen={chosen} onType={setTyped} onChoose={(choice) => onChoose(choice?.id ?? null)} />
+  return (
+    <Picker
+      label="Mix"
+      none="type part of its name"
+      choices={choices}
+      chosen={chosen}
+      onType={setTyped}
+      onChoose={(choice) => onChoose(choice?.id ?? null)}
+    />
+  )
 }
 
 /** Finds a sand of the catalogue. */

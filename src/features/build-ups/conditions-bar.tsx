@@ -19,23 +19,47 @@ export function ConditionsBar({ conditions, onChange }: ConditionsBarProps) {
     <fieldset className="grid grid-cols-2 gap-x-4 gap-y-3 border border-rule bg-card px-4 py-3 md:grid-cols-4 xl:grid-cols-[repeat(4,minmax(0,1fr))_minmax(0,1.5fr)_minmax(0,1.4fr)]">
       <legend className="sr-only">Conditions</legend>
       <QuantityField
-        label="Slab" name="slabTemperature" units={temperatures} value={conditions.slabTemperature as { value: number; unit: '°F' }}
+        label="Slab"
+        name="slabTemperature"
+        units={temperatures}
+        value={conditions.slabTemperature as { value: number; unit: '°F' }}
         onChange={(value) => value && onChange({ slabTemperature: value })}
       />
       <QuantityField
-        label="Air" name="airTemperature" units={temperatures} value={conditions.airTemperature as { value: number; unit: '°F' }}
+        label="Air"
+        name="airTemperature"
+        units={temperatures}
+        value={conditions.airTemperature as { value: number; unit: '°F' }}
         onChange={(value) => value && onChange({ airTemperature: value })}
       />
-      <PercentField label="Humidity of the air" name="relativeHumidity" value={conditions.relativeHumidity} onChange={(value) => value !== null && onChange({ relativeHumidity: value })} />
       <PercentField
-        label="Humidity in the slab" name="substrateRelativeHumidity" value={conditions.substrateRelativeHumidity} mayBeEmpty
+        label="Humidity of the air"
+        name="relativeHumidity"
+        value={conditions.relativeHumidity}
+        onChange={(value) => value !== null && onChange({ relativeHumidity: value })}
+      />
+      <PercentField
+        label="Humidity in the slab"
+        name="substrateRelativeHumidity"
+        value={conditions.substrateRelativeHumidity}
+        mayBeEmpty
         onChange={(value) => onChange({ substrateRelativeHumidity: value })}
       />
       <QuantityField
-        label="Moisture emission" name="moistureEmission" className="col-span-2 xl:col-span-1" units={emissions} value={conditions.moistureEmission as { value: number; unit: (typeof emissions)[number] } | null}
+        label="Moisture emission"
+        name="moistureEmission"
+        className="col-span-2 xl:col-span-1"
+        units={emissions}
+        value={conditions.moistureEmission as { value: number; unit: (typeof emissions)[number] } | null}
         onChange={(value) => onChange({ moistureEmission: value })}
       />
-      <SelectField label="VOC rules of" name="vocPlace" className="col-span-2 xl:col-span-1" value={conditions.vocPlace ?? ''} onChange={(event) => onChange({ vocPlace: event.target.value || null })}>
+      <SelectField
+        label="VOC rules of"
+        name="vocPlace"
+        className="col-span-2 xl:col-span-1"
+        value={conditions.vocPlace ?? ''}
+        onChange={(event) => onChange({ vocPlace: event.target.value || null })}
+      >
         <option value="">none chosen</option>
         {vocPlaces.map((place) => (
           <option key={place.id} value={place.id}>
@@ -59,7 +83,8 @@ interface PercentFieldProps {
 function PercentField({ mayBeEmpty = false, onChange, ...rest }: PercentFieldProps) {
   const [error, setError] = useState<string>()
   const take = (value: number | null) => {
-    const problem = value === null ? (mayBeEmpty ? undefined : 'This is needed.') : value >= 1 && value <= 100 ? undefined : 'Between 1 and 100.'
+    const problem =
+      value === null ? (mayBeEmpty ? undefined : 'This is needed.') : value >= 1 && value <= 100 ? undefined : 'Between 1 and 100.'
     setError(problem)
     if (!problem) onChange(value)
   }

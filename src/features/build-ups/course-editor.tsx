@@ -20,20 +20,48 @@ export function CourseEditor({ course, facts, onChange, fields }: CourseEditorPr
   const dry = isDry(course)
   return (
     <div className="grid gap-4 sm:grid-cols-2">
-      <TextField label="Title" name={`title-${course.id}`} value={course.title} maxLength={120} error={fields['title']} onChange={(event) => onChange({ title: event.target.value })} />
-      <SelectField label="Stage" name={`stage-${course.id}`} value={course.stage} onChange={(event) => onChange({ stage: stages.find((stage) => stage === event.target.value) ?? course.stage })}>
+      <TextField
+        label="Title"
+        name={`title-${course.id}`}
+        value={course.title}
+        maxLength={120}
+        error={fields['title']}
+        onChange={(event) => onChange({ title: event.target.value })}
+      />
+      <SelectField
+        label="Stage"
+        name={`stage-${course.id}`}
+        value={course.stage}
+        onChange={(event) => onChange({ stage: stages.find((stage) => stage === event.target.value) ?? course.stage })}
+      >
         {stages.map((stage) => (
           <option key={stage} value={stage}>
             {stageNames[stage].name}
           </option>
         ))}
       </SelectField>
-      {dry ? <PreparationFields course={course} onChange={onChange} /> : <WetFields course={course} facts={facts} onChange={onChange} fields={fields} />}
+      {dry ? (
+        <PreparationFields course={course} onChange={onChange} />
+      ) : (
+        <WetFields course={course} facts={facts} onChange={onChange} fields={fields} />
+      )}
       <NumberField
-        label="Starts" name={`start-${course.id}`} unit="h" value={course.startsAfter} help="Hours after the floor’s first course. Empty: as soon as the course beneath allows."
-        error={fields['startsAfter']} onChange={(startsAfter) => onChange({ startsAfter })}
+        label="Starts"
+        name={`start-${course.id}`}
+        unit="h"
+        value={course.startsAfter}
+        help="Hours after the floor’s first course. Empty: as soon as the course beneath allows."
+        error={fields['startsAfter']}
+        onChange={(startsAfter) => onChange({ startsAfter })}
       />
-      <AreaField label="Note" name={`note-${course.id}`} rows={2} value={course.note} error={fields['note']} onChange={(event) => onChange({ note: event.target.value })} />
+      <AreaField
+        label="Note"
+        name={`note-${course.id}`}
+        rows={2}
+        value={course.note}
+        error={fields['note']}
+        onChange={(event) => onChange({ note: event.target.value })}
+      />
     </div>
   )
 }
@@ -45,7 +73,9 @@ function PreparationFields({ course, onChange }: FieldsProps) {
   return (
     <>
       <SelectField
-        label="Method" name={`method-${course.id}`} value={preparation?.method ?? ''}
+        label="Method"
+        name={`method-${course.id}`}
+        value={preparation?.method ?? ''}
         onChange={(event) => {
           const method = preparationMethods.find((one) => one === event.target.value)
           onChange({ preparation: method ? { ...preparation, method } : null })
@@ -57,7 +87,11 @@ function PreparationFields({ course, onChange }: FieldsProps) {
         ))}
       </SelectField>
       <SelectField
-        label="Concrete surface profile" name={`profile-${course.id}`} value={preparation?.profile ?? ''} disabled={!preparation} help={preparation ? undefined : 'Choose a method first.'}
+        label="Concrete surface profile"
+        name={`profile-${course.id}`}
+        value={preparation?.profile ?? ''}
+        disabled={!preparation}
+        help={preparation ? undefined : 'Choose a method first.'}
         onChange={(event) => {
           if (!preparation) return
           const { method } = preparation
@@ -81,15 +115,28 @@ function WetFields({ course, facts, onChange, fields }: CourseEditorProps) {
   return (
     <>
       <div className="sm:col-span-2">
-        <MixPicker chosen={course.mixId ? { id: course.mixId, name: facts.mixes[course.mixId]?.name ?? 'Loading …' } : null} onChoose={(mixId) => onChange({ mixId })} />
+        <MixPicker
+          chosen={course.mixId ? { id: course.mixId, name: facts.mixes[course.mixId]?.name ?? 'Loading …' } : null}
+          onChoose={(mixId) => onChange({ mixId })}
+        />
       </div>
       <div className="flex items-start gap-2">
         <QuantityField
-          label="Thickness" name={`thickness-${course.id}`} className="flex-1" units={['mil', 'in', 'µm', 'mm'] as const} value={thickness} error={fields['thickness']}
-          onChange={(value) => onChange(value ? { thickness: { ...value, film: thickness?.film ?? 'wet' }, spreadRate: null } : { thickness: null })}
+          label="Thickness"
+          name={`thickness-${course.id}`}
+          className="flex-1"
+          units={['mil', 'in', 'µm', 'mm'] as const}
+          value={thickness}
+          error={fields['thickness']}
+          onChange={(value) =>
+            onChange(value ? { thickness: { ...value, film: thickness?.film ?? 'wet' }, spreadRate: null } : { thickness: null })
+          }
         />
         <SelectField
-          label="Film" name={`film-${course.id}`} value={thickness?.film ?? 'wet'} disabled={!thickness}
+          label="Film"
+          name={`film-${course.id}`}
+          value={thickness?.film ?? 'wet'}
+          disabled={!thickness}
           onChange={(event) => thickness && onChange({ thickness: { ...thickness, film: event.target.value === 'dry' ? 'dry' : 'wet' } })}
         >
           <option>wet</option>
@@ -97,11 +144,21 @@ function WetFields({ course, facts, onChange, fields }: CourseEditorProps) {
         </SelectField>
       </div>
       <QuantityField
-        label="Or spread rate" name={`spread-${course.id}`} units={['ft²/gal', 'm²/L'] as const} value={spreadRate} error={fields['spreadRate']} help="Either gives the other."
+        label="Or spread rate"
+        name={`spread-${course.id}`}
+        units={['ft²/gal', 'm²/L'] as const}
+        value={spreadRate}
+        error={fields['spreadRate']}
+        help="Either gives the other."
         onChange={(value) => onChange(value ? { spreadRate: value, thickness: null } : { spreadRate: null })}
       />
       <FillerFields course={course} nameOf={name} error={fields['filler.loading'] ?? fields['filler.loading.value']} onChange={onChange} />
-      <BroadcastFields course={course} nameOf={name} error={fields['broadcast.rate'] ?? fields['broadcast.rate.value']} onChange={onChange} />
+      <BroadcastFields
+        course={course}
+        nameOf={name}
+        error={fields['broadcast.rate'] ?? fields['broadcast.rate.value']}
+        onChange={onChange}
+      />
     </>
   )
 }

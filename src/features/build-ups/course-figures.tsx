@@ -25,7 +25,20 @@ function resinRow(figure: Figure, system: ShownSystem): Row {
 }
 
 function rowsOf(result: CourseResult, system: ShownSystem): Row[] {
-  const { wetFilm, dryFilm, spreadRate, resinPerArea, aggregatePerArea, potLife, workingTime, window, footTraffic, vehicleTraffic, fullCure, voc } = result
+  const {
+    wetFilm,
+    dryFilm,
+    spreadRate,
+    resinPerArea,
+    aggregatePerArea,
+    potLife,
+    workingTime,
+    window,
+    footTraffic,
+    vehicleTraffic,
+    fullCure,
+    voc,
+  } = result
   return [
     { label: 'Wet film', figure: wetFilm },
     { label: 'Dry film', figure: dryFilm },
@@ -71,14 +84,25 @@ function Proportions({ result }: { result: CourseResult }) {
   return (
     <table className="w-full text-left">
       <caption className="mb-1 text-left font-semibold">
-        Mix {[result.ratioByVolume && `${result.ratioByVolume} by volume`, result.ratioByWeight && `${result.ratioByWeight} by weight`].filter(Boolean).join(', ')}
+        Mix{' '}
+        {[result.ratioByVolume && `${result.ratioByVolume} by volume`, result.ratioByWeight && `${result.ratioByWeight} by weight`]
+          .filter(Boolean)
+          .join(', ')}
       </caption>
       <thead>
         <tr className="border-b border-ink text-pencil">
-          <th scope="col" className="py-1 font-normal">Part</th>
-          <th scope="col" className="py-1 text-right font-normal">by volume</th>
-          <th scope="col" className="py-1 text-right font-normal">by weight</th>
-          <th scope="col" className="py-1 text-right font-normal">density</th>
+          <th scope="col" className="py-1 font-normal">
+            Part
+          </th>
+          <th scope="col" className="py-1 text-right font-normal">
+            by volume
+          </th>
+          <th scope="col" className="py-1 text-right font-normal">
+            by weight
+          </th>
+          <th scope="col" className="py-1 text-right font-normal">
+            density
+          </th>
         </tr>
       </thead>
       <tbody>

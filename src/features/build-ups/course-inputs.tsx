@@ -29,7 +29,13 @@ function InlineNumber({ label, value, unit, computed, explains, onChange }: Inli
   return (
     <span className="inline-flex items-baseline justify-end gap-1">
       <input
-        aria-label={label} inputMode="decimal" autoComplete="off" value={shown} placeholder="–" title={explains} aria-invalid={wrong || undefined}
+        aria-label={label}
+        inputMode="decimal"
+        autoComplete="off"
+        value={shown}
+        placeholder="–"
+        title={explains}
+        aria-invalid={wrong || undefined}
         className={`w-16 border-b bg-transparent px-1 py-0.5 text-right hover:bg-resin-wash focus:bg-card ${wrong ? 'border-2 border-stop' : computed ? 'border-dashed border-rule text-pencil' : 'border-pencil text-ink'}`}
         onFocus={(event) => event.target.select()}
         onBlur={() => setText(null)}
@@ -62,8 +68,14 @@ interface CourseInputsProps {
 export function CourseInputs({ course, result, onChange }: CourseInputsProps) {
   const { system } = useUnitSystem()
   const { thickness, spreadRate } = course
-  const lengthUnit = shownUnit(thickness?.unit ?? (system === 'si' || spreadRate?.unit === 'm²/L' ? 'µm' : 'mil'), system) as Thickness['unit']
-  const spreadUnit = shownUnit(spreadRate?.unit ?? (system === 'si' || thickness?.unit === 'µm' || thickness?.unit === 'mm' ? 'm²/L' : 'ft²/gal'), system) as SpreadRate['unit']
+  const lengthUnit = shownUnit(
+    thickness?.unit ?? (system === 'si' || spreadRate?.unit === 'm²/L' ? 'µm' : 'mil'),
+    system,
+  ) as Thickness['unit']
+  const spreadUnit = shownUnit(
+    spreadRate?.unit ?? (system === 'si' || thickness?.unit === 'µm' || thickness?.unit === 'mm' ? 'm²/L' : 'ft²/gal'),
+    system,
+  ) as SpreadRate['unit']
   const film = thickness?.film ?? 'wet'
   const figure = film === 'wet' ? result?.wetFilm : result?.dryFilm
   const typedLength = thickness && convert({ value: thickness.value, unit: thickness.unit }, lengthUnit).value
@@ -71,13 +83,21 @@ export function CourseInputs({ course, result, onChange }: CourseInputsProps) {
   return (
     <div className="flex flex-col items-end text-right">
       <InlineNumber
-        label={`Thickness of ${course.title}, ${lengthUnit} ${film}`} unit={`${lengthUnit} ${film}`} value={typedLength ?? middleIn(figure, lengthUnit)}
-        computed={!thickness} explains={sumOf(figure, !thickness)}
-        onChange={(value) => onChange(value === null ? { thickness: null } : { thickness: { value, unit: lengthUnit, film }, spreadRate: null })}
+        label={`Thickness of ${course.title}, ${lengthUnit} ${film}`}
+        unit={`${lengthUnit} ${film}`}
+        value={typedLength ?? middleIn(figure, lengthUnit)}
+        computed={!thickness}
+        explains={sumOf(figure, !thickness)}
+        onChange={(value) =>
+          onChange(value === null ? { thickness: null } : { thickness: { value, unit: lengthUnit, film }, spreadRate: null })
+        }
       />
       <InlineNumber
-        label={`Spread rate of ${course.title}, ${spreadUnit}`} unit={unitText(spreadUnit)} value={typedSpread ?? middleIn(result?.spreadRate, spreadUnit)}
-        computed={!spreadRate} explains={sumOf(result?.spreadRate, !spreadRate)}
+        label={`Spread rate of ${course.title}, ${spreadUnit}`}
+        unit={unitText(spreadUnit)}
+        value={typedSpread ?? middleIn(result?.spreadRate, spreadUnit)}
+        computed={!spreadRate}
+        explains={sumOf(result?.spreadRate, !spreadRate)}
         onChange={(value) => onChange(value === null ? { spreadRate: null } : { spreadRate: { value, unit: spreadUnit }, thickness: null })}
       />
     </div>

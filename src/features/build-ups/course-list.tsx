@@ -33,7 +33,8 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
     <ol ref={list} className="min-w-0 list-none self-start">
       {falling.map(({ course, index }) => (
         <li
-          key={course.id} className={`break-inside-avoid border-b border-rule ${over === course.id && dragged !== course.id ? 'outline-2 -outline-offset-2 outline-resin' : ''} ${dragged === course.id ? 'opacity-50' : ''}`}
+          key={course.id}
+          className={`break-inside-avoid border-b border-rule ${over === course.id && dragged !== course.id ? 'outline-2 -outline-offset-2 outline-resin' : ''} ${dragged === course.id ? 'opacity-50' : ''}`}
           onDragOver={(event) => {
             if (!dragged) return
             event.preventDefault()
@@ -45,9 +46,15 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
             {dispatch && <DragHandle id={course.id} onDrag={setDragged} />}
             <div className="min-w-0 flex-1">
               <CourseRow
-                course={course} number={index + 1} result={evaluation.courses.find((one) => one.courseId === course.id)} mix={course.mixId ? input.mixes[course.mixId] : undefined}
-                findings={evaluation.findings.filter((finding) => finding.courseId === course.id)} open={open === course.id} lit={lit === course.id}
-                onToggle={() => onOpen(open === course.id ? null : course.id)} onLight={(on) => onLight(on ? course.id : null)}
+                course={course}
+                number={index + 1}
+                result={evaluation.courses.find((one) => one.courseId === course.id)}
+                mix={course.mixId ? input.mixes[course.mixId] : undefined}
+                findings={evaluation.findings.filter((finding) => finding.courseId === course.id)}
+                open={open === course.id}
+                lit={lit === course.id}
+                onToggle={() => onOpen(open === course.id ? null : course.id)}
+                onLight={(on) => onLight(on ? course.id : null)}
                 {...(dispatch
                   ? {
                       onChange: (change) => dispatch({ kind: 'change', id: course.id, change }),
@@ -61,7 +68,9 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
         </li>
       ))}
       {work.courses.length === 0 && (
-        <li className="px-4 py-6 text-pencil">No courses yet. A floor begins at the slab: add its preparation first, then what goes on it.</li>
+        <li className="px-4 py-6 text-pencil">
+          No courses yet. A floor begins at the slab: add its preparation first, then what goes on it.
+        </li>
       )}
       {dispatch && (
         <li className="no-print px-4 py-3">
@@ -81,13 +90,18 @@ export function CourseList({ view, list, lit, onLight, open, onOpen }: CourseLis
 /** The problems of one course, by its own fields. */
 function fieldsOf(fields: Record<string, string>, index: number): Record<string, string> {
   const start = `courses.${index}.`
-  return Object.fromEntries(Object.entries(fields).flatMap(([name, says]) => (name.startsWith(start) ? [[name.slice(start.length), says]] : [])))
+  return Object.fromEntries(
+    Object.entries(fields).flatMap(([name, says]) => (name.startsWith(start) ? [[name.slice(start.length), says]] : [])),
+  )
 }
 
 function DragHandle({ id, onDrag }: { id: string; onDrag: (id: string | null) => void }) {
   return (
     <span
-      draggable aria-hidden="true" title="Drag to move" className="no-print hidden w-4 shrink-0 cursor-grab items-center justify-center text-pencil select-none lg:flex"
+      draggable
+      aria-hidden="true"
+      title="Drag to move"
+      className="no-print hidden w-4 shrink-0 cursor-grab items-center justify-center text-pencil select-none lg:flex"
       onDragStart={(event) => {
         event.dataTransfer.effectAllowed = 'move'
         event.dataTransfer.setData('text/plain', id)
@@ -125,7 +139,8 @@ function CoursePanel({ view, index, fields, onOpen }: CoursePanelProps) {
   const course = work.courses[index]
   if (!course) return null
   const result = evaluation.courses.find((one) => one.courseId === course.id)
-  const edit = (change: Parameters<typeof CourseEditor>[0]['onChange'] extends (change: infer C) => void ? C : never) => dispatch?.({ kind: 'change', id: course.id, change })
+  const edit = (change: Parameters<typeof CourseEditor>[0]['onChange'] extends (change: infer C) => void ? C : never) =>
+    dispatch?.({ kind: 'change', id: course.id, change })
   return (
     <div id={`panel-${course.id}`} className="border-t border-rule bg-paper/60 px-4 py-4 lg:pl-14">
       {dispatch && (
@@ -147,7 +162,11 @@ function CourseActions({ view, index, onOpen }: Pick<CoursePanelProps, 'view' | 
   const { id } = course
   return (
     <div className="no-print my-4 flex flex-wrap gap-2 border-b border-rule pb-4">
-      <Button disabled={index === work.courses.length - 1} onClick={() => dispatch({ kind: 'move', id, to: index + 1 })} title="Alt and arrow up">
+      <Button
+        disabled={index === work.courses.length - 1}
+        onClick={() => dispatch({ kind: 'move', id, to: index + 1 })}
+        title="Alt and arrow up"
+      >
         Move up
       </Button>
       <Button disabled={index === 0} onClick={() => dispatch({ kind: 'move', id, to: index - 1 })} title="Alt and arrow down">
@@ -172,7 +191,8 @@ function CourseActions({ view, index, onOpen }: Pick<CoursePanelProps, 'view' | 
         Add one beneath
       </Button>
       <Button
-        look="stop" className="ml-auto"
+        look="stop"
+        className="ml-auto"
         onClick={() => {
           dispatch({ kind: 'remove', id })
           onOpen(null)

@@ -36,9 +36,13 @@ export function CourseRow(props: CourseRowProps) {
   return (
     // eslint-disable-next-line jsx-a11y/no-static-element-interactions -- a key more for what the panel's buttons do, from anywhere in the row
     <div
-      data-course={course.id} id={`course-${course.id}`}
+      data-course={course.id}
+      id={`course-${course.id}`}
       className={`grid grid-cols-[34px_minmax(0,1fr)_auto] items-center gap-x-2 gap-y-1 px-2 py-2 sm:px-3 lg:grid-cols-[34px_minmax(0,1fr)_134px_92px_118px_34px] lg:py-3 ${lit ? 'bg-resin-wash' : ''}`}
-      onPointerEnter={() => onLight(true)} onPointerLeave={() => onLight(false)} onFocus={() => onLight(true)} onBlur={() => onLight(false)}
+      onPointerEnter={() => onLight(true)}
+      onPointerLeave={() => onLight(false)}
+      onFocus={() => onLight(true)}
+      onBlur={() => onLight(false)}
       onKeyDown={(event) => {
         if (!event.altKey || !onMove || (event.key !== 'ArrowUp' && event.key !== 'ArrowDown')) return
         event.preventDefault()
@@ -47,7 +51,13 @@ export function CourseRow(props: CourseRowProps) {
     >
       <span className="self-start pt-0.5 text-right text-pencil lg:self-center lg:pt-0">{number}</span>
       <div className="min-w-0">
-        <button type="button" aria-expanded={open} aria-controls={`panel-${course.id}`} onClick={onToggle} className="text-left font-semibold break-words hover:underline">
+        <button
+          type="button"
+          aria-expanded={open}
+          aria-controls={`panel-${course.id}`}
+          onClick={onToggle}
+          className="text-left font-semibold break-words hover:underline"
+        >
           {course.title}
         </button>
         <p className="text-small text-pencil">{described(course, mix)}</p>
@@ -60,7 +70,11 @@ export function CourseRow(props: CourseRowProps) {
         )}
       </div>
       <button
-        type="button" onClick={onToggle} tabIndex={-1} aria-hidden="true" className="no-print min-h-8 min-w-8 self-start text-pencil hover:text-ink lg:order-last lg:self-center"
+        type="button"
+        onClick={onToggle}
+        tabIndex={-1}
+        aria-hidden="true"
+        className="no-print min-h-8 min-w-8 self-start text-pencil hover:text-ink lg:order-last lg:self-center"
       >
         {open ? '▴' : '▾'}
       </button>
@@ -79,10 +93,14 @@ function RowFigures({ course, result, onChange }: CourseRowProps) {
   }
   return (
     <div className="col-span-2 col-start-2 flex flex-wrap items-start justify-between gap-x-4 gap-y-1 lg:contents">
-      <div className="lg:text-right">{onChange ? <CourseInputs course={course} result={result} onChange={onChange} /> : <FixedFilm result={result} />}</div>
+      <div className="lg:text-right">
+        {onChange ? <CourseInputs course={course} result={result} onChange={onChange} /> : <FixedFilm result={result} />}
+      </div>
       <div className="flex flex-col items-end gap-1 sm:contents">
         <Labelled label="pot life">{result && <FigureView figure={result.potLife} />}</Labelled>
-        <Labelled label="window for the next">{result && <FigureView figure={result.window} text={formatWindowFigure(result.window)} />}</Labelled>
+        <Labelled label="window for the next">
+          {result && <FigureView figure={result.window} text={formatWindowFigure(result.window)} />}
+        </Labelled>
       </div>
     </div>
   )
@@ -113,7 +131,9 @@ function Labelled({ label, children }: { label: string; children: React.ReactNod
 
 /** What lies under the title: the mix, the method, or what is still to be chosen. */
 function described(course: Course, mix: MixFacts | undefined): string {
-  const sand = [course.filler && 'filled', course.broadcast && (course.broadcast.toRefusal ? 'broadcast to refusal' : 'broadcast')].filter(Boolean)
+  const sand = [course.filler && 'filled', course.broadcast && (course.broadcast.toRefusal ? 'broadcast to refusal' : 'broadcast')].filter(
+    Boolean,
+  )
   if (isDry(course)) return course.preparation?.method ?? `${stageNames[course.stage].name}: no method chosen`
   if (course.mixId && !mix) return 'Loading the mix …'
   return [mix ? `${mix.name}, ${mix.maker}` : 'no mix chosen', ...sand].join(', ')

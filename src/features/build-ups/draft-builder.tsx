@@ -24,9 +24,19 @@ export function DraftBuilder({ buildUp }: { buildUp: BuildUp }) {
   const fields = state.kind === 'failed' ? state.fields : {}
   return (
     <BuilderFrame
-      buildUp={buildUp} evaluation={evaluation} conditions={work.conditions} titles={Object.fromEntries(work.courses.map(({ id, title }) => [id, title]))}
-      beforeLeaving={autosave.flush} version={autosave.version}
-      marks={<SaveMark state={state} titles={work.courses.map(({ title }) => title)} onRetry={() => (state.kind === 'conflict' ? setDeciding(true) : void autosave.flush())} />}
+      buildUp={buildUp}
+      evaluation={evaluation}
+      conditions={work.conditions}
+      titles={Object.fromEntries(work.courses.map(({ id, title }) => [id, title]))}
+      beforeLeaving={autosave.flush}
+      version={autosave.version}
+      marks={
+        <SaveMark
+          state={state}
+          titles={work.courses.map(({ title }) => title)}
+          onRetry={() => (state.kind === 'conflict' ? setDeciding(true) : void autosave.flush())}
+        />
+      }
       actions={
         <>
           <Button disabled={history.past.length === 0} onClick={() => dispatch({ kind: 'undo' })} title="Control and z">
@@ -59,7 +69,9 @@ function Conflict({ buildUp, draft, open, onClose }: { buildUp: BuildUp; draft: 
   const { number } = buildUp.opened
   return (
     <ConflictDialog
-      open={open && state.kind === 'conflict'} onClose={onClose} says={state.kind === 'conflict' ? state.says : ''}
+      open={open && state.kind === 'conflict'}
+      onClose={onClose}
+      says={state.kind === 'conflict' ? state.says : ''}
       loadTheirs={async () => {
         const theirs = await client.query({ ...buildUpOptions(buildUp.id, number), staleTime: 0 })
         client.setQueryData(buildUpOptions(buildUp.id, undefined).queryKey, (now) => (now?.opened.number === number ? theirs : now))
@@ -91,7 +103,10 @@ function useUndoKeys(dispatch: Draft['dispatch']) {
 
 /** Leaving saves first; only what cannot be saved is asked about. */
 function LeavingPrompt({ dirty, flush }: { dirty: boolean; flush: () => Promise<boolean> }) {
-  const blocker = useBlocker(({ currentLocation, nextLocation }) => dirty && currentLocation.pathname + currentLocation.search !== nextLocation.pathname + nextLocation.search)
+  const blocker = useBlocker(
+    ({ currentLocation, nextLocation }) =>
+      dirty && currentLocation.pathname + currentLocation.search !== nextLocation.pathname + nextLocation.search,
+  )
   const [asking, setAsking] = useState(false)
   useEffect(() => {
     if (blocker.state !== 'blocked') return

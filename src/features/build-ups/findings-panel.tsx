@@ -47,7 +47,9 @@ export const FindingsPanel = memo(function FindingsPanel({ findings, ...rest }: 
           </ul>
         </Fold>
       )}
-      <p className="mt-3 text-small text-pencil">Met means met against the sheets loaded here. The sheet, the label, the law and the competent person decide.</p>
+      <p className="mt-3 text-small text-pencil">
+        Met means met against the sheets loaded here. The sheet, the label, the law and the competent person decide.
+      </p>
     </section>
   )
 })
@@ -64,7 +66,8 @@ type GroupProps = { group: readonly Finding[] } & Omit<FindingsPanelProps, 'find
 function FindingGroup({ group, ...rest }: GroupProps) {
   const [first] = group
   if (!first) return null
-  if (group.length <= 2 && first.status !== 'met') return group.map((finding, index) => <FindingItem key={`${finding.courseId} ${index}`} finding={finding} {...rest} />)
+  if (group.length <= 2 && first.status !== 'met')
+    return group.map((finding, index) => <FindingItem key={`${finding.courseId} ${index}`} finding={finding} {...rest} />)
   if (group.length === 1) return <FindingItem finding={first} {...rest} />
   return (
     <li className="-mx-2 mb-1 px-2 py-1">
@@ -95,7 +98,11 @@ function FindingItem({ finding, titles, lit, onLight, reasons }: { finding: Find
   const reason = reasons[`${finding.checkId}:${courseId ?? 'floor'}`]
   return (
     <li
-      className={`-mx-2 mb-1 px-2 py-1 ${courseId !== null && courseId === lit ? 'bg-resin-wash' : ''}`} onPointerEnter={() => onLight(courseId)} onPointerLeave={() => onLight(null)} onFocus={() => onLight(courseId)} onBlur={() => onLight(null)}
+      className={`-mx-2 mb-1 px-2 py-1 ${courseId !== null && courseId === lit ? 'bg-resin-wash' : ''}`}
+      onPointerEnter={() => onLight(courseId)}
+      onPointerLeave={() => onLight(null)}
+      onFocus={() => onLight(courseId)}
+      onBlur={() => onLight(null)}
     >
       <Fold
         summaryClass="grid grid-cols-[20px_1fr]"
@@ -103,7 +110,9 @@ function FindingItem({ finding, titles, lit, onLight, reasons }: { finding: Find
           <>
             <StatusMark status={finding.status} wordless />
             <span>
-              <strong className="font-semibold">{courseId === null ? finding.title : `${titles[courseId] ?? ''}: ${lowered(finding.title)}`}</strong>
+              <strong className="font-semibold">
+                {courseId === null ? finding.title : `${titles[courseId] ?? ''}: ${lowered(finding.title)}`}
+              </strong>
               <span className="block">{finding.says}</span>
             </span>
           </>

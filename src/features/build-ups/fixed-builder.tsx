@@ -15,8 +15,12 @@ export function FixedBuilder({ buildUp }: { buildUp: BuildUp }) {
   const work = { courses: input.courses, conditions: input.conditions }
   return (
     <BuilderFrame
-      buildUp={buildUp} evaluation={evaluation} conditions={input.conditions} titles={Object.fromEntries(work.courses.map(({ id, title }) => [id, title]))}
-      beforeLeaving={saved} version={() => opened.version}
+      buildUp={buildUp}
+      evaluation={evaluation}
+      conditions={input.conditions}
+      titles={Object.fromEntries(work.courses.map(({ id, title }) => [id, title]))}
+      beforeLeaving={saved}
+      version={() => opened.version}
     >
       <ConditionsSummary conditions={input.conditions} />
       <BuilderBody view={{ work, input, evaluation, dispatch: null, fields: {} }} version={opened} reasons={opened.releaseReasons} />

@@ -24,8 +24,14 @@ export function Hazards({ hazards, title = 'Hazards' }: { hazards: HazardSummary
           </li>
         ))}
       </ul>
-      {notStated.length > 0 && <p className="mt-1 text-pencil">No hazard statements on any loaded safety sheet for {notStated.join(', ')}: their hazards are not known, not absent.</p>}
-      {statements.length === 0 && notStated.length === 0 && <p className="text-pencil">No hazard statements on the loaded safety sheets.</p>}
+      {notStated.length > 0 && (
+        <p className="mt-1 text-pencil">
+          No hazard statements on any loaded safety sheet for {notStated.join(', ')}: their hazards are not known, not absent.
+        </p>
+      )}
+      {statements.length === 0 && notStated.length === 0 && (
+        <p className="text-pencil">No hazard statements on the loaded safety sheets.</p>
+      )}
       <Protection hazards={hazards} />
     </div>
   )

@@ -31,9 +31,23 @@ export function NameForm<S extends z.ZodType>({ schema, rest, name, note, send, 
   return (
     <form onSubmit={(event) => void onSubmit(event)} noValidate>
       <ProblemSummary problems={problems} />
-      <TextField label="Name" name="name" value={values.name} error={problems.fields['name']} onChange={(event) => setValues({ ...values, name: event.target.value })} className="mb-3" />
+      <TextField
+        label="Name"
+        name="name"
+        value={values.name}
+        error={problems.fields['name']}
+        onChange={(event) => setValues({ ...values, name: event.target.value })}
+        className="mb-3"
+      />
       {note !== undefined && (
-        <AreaField label="Note" name="note" value={values.note} error={problems.fields['note']} onChange={(event) => setValues({ ...values, note: event.target.value })} className="mb-3" />
+        <AreaField
+          label="Note"
+          name="note"
+          value={values.note}
+          error={problems.fields['note']}
+          onChange={(event) => setValues({ ...values, note: event.target.value })}
+          className="mb-3"
+        />
       )}
       <Button type="submit" look="primary" busy={busy}>
         {verb}

@@ -32,14 +32,30 @@ export function NewBuildUpForm({ onMade }: { onMade: (buildUp: BuildUp) => void 
   return (
     <form onSubmit={(event) => void onSubmit(event)} noValidate>
       <ProblemSummary problems={problems} />
-      <TextField label="Name" name="name" value={name} error={problems.fields['name']} help="What people will look for: the use, the kind, the thickness." onChange={(event) => setName(event.target.value)} className="mb-4" />
+      <TextField
+        label="Name"
+        name="name"
+        value={name}
+        error={problems.fields['name']}
+        help="What people will look for: the use, the kind, the thickness."
+        onChange={(event) => setName(event.target.value)}
+        className="mb-4"
+      />
       <fieldset className="mb-4">
         <legend className="mb-1 font-semibold">Begin with</legend>
         {skeletons.map(({ id, name: words, stages }) => (
           <label key={id} className="flex min-h-9 items-baseline gap-2 py-1">
-            <input type="radio" name="skeleton" value={id} checked={chosen === id} onChange={() => setChosen(id)} className="accent-resin" />
+            <input
+              type="radio"
+              name="skeleton"
+              value={id}
+              checked={chosen === id}
+              onChange={() => setChosen(id)}
+              className="accent-resin"
+            />
             <span>
-              {words} <span className="text-small text-pencil">{stages.map((stage) => stageNames[stage].name.toLowerCase()).join(', ')}</span>
+              {words}{' '}
+              <span className="text-small text-pencil">{stages.map((stage) => stageNames[stage].name.toLowerCase()).join(', ')}</span>
             </span>
           </label>
         ))}

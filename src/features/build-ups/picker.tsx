@@ -30,7 +30,10 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
   const [text, setText] = useState<string | null>(null)
   const [place, setPlace] = useState(0)
   const fuse = useMemo(() => new Fuse(choices, { keys: ['name', 'detail'], threshold: 0.3, ignoreLocation: true }), [choices])
-  const found = useMemo(() => (text?.trim() ? fuse.search(text, { limit: shownAtMost }).map(({ item }) => item) : choices.slice(0, shownAtMost)), [fuse, choices, text])
+  const found = useMemo(
+    () => (text?.trim() ? fuse.search(text, { limit: shownAtMost }).map(({ item }) => item) : choices.slice(0, shownAtMost)),
+    [fuse, choices, text],
+  )
   const open = text !== null
   const close = () => {
     setText(null)
@@ -61,10 +64,21 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
       </label>
       <div className="flex gap-1">
         <input
-          id={id} role="combobox" aria-expanded={open} aria-controls={`${id}-list`} aria-autocomplete="list" autoComplete="off"
-          aria-activedescendant={open && found[place] ? `${id}-${place}` : undefined} aria-describedby={help ? `${id}-help` : undefined}
-          className="min-h-9 w-full border border-pencil bg-card px-2 py-1" placeholder={none} value={text ?? chosen?.name ?? ''}
-          onFocus={(event) => event.target.select()} onClick={() => setText((now) => now ?? '')} onBlur={close} onKeyDown={onKeyDown}
+          id={id}
+          role="combobox"
+          aria-expanded={open}
+          aria-controls={`${id}-list`}
+          aria-autocomplete="list"
+          autoComplete="off"
+          aria-activedescendant={open && found[place] ? `${id}-${place}` : undefined}
+          aria-describedby={help ? `${id}-help` : undefined}
+          className="min-h-9 w-full border border-pencil bg-card px-2 py-1"
+          placeholder={none}
+          value={text ?? chosen?.name ?? ''}
+          onFocus={(event) => event.target.select()}
+          onClick={() => setText((now) => now ?? '')}
+          onBlur={close}
+          onKeyDown={onKeyDown}
           onChange={(event) => {
             setText(event.target.value)
             setPlace(0)
@@ -72,7 +86,12 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
           }}
         />
         {chosen && (
-          <button type="button" className="min-h-9 min-w-9 border border-rule text-pencil hover:text-ink" aria-label={`Choose no ${label.toLowerCase()}`} onClick={() => choose(null)}>
+          <button
+            type="button"
+            className="min-h-9 min-w-9 border border-rule text-pencil hover:text-ink"
+            aria-label={`Choose no ${label.toLowerCase()}`}
+            onClick={() => choose(null)}
+          >
             ✕
           </button>
         )}
@@ -82,12 +101,24 @@ export function Picker({ label, choices, chosen, onChoose, onType, help, none = 
           {help}
         </p>
       )}
-      <ul id={`${id}-list`} role="listbox" aria-label={label} hidden={!open} className="absolute z-20 mt-1 max-h-72 w-full min-w-64 overflow-y-auto border border-ink bg-card">
+      <ul
+        id={`${id}-list`}
+        role="listbox"
+        aria-label={label}
+        hidden={!open}
+        className="absolute z-20 mt-1 max-h-72 w-full min-w-64 overflow-y-auto border border-ink bg-card"
+      >
         {found.map((choice, index) => (
           // eslint-disable-next-line jsx-a11y/click-events-have-key-events -- the field above holds the focus and takes the keys
           <li
-            key={choice.id} id={`${id}-${index}`} role="option" aria-selected={index === place} className={`flex cursor-pointer items-center gap-2 px-2 py-1.5 ${index === place ? 'bg-resin-wash' : ''}`}
-            onPointerDown={(event) => event.preventDefault()} onPointerEnter={() => setPlace(index)} onClick={() => choose(choice)}
+            key={choice.id}
+            id={`${id}-${index}`}
+            role="option"
+            aria-selected={index === place}
+            className={`flex cursor-pointer items-center gap-2 px-2 py-1.5 ${index === place ? 'bg-resin-wash' : ''}`}
+            onPointerDown={(event) => event.preventDefault()}
+            onPointerEnter={() => setPlace(index)}
+            onClick={() => choose(choice)}
           >
             {choice.color && <Swatch color={choice.color} />}
             <span>

@@ -15,7 +15,11 @@ const keys = {
 export function useBuildUps(query: { q: string; sort: string; cursor: string | undefined; status: string }) {
   return useQuery({
     queryKey: [...keys.list, query],
-    queryFn: ({ signal }) => call(wire.listBuildUps, { query: { ...query, status: query.status || undefined } as z.input<typeof wire.listBuildUps.query>, signal }),
+    queryFn: ({ signal }) =>
+      call(wire.listBuildUps, {
+        query: { ...query, status: query.status || undefined } as z.input<typeof wire.listBuildUps.query>,
+        signal,
+      }),
     placeholderData: keepPreviousData,
   })
 }
@@ -72,13 +76,17 @@ export function useBuildUpChanges() {
     await client.invalidateQueries({ queryKey: keys.list })
     return head
   }
-  const copy = async (buildUpId: string, body: z.input<typeof wire.copyBuildUp.body>) => keep(await call(wire.copyBuildUp, { params: { buildUpId }, body }))
+  const copy = async (buildUpId: string, body: z.input<typeof wire.copyBuildUp.body>) =>
+    keep(await call(wire.copyBuildUp, { params: { buildUpId }, body }))
   const addDraft = useMutation({
-    mutationFn: async ({ buildUpId, ...body }: { buildUpId: string } & z.input<typeof wire.addDraft.body>) => keep(await call(wire.addDraft, { params: { buildUpId }, body })),
+    mutationFn: async ({ buildUpId, ...body }: { buildUpId: string } & z.input<typeof wire.addDraft.body>) =>
+      keep(await call(wire.addDraft, { params: { buildUpId }, body })),
   })
-  const release = async ({ buildUpId, number }: Place, body: z.input<typeof wire.releaseVersion.body>) => keep(await call(wire.releaseVersion, { params: { buildUpId, number }, body }))
+  const release = async ({ buildUpId, number }: Place, body: z.input<typeof wire.releaseVersion.body>) =>
+    keep(await call(wire.releaseVersion, { params: { buildUpId, number }, body }))
   const withdraw = useMutation({
-    mutationFn: async ({ buildUpId, number, version }: Place & { version: number }) => keep(await call(wire.withdrawVersion, { params: { buildUpId, number }, body: { version } })),
+    mutationFn: async ({ buildUpId, number, version }: Place & { version: number }) =>
+      keep(await call(wire.withdrawVersion, { params: { buildUpId, number }, body: { version } })),
   })
   return { add, rename, copy, addDraft, release, withdraw }
 }

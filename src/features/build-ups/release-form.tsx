@@ -17,15 +17,26 @@ interface ReleaseFormProps {
 /** Before a release: what stops it, and a reason for each caution and unknown. The server reckons again and decides. */
 export function ReleaseForm({ findings, titles, release }: ReleaseFormProps) {
   const { stops } = releaseObstacles(findings)
-  const wanted = releaseObstacles(findings).unreasoned.filter((finding, index, all) => all.findIndex((one) => reasonKey(one) === reasonKey(finding)) === index)
+  const wanted = releaseObstacles(findings).unreasoned.filter(
+    (finding, index, all) => all.findIndex((one) => reasonKey(one) === reasonKey(finding)) === index,
+  )
   const [reasons, setReasons] = useState<Record<string, string>>({})
-  const [problems, setProblems] = useState<{ fields: Record<string, string>; summary: string | undefined }>({ fields: {}, summary: undefined })
+  const [problems, setProblems] = useState<{ fields: Record<string, string>; summary: string | undefined }>({
+    fields: {},
+    summary: undefined,
+  })
   const [busy, setBusy] = useState(false)
   const nameOf = (finding: Finding) => (finding.courseId ? (titles[finding.courseId] ?? '') : 'the whole floor')
   const submit = async (event: React.SubmitEvent) => {
     event.preventDefault()
     const { unreasoned } = releaseObstacles(findings, reasons)
-    if (unreasoned.length > 0) return setProblems({ fields: Object.fromEntries(unreasoned.map((finding) => [reasonKey(finding), `A reason is needed: ${finding.title}, ${nameOf(finding)}.`])), summary: undefined })
+    if (unreasoned.length > 0)
+      return setProblems({
+        fields: Object.fromEntries(
+          unreasoned.map((finding) => [reasonKey(finding), `A reason is needed: ${finding.title}, ${nameOf(finding)}.`]),
+        ),
+        summary: undefined,
+      })
     setBusy(true)
     try {
       await release(reasons)
@@ -42,7 +53,8 @@ export function ReleaseForm({ findings, titles, release }: ReleaseFormProps) {
         <ul className="flex flex-col gap-2">
           {stops.map((finding) => (
             <li key={`${reasonKey(finding)} ${finding.says}`}>
-              <StatusMark status="stop" /> <strong className="font-semibold">{finding.title}</strong>, {nameOf(finding)}. {finding.says} {finding.todo}
+              <StatusMark status="stop" /> <strong className="font-semibold">{finding.title}</strong>, {nameOf(finding)}. {finding.says}{' '}
+              {finding.todo}
             </li>
           ))}
         </ul>
@@ -61,18 +73,29 @@ export function ReleaseForm({ findings, titles, release }: ReleaseFormProps) {
           <legend className="sr-only">{group[0]?.title}</legend>
           {group.map((finding) => (
             <AreaField
-              key={reasonKey(finding)} name={reasonKey(finding)} rows={2} className="mb-3" label={`${finding.title}, ${nameOf(finding)}`} error={problems.fields[reasonKey(finding)]}
+              key={reasonKey(finding)}
+              name={reasonKey(finding)}
+              rows={2}
+              className="mb-3"
+              label={`${finding.title}, ${nameOf(finding)}`}
+              error={problems.fields[reasonKey(finding)]}
               help={
                 <>
                   <StatusMark status={finding.status} /> {finding.says}
                 </>
               }
-              value={reasons[reasonKey(finding)] ?? ''} onChange={(event) => setReasons((now) => ({ ...now, [reasonKey(finding)]: event.target.value }))}
+              value={reasons[reasonKey(finding)] ?? ''}
+              onChange={(event) => setReasons((now) => ({ ...now, [reasonKey(finding)]: event.target.value }))}
             />
           ))}
           {group.length > 1 && (
             <Button
-              onClick={() => setReasons((now) => ({ ...now, ...Object.fromEntries(group.map((finding) => [reasonKey(finding), now[reasonKey(group[0] as Finding)] ?? ''])) }))}
+              onClick={() =>
+                setReasons((now) => ({
+                  ...now,
+                  ...Object.fromEntries(group.map((finding) => [reasonKey(finding), now[reasonKey(group[0] as Finding)] ?? ''])),
+                }))
+              }
             >
               Give the first reason for all {group.length}
             </Button>

@@ -37,8 +37,14 @@ export function FillerFields({ course, nameOf, error, onChange }: SandFieldsProp
     <>
       <AggregatePicker label="Sand in the pail" chosen={chosen} onChoose={choose} />
       <QuantityField
-        label="Sand per mixed resin" name={`loading-${course.id}`} units={['lb/gal', 'kg/L'] as const} disabled={!chosen} help={pending ? waiting : ''}
-        value={filler ? (filler.loading as Quantity<'lb/gal' | 'kg/L'>) : null} error={error} onChange={amount}
+        label="Sand per mixed resin"
+        name={`loading-${course.id}`}
+        units={['lb/gal', 'kg/L'] as const}
+        disabled={!chosen}
+        help={pending ? waiting : ''}
+        value={filler ? (filler.loading as Quantity<'lb/gal' | 'kg/L'>) : null}
+        error={error}
+        onChange={amount}
       />
     </>
   )
@@ -62,12 +68,21 @@ export function BroadcastFields({ course, nameOf, error, onChange }: SandFieldsP
       <AggregatePicker label="Sand broadcast" chosen={chosen} onChoose={choose} />
       <div>
         <QuantityField
-          label="Broadcast rate" name={`rate-${course.id}`} units={['lb/ft²', 'kg/m²'] as const} disabled={!chosen} help={pending ? waiting : ''}
-          value={broadcast ? (broadcast.rate as Quantity<'lb/ft²' | 'kg/m²'>) : null} error={error} onChange={amount}
+          label="Broadcast rate"
+          name={`rate-${course.id}`}
+          units={['lb/ft²', 'kg/m²'] as const}
+          disabled={!chosen}
+          help={pending ? waiting : ''}
+          value={broadcast ? (broadcast.rate as Quantity<'lb/ft²' | 'kg/m²'>) : null}
+          error={error}
+          onChange={amount}
         />
         <label className="mt-2 flex items-center gap-2">
           <input
-            type="checkbox" className="size-5 accent-resin" disabled={!broadcast} checked={broadcast?.toRefusal ?? false}
+            type="checkbox"
+            className="size-5 accent-resin"
+            disabled={!broadcast}
+            checked={broadcast?.toRefusal ?? false}
             onChange={(event) => broadcast && onChange({ broadcast: { ...broadcast, toRefusal: event.target.checked } })}
           />
           To refusal

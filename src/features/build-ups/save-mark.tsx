@@ -34,5 +34,7 @@ function whatFailed({ says, fields }: { says: string; fields: Record<string, str
   const [first] = Object.entries(fields)
   if (!first) return says
   const index = /^courses\.(\d+)\./.exec(first[0])?.[1]
-  return index === undefined ? first[1] : `course ${Number(index) + 1}${titles[Number(index)] ? `, ${titles[Number(index)]}` : ''}: ${first[1]}`
+  return index === undefined
+    ? first[1]
+    : `course ${Number(index) + 1}${titles[Number(index)] ? `, ${titles[Number(index)]}` : ''}: ${first[1]}`
 }

@@ -33,8 +33,19 @@ function useMeasures(column: HTMLElement | null, rows: RefObject<HTMLElement | n
       const box = column.getBoundingClientRect()
       const beside = list.getBoundingClientRect().left >= box.right - 2
       const heads = [...list.querySelectorAll<HTMLElement>('[data-course]')]
-      const anchors = beside ? Object.fromEntries(heads.map((head) => [head.dataset['course'] ?? '', Math.round(head.getBoundingClientRect().top + head.offsetHeight / 2 - box.top)])) : {}
-      const next = { width: Math.floor(box.width), height: beside ? Math.max(leastHeight, Math.round(list.getBoundingClientRect().height)) : leastHeight - 60, anchors }
+      const anchors = beside
+        ? Object.fromEntries(
+            heads.map((head) => [
+              head.dataset['course'] ?? '',
+              Math.round(head.getBoundingClientRect().top + head.offsetHeight / 2 - box.top),
+            ]),
+          )
+        : {}
+      const next = {
+        width: Math.floor(box.width),
+        height: beside ? Math.max(leastHeight, Math.round(list.getBoundingClientRect().height)) : leastHeight - 60,
+        anchors,
+      }
       setMeasures((now) => (now && sameAs(now, next) ? now : next))
     }
     const observer = new ResizeObserver(measure)
@@ -61,7 +72,9 @@ export const SectionColumn = memo(function SectionColumn({ layers, rows, ...poin
   const unit = drawingUnit(system, layers)
   const beside = measures !== null && Object.keys(measures.anchors).length > 0
   const model = useMemo(
-    () => measures && sectionOf(layers, { width: measures.width, height: measures.height, unit, ...(beside ? { anchors: measures.anchors } : {}) }),
+    () =>
+      measures &&
+      sectionOf(layers, { width: measures.width, height: measures.height, unit, ...(beside ? { anchors: measures.anchors } : {}) }),
     [layers, measures, unit, beside],
   )
   return (
@@ -77,7 +90,14 @@ export const PrintedSection = memo(function PrintedSection({ layers }: { layers:
   const { system } = useUnitSystem()
   return (
     <div className="mt-4 hidden break-inside-avoid print:block">
-      <SectionFigure layers={layers} width={680} height={standaloneHeight(layers.length)} unit={drawingUnit(system, layers)} standalone className="h-auto max-w-full" />
+      <SectionFigure
+        layers={layers}
+        width={680}
+        height={standaloneHeight(layers.length)}
+        unit={drawingUnit(system, layers)}
+        standalone
+        className="h-auto max-w-full"
+      />
     </div>
   )
 })

@@ -47,7 +47,8 @@ export const TimelineCard = memo(function TimelineCard({ work, input, evaluation
           {width > 0 && <TimelineFigure rows={rows} width={width} narrow={width < 620} lit={lit} onLight={onLight} />}
         </div>
         <p className="mt-1 text-small text-pencil">
-          Hours from the start of the first course, at the temperatures above. Bar: working time. Bracket: window for the next course, from the sheets’ own tables. Marks: when feet and wheels may return.
+          Hours from the start of the first course, at the temperatures above. Bar: working time. Bracket: window for the next course, from
+          the sheets’ own tables. Marks: when feet and wheels may return.
         </p>
       </div>
     </Card>

@@ -12,7 +12,12 @@ export function TotalsBlock({ totals, version }: { totals: Evaluation['totals'];
     ['Dew point', <FigureView key="d" figure={totals.dewPoint} />],
     ['Version', `${version.number}, ${version.status}`],
     ['Released by', version.releasedByName ?? 'not released'],
-    ['Released on', version.releasedAt ? new Date(version.releasedAt).toLocaleDateString('en-US', { day: 'numeric', month: 'short', year: 'numeric' }) : 'not released'],
+    [
+      'Released on',
+      version.releasedAt
+        ? new Date(version.releasedAt).toLocaleDateString('en-US', { day: 'numeric', month: 'short', year: 'numeric' })
+        : 'not released',
+    ],
   ]
   return (
     <dl className="mt-4 grid break-inside-avoid grid-cols-2 border-t border-ink">

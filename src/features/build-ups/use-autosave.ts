@@ -45,7 +45,11 @@ export function useAutosave({ work, loaded, save }: AutosaveOptions) {
           const attempt = latest.current.work
           const parsed = wire.saveDraft.body.safeParse({ ...attempt, version: kept.current.version })
           if (!parsed.success) {
-            setState({ kind: 'failed', says: 'Something entered is not right.', fields: Object.fromEntries(parsed.error.issues.map((issue) => [issue.path.join('.'), issue.message])) })
+            setState({
+              kind: 'failed',
+              says: 'Something entered is not right.',
+              fields: Object.fromEntries(parsed.error.issues.map((issue) => [issue.path.join('.'), issue.message])),
+            })
             return false
           }
           setState({ kind: 'saving' })

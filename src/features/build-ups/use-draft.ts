@@ -13,10 +13,17 @@ const savedOf = (buildUp: BuildUp) => ({ work: workOf(buildUp), version: buildUp
 function useInput(buildUp: BuildUp, work: Work): { input: EvaluationInput; fetching: boolean } {
   const { input: loaded } = buildUp.opened
   const mixes = work.courses.flatMap(({ mixId }) => (mixId && !loaded.mixes[mixId] ? [mixId] : []))
-  const products = work.courses.flatMap(({ filler, broadcast }) => [filler, broadcast].flatMap((sand) => (sand && !loaded.products[sand.productId] ? [sand.productId] : [])))
+  const products = work.courses.flatMap(({ filler, broadcast }) =>
+    [filler, broadcast].flatMap((sand) => (sand && !loaded.products[sand.productId] ? [sand.productId] : [])),
+  )
   const more = useMoreFacts({ mixes: [...new Set(mixes)], products: [...new Set(products)] })
   const input = useMemo(
-    () => ({ ...loaded, ...work, mixes: { ...more.data?.mixes, ...loaded.mixes }, products: { ...more.data?.products, ...loaded.products } }),
+    () => ({
+      ...loaded,
+      ...work,
+      mixes: { ...more.data?.mixes, ...loaded.mixes },
+      products: { ...more.data?.products, ...loaded.products },
+    }),
     [loaded, work, more.data],
   )
   return { input, fetching: more.isFetching }

@@ -4,7 +4,10 @@ import { type Step, historyOf, reduce } from './work.ts'
 
 const begin = historyOf({ courses: [newCourse('prep', 'a'), newCourse('slurry', 'b'), newCourse('top', 'c')], conditions: firstConditions })
 const after = (...steps: Step[]) => steps.reduce(reduce, begin)
-const order = (...steps: Step[]) => after(...steps).present.courses.map(({ id }) => id).join('')
+const order = (...steps: Step[]) =>
+  after(...steps)
+    .present.courses.map(({ id }) => id)
+    .join('')
 
 describe('reduce', () => {
   it('adds, duplicates, moves and removes courses, bottom up', () => {
@@ -20,7 +23,11 @@ describe('reduce', () => {
     expect(after({ kind: 'undo' })).toBe(begin)
   })
   it('counts typing in one field as one step', () => {
-    const typed = after({ kind: 'change', id: 'c', change: { title: 'T' } }, { kind: 'change', id: 'c', change: { title: 'To' } }, { kind: 'change', id: 'b', change: { note: 'x' } })
+    const typed = after(
+      { kind: 'change', id: 'c', change: { title: 'T' } },
+      { kind: 'change', id: 'c', change: { title: 'To' } },
+      { kind: 'change', id: 'b', change: { note: 'x' } },
+    )
     expect(typed.past).toHaveLength(2)
     expect(reduce(reduce(typed, { kind: 'undo' }), { kind: 'undo' }).present.courses[2]?.title).toBe('Top coat')
   })

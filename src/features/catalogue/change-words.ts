@@ -15,23 +15,39 @@ export interface ChangeWords {
   lines: { label: string; from: string | null; to: string | null }[]
 }
 
-const fieldNames: Record<string, string> = { name: 'Name', maker: 'Maker', kind: 'Kind', chemistry: 'Chemistry', note: 'Note', color: 'Colour', parts: 'Parts' }
+const fieldNames: Record<string, string> = {
+  name: 'Name',
+  maker: 'Maker',
+  kind: 'Kind',
+  chemistry: 'Chemistry',
+  note: 'Note',
+  color: 'Colour',
+  parts: 'Parts',
+}
 const did: Record<string, string> = {
-  added: 'added this record', changed: 'changed', withdrawn: 'withdrew this record', restored: 'restored this record', 'value-set': 'set a value', 'value-amended': 'amended a value', 'value-removed': 'removed a value',
+  added: 'added this record',
+  changed: 'changed',
+  withdrawn: 'withdrew this record',
+  restored: 'restored this record',
+  'value-set': 'set a value',
+  'value-amended': 'amended a value',
+  'value-removed': 'removed a value',
   'values-set': 'read in values',
 }
 
 const asFact = (value: unknown): Fact | undefined => {
   const parsed = factSchema.safeParse(value)
-  return parsed.success ? (parsed.data) : undefined
+  return parsed.success ? parsed.data : undefined
 }
 
 function knownHow({ origin }: Fact): string {
-  if (origin.kind === 'stated') return `${origin.citation.sheetTitle}, ${writtenDate(origin.citation.revisionDate)}, page ${origin.citation.page}`
+  if (origin.kind === 'stated')
+    return `${origin.citation.sheetTitle}, ${writtenDate(origin.citation.revisionDate)}, page ${origin.citation.page}`
   return origin.kind === 'entered' ? `entered: ${origin.reason}` : `typical: ${origin.source}`
 }
 
-const told = (fact: Fact | undefined) => (fact ? `${[formatValue(fact), formatConditions(fact.at)].filter(Boolean).join(' ')} (${knownHow(fact)})` : null)
+const told = (fact: Fact | undefined) =>
+  fact ? `${[formatValue(fact), formatConditions(fact.at)].filter(Boolean).join(' ')} (${knownHow(fact)})` : null
 
 function asText(value: unknown): string {
   if (value === null || value === undefined || value === '') return 'empty'
@@ -59,5 +75,8 @@ export function changeWords({ action, from, to }: Change): ChangeWords {
   if (action !== 'changed') return { did: said, lines: [] }
   const before = (from ?? {}) as Record<string, unknown>
   const after = (to ?? {}) as Record<string, unknown>
-  return { did: said, lines: Object.keys(after).map((key) => ({ label: fieldNames[key] ?? key, from: asText(before[key]), to: asText(after[key]) })) }
+  return {
+    did: said,
+    lines: Object.keys(after).map((key) => ({ label: fieldNames[key] ?? key, from: asText(before[key]), to: asText(after[key]) })),
+  }
 }

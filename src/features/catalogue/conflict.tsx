@@ -26,32 +26,51 @@ export function useConflict<R extends { id: string }>(record: R | undefined, rea
   return { base, theirs, watch, settle }
 }
 
+const isSame = (a: unknown, b: unknown) => JSON.stringify(a) === JSON.stringify(b)
+
+/** What someone else saved, with what was typed here on top: fields that nobody touched here follow theirs. */
+export function merged<D extends object>(began: D, { mine, theirs }: { mine: D; theirs: D }): D {
+  const typed = Object.entries(mine).filter(([name, value]) => !isSame(value, began[name as keyof D]))
+  return { ...theirs, ...Object.fromEntries(typed) }
+}
+
 export interface Difference {
   label: string
   theirs: string
-  mine: string
+  /** Null where nothing was changed here. */
+  mine: string | null
 }
 
-/** What someone else saved beside what was typed here; nothing is lost either way. */
+/** What someone else saved beside what was typed here. What was not changed here follows what is saved. */
 export function ConflictNotice({ differences, onMine, onTheirs }: { differences: Difference[]; onMine: () => void; onTheirs: () => void }) {
   return (
     <Notice tone="caution">
       <p className="mb-2 font-semibold">Someone else has saved this record meanwhile.</p>
       {differences.length > 0 ? (
-        <table className="mb-3 w-full max-w-2xl border-collapse text-left">
+        <table className="mb-2 w-full max-w-2xl border-collapse text-left">
           <thead className="text-pencil">
             <tr>
-              <th scope="col" className="py-1 pr-4 font-normal">Field</th>
-              <th scope="col" className="py-1 pr-4 font-normal">Saved now</th>
-              <th scope="col" className="py-1 font-normal">Typed here</th>
+              <th scope="col" className="py-1 pr-4 font-normal">
+                Field
+              </th>
+              <th scope="col" className="py-1 pr-4 font-normal">
+                Saved now
+              </th>
+              <th scope="col" className="py-1 font-normal">
+                Typed here
+              </th>
             </tr>
           </thead>
           <tbody>
             {differences.map(({ label, theirs, mine }) => (
               <tr key={label} className="border-t border-rule align-top">
-                <th scope="row" className="py-1 pr-4 font-semibold">{label}</th>
+                <th scope="row" className="py-1 pr-4 font-semibold">
+                  {label}
+                </th>
                 <td className="py-1 pr-4 break-words">{theirs || <span className="text-pencil">empty</span>}</td>
-                <td className="py-1 break-words">{mine || <span className="text-pencil">empty</span>}</td>
+                <td className="py-1 break-words">
+                  {mine === null ? <span className="text-pencil">not changed</span> : mine || <span className="text-pencil">empty</span>}
+                </td>
               </tr>
             ))}
           </tbody>
@@ -60,7 +79,7 @@ export function ConflictNotice({ differences, onMine, onTheirs }: { differences:
         <p className="mb-3">It says the same as what is typed here.</p>
       )}
       <div className="flex flex-wrap gap-2">
-        <Button onClick={onMine}>Keep what I typed, to save it again</Button>
+        <Button onClick={onMine}>Keep what I typed, then save again</Button>
         <Button onClick={onTheirs}>Take what is saved</Button>
       </div>
     </Notice>

@@ -9,13 +9,16 @@ import { OriginValue } from '../../ui/figure-view.tsx'
 import { Fold } from '../../ui/fold.tsx'
 import { Card } from '../../ui/page.tsx'
 import { Pictogram } from '../../ui/pictogram.tsx'
+import { useUnitSystem } from '../../ui/unit-system.tsx'
 
 type Statement = ReturnType<typeof unionOfHazards>['statements'][number]
 
 /** What is handled: the product, or the parts of a mix, which are named by their letters here. */
 function handledOf(record: ProductRecord | MixRecord): ProductFacts[] {
   if (!('parts' in record)) return [record]
-  return record.parts.length === 1 ? record.parts.map(({ product }) => product) : record.parts.map(({ part, product }) => ({ ...product, name: `part ${part}` }))
+  return record.parts.length === 1
+    ? record.parts.map(({ product }) => product)
+    : record.parts.map(({ part, product }) => ({ ...product, name: `part ${part}` }))
 }
 
 /** Hazards as official statements and pictograms, from the safety sheets of the product, or of all parts of a mix. */
@@ -29,6 +32,11 @@ export function HazardsCard({ record }: { record: ProductRecord | MixRecord }) {
   return (
     <Card title="Hazards">
       <div className="grid gap-3 p-4">
+        {hazards.notStated.length > 0 && (
+          <p className="text-pencil">
+            Hazards are not stated for {hazards.notStated.join(', ')}: no safety sheet loaded here tells them. That is not the same as none.
+          </p>
+        )}
         {hazards.signalWord && <p className="font-bold">{hazards.signalWord}</p>}
         {hazards.pictograms.length > 0 && (
           <div className="flex flex-wrap gap-2">
@@ -49,12 +57,9 @@ export function HazardsCard({ record }: { record: ProductRecord | MixRecord }) {
           </Fold>
         )}
         <Worn products={products} />
-        {hazards.notStated.length > 0 && (
-          <p className="text-pencil">
-            Hazards are not stated for {hazards.notStated.join(', ')}: no safety sheet loaded here tells them. That is not the same as none.
-          </p>
+        {several && (
+          <p className="text-small text-pencil">All parts together. What arises in mixing, curing and grinding stands on no sheet.</p>
         )}
-        {several && <p className="text-small text-pencil">All parts together. What arises in mixing, curing and grinding stands on no sheet.</p>}
       </div>
     </Card>
   )
@@ -68,7 +73,8 @@ function Statements({ statements, facts, several }: { statements: readonly State
         const origin = originOf(code)
         return (
           <li key={code}>
-            {origin ? <OriginValue origin={origin}>{code}</OriginValue> : code} {text === code ? <span className="text-pencil">This code is in no list we hold; its wording stands on the sheet.</span> : text}
+            {origin ? <OriginValue origin={origin}>{code}</OriginValue> : code}{' '}
+            {text === code ? <span className="text-pencil">This code is in no list we hold; its wording stands on the sheet.</span> : text}
             {several && <span className="text-small text-pencil"> {from.join(', ')}</span>}
           </li>
         )
@@ -87,6 +93,7 @@ const worn: [Property, string][] = [
 
 /** What to wear and whom to call, in the sheets' own words; the same words of two parts stand once. */
 function Worn({ products }: { products: readonly ProductFacts[] }) {
+  const { system } = useUnitSystem()
   const rows = worn.map(([property, label]) => ({ label, said: saidBy(products, property) }))
   return (
     <dl className="border-t border-rule pt-2">
@@ -95,8 +102,10 @@ function Worn({ products }: { products: readonly ProductFacts[] }) {
           {said.length === 0 && <span className="text-pencil">not stated</span>}
           {said.map(({ fact, from }) => (
             <span key={fact.id} className="block">
-              <OriginValue origin={fact.origin}>{formatValue(fact)}</OriginValue>
-              {products.length > 1 && <span className="text-small text-pencil"> {from.length === products.length ? 'all parts' : from.join(', ')}</span>}
+              <OriginValue origin={fact.origin}>{formatValue(fact, system)}</OriginValue>
+              {products.length > 1 && (
+                <span className="text-small text-pencil"> {from.length === products.length ? 'all parts' : from.join(', ')}</span>
+              )}
             </span>
           ))}
         </Row>
@@ -147,7 +156,12 @@ export function TransportCard({ record }: { record: ProductRecord | MixRecord })
 
 function TransportLine({ facts }: { facts: readonly Fact[] }) {
   const factOf = (property: Property) => facts.find((fact) => fact.property === property)
-  const parts: [Property, string][] = [['unNumber', ''], ['properShippingName', ''], ['transportClass', 'class '], ['packingGroup', 'packing group ']]
+  const parts: [Property, string][] = [
+    ['unNumber', ''],
+    ['properShippingName', ''],
+    ['transportClass', 'class '],
+    ['packingGroup', 'packing group '],
+  ]
   const known = parts.flatMap(([property, before]) => {
     const fact = factOf(property)
     return fact ? [{ before, fact }] : []

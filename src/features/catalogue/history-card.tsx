@@ -8,7 +8,15 @@ import { useChanges } from '../people/queries.ts'
 import { changeWords } from './change-words.ts'
 
 const first = 8
-const moment = (at: string) => new Date(at).toLocaleString('en-US', { day: 'numeric', month: 'short', year: 'numeric', hour: '2-digit', minute: '2-digit', hour12: false })
+const moment = (at: string) =>
+  new Date(at).toLocaleString('en-US', {
+    day: 'numeric',
+    month: 'short',
+    year: 'numeric',
+    hour: '2-digit',
+    minute: '2-digit',
+    hour12: false,
+  })
 
 /** Who changed what of this record, from what. */
 export function HistoryCard({ kind, id }: { kind: string; id: string }) {

@@ -11,14 +11,24 @@ const choices = { kind: productKinds, chemistry: chemistries, status: standings 
 /** Search and filters of the address as the server takes them; what is no choice of a filter is left out. */
 export function filtersOf(address: ListAddress, withKind: boolean) {
   const chosen = (name: keyof typeof choices) => (choices[name] as readonly string[]).find((choice) => choice === address.filter(name))
-  return { ...(withKind ? { kind: chosen('kind') } : {}), maker: address.filter('maker') || undefined, chemistry: chosen('chemistry'), status: chosen('status') }
+  return {
+    ...(withKind ? { kind: chosen('kind') } : {}),
+    maker: address.filter('maker') || undefined,
+    chemistry: chosen('chemistry'),
+    status: chosen('status'),
+  }
 }
 
 /** Search and filters of a catalogue list, kept in the address. */
 export function ListFilters({ address, withKind }: { address: ListAddress; withKind: boolean }) {
   const makers = useMakers()
   const choice = (name: string, label: string, options: readonly string[]) => (
-    <SelectField label={label} value={address.filter(name)} className="max-sm:min-w-0 max-sm:flex-1" onChange={(event) => address.set({ [name]: event.target.value })}>
+    <SelectField
+      label={label}
+      value={address.filter(name)}
+      className="max-sm:min-w-0 max-sm:flex-1"
+      onChange={(event) => address.set({ [name]: event.target.value })}
+    >
       <option value="">All</option>
       {options.map((option) => (
         <option key={option} value={option}>
@@ -48,7 +58,14 @@ function SearchField({ address }: { address: ListAddress }) {
   }, [id, q])
   return (
     <TextField
-      id={id} label="Search" type="search" defaultValue={q} className="w-full max-w-sm" placeholder="Name, maker, CAS number or hazard code" autoComplete="off" spellCheck={false}
+      id={id}
+      label="Search"
+      type="search"
+      defaultValue={q}
+      className="w-full max-w-sm"
+      placeholder="Name, maker, CAS number or hazard code"
+      autoComplete="off"
+      spellCheck={false}
       onChange={(event) => address.set({ q: event.target.value })}
     />
   )

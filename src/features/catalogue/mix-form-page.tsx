@@ -1,4 +1,4 @@
-import { type SubmitEvent, useState } from 'react'
+import { type SubmitEvent, useMemo, useState } from 'react'
 import { useNavigate, useParams } from 'react-router'
 import { type MixRecord, mixBody, newMixBody } from '../../../shared/api/catalogue.ts'
 import { chemistries } from '../../../shared/domain/product.ts'
@@ -12,7 +12,7 @@ import { AreaField, SelectField, TextField } from '../../ui/field.tsx'
 import { LeaveDialog } from '../../ui/leave-dialog.tsx'
 import { Card, Page } from '../../ui/page.tsx'
 import { ProblemSummary } from '../../ui/problem-summary.tsx'
-import { ConflictNotice, useConflict } from './conflict.tsx'
+import { ConflictNotice, merged, useConflict } from './conflict.tsx'
 import { type MixDraft, type MixFormPart, bodyOfMix, draftOfMix, mixDifferences, mixFields } from './mix-draft.ts'
 import { PartsFields } from './parts-fields.tsx'
 import { useCatalogueChanges, useMakers, useRecord } from './queries.ts'
@@ -44,7 +44,7 @@ function MixForm({ mix }: { mix: MixRecord | undefined }) {
   const { submit, problems, busy } = useSubmit(mix ? mixBody : newMixBody, (body) =>
     watch(base ? changeMix(base.id, { ...mixBody.parse(body), version: base.version }) : addMix(newMixBody.parse(body))),
   )
-  const shown = { ...problems, fields: mixFields(problems.fields) }
+  const shown = useMemo(() => ({ ...problems, fields: mixFields(problems.fields) }), [problems])
   const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const kept = await submit(bodyOfMix(draft, !mix))
@@ -56,13 +56,25 @@ function MixForm({ mix }: { mix: MixRecord | undefined }) {
     if (theirs) setDraft(draftOfMix(theirs))
     settle()
   }
+  const keepMine = () => {
+    if (theirs) setDraft(merged(began, { mine: draft, theirs: draftOfMix(theirs) }))
+    settle()
+  }
   return (
     <Page title={mix ? `Edit ${mix.name}` : 'Add a mix'}>
       <LeaveDialog guard={guard} />
       <Card className="max-w-2xl">
         <form onSubmit={(event) => void onSubmit(event)} className="grid gap-4 p-4 sm:grid-cols-2" noValidate>
           <div className="empty:hidden sm:col-span-2">
-            {theirs ? <ConflictNotice differences={mixDifferences(draftOfMix(theirs), draft)} onMine={settle} onTheirs={takeTheirs} /> : <ProblemSummary problems={shown} />}
+            {theirs ? (
+              <ConflictNotice
+                differences={mixDifferences(began, { mine: draft, theirs: draftOfMix(theirs) })}
+                onMine={keepMine}
+                onTheirs={takeTheirs}
+              />
+            ) : (
+              <ProblemSummary problems={shown} />
+            )}
           </div>
           <MixFields draft={draft} change={change} fields={shown.fields} />
           <PartsFields draft={draft} change={change} fields={shown.fields} mix={base} />
@@ -82,13 +94,26 @@ function MixForm({ mix }: { mix: MixRecord | undefined }) {
 function MixFields({ draft, change, fields }: MixFormPart) {
   const makers = useMakers()
   const field = (name: 'name' | 'maker' | 'chemistry' | 'color' | 'note', label: string) => ({
-    label, name, value: draft[name], error: fields[name], onChange: (event: { target: { value: string } }) => change({ [name]: event.target.value }),
+    label,
+    name,
+    value: draft[name],
+    error: fields[name],
+    onChange: (event: { target: { value: string } }) => change({ [name]: event.target.value }),
   })
   return (
     <>
-      <TextField {...field('name', 'Name')} help="As on the data sheet, without the component." className="sm:col-span-2" autoComplete="off" />
+      <TextField
+        {...field('name', 'Name')}
+        help="As on the data sheet, without the component."
+        className="sm:col-span-2"
+        autoComplete="off"
+      />
       <TextField {...field('maker', 'Maker')} list="makers" autoComplete="off" />
-      <datalist id="makers">{makers.data?.items.map((maker) => <option key={maker} value={maker} />)}</datalist>
+      <datalist id="makers">
+        {makers.data?.items.map((maker) => (
+          <option key={maker} value={maker} />
+        ))}
+      </datalist>
       <SelectField {...field('chemistry', 'Chemistry')}>
         {chemistries.map((chemistry) => (
           <option key={chemistry}>{chemistry}</option>

@@ -3,6 +3,7 @@ import type { MixRow } from '../../../shared/api/catalogue.ts'
 import { sentenceOf } from '../../lib/api.ts'
 import { useListAddress } from '../../lib/list-address.ts'
 import { paths } from '../../lib/paths.ts'
+import { useSettled } from '../../lib/use-settled.ts'
 import { useCan } from '../../lib/user.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { buttonClass } from '../../ui/button.tsx'
@@ -30,7 +31,12 @@ const columns: ListColumns<MixRow> = [
   },
   { id: 'maker', header: 'Maker', accessorKey: 'maker' },
   { id: 'chemistry', header: 'Chemistry', accessorKey: 'chemistry' },
-  { id: 'parts', header: 'Parts', enableSorting: false, cell: ({ row: { original } }) => <span className="text-small text-pencil">{original.parts.join(' + ')}</span> },
+  {
+    id: 'parts',
+    header: 'Parts',
+    enableSorting: false,
+    cell: ({ row: { original } }) => <span className="text-small text-pencil">{original.parts.join(' + ')}</span>,
+  },
   { id: 'facts', header: 'Values', accessorKey: 'facts', enableSorting: false, meta: { numeric: true } },
   { id: 'sheets', header: 'Sheets', accessorKey: 'sheets', enableSorting: false, meta: { numeric: true } },
 ]
@@ -39,11 +45,14 @@ const columns: ListColumns<MixRow> = [
 export function MixesPage() {
   const address = useListAddress('name')
   const filters = filtersOf(address, false)
-  const mixes = useMixes({ q: address.q, sort: address.sort, cursor: address.cursor, ...filters })
+  const mixes = useMixes({ q: useSettled(address.q, 120), sort: address.sort, cursor: address.cursor, ...filters })
   const mayWrite = useCan('catalogue:write')
   const filtered = address.q !== '' || Object.values(filters).some(Boolean)
   return (
-    <Page title="Mixes" under="What goes on the floor: one product alone, or parts at a ratio." actions={
+    <Page
+      title="Mixes"
+      under="What goes on the floor: one product alone, or parts at a ratio."
+      actions={
         <>
           <a href={exportAddress('mixes', { q: address.q, sort: address.sort, ...filters })} download className={buttonClass()}>
             Export CSV
@@ -61,11 +70,21 @@ export function MixesPage() {
         <Asking query={mixes} says={sentenceOf}>
           {(page) =>
             page.items.length === 0 ? (
-              <Notice>{filtered ? 'Nothing matches. Change the search or the filters.' : 'No mixes yet. Add one from the products of the catalogue.'}</Notice>
+              <Notice>
+                {filtered
+                  ? 'Nothing matches. Change the search or the filters.'
+                  : 'No mixes yet. Add one from the products of the catalogue.'}
+              </Notice>
             ) : (
               <ListTable
-                caption="Mixes" columns={columns} page={page} sort={address.sort} stale={mixes.isPlaceholderData} rowKey={(row) => row.id}
-                onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+                caption="Mixes"
+                columns={columns}
+                page={page}
+                sort={address.sort}
+                stale={mixes.isPlaceholderData}
+                rowKey={(row) => row.id}
+                onSort={(sort) => address.set({ sort })}
+                onCursor={(cursor) => address.set({ cursor })}
               />
             )
           }

@@ -7,7 +7,15 @@ import { isExpected, propertyGroups } from './property-groups.ts'
 import type { RecordKind } from './queries.ts'
 
 /** What no sheet has said of this record: listed by group, never passed over. */
-export function NotStatedCard({ base, kind, record }: { base: string; kind: RecordKind; record: { facts: readonly Fact[]; parts?: readonly unknown[] } }) {
+export function NotStatedCard({
+  base,
+  kind,
+  record,
+}: {
+  base: string
+  kind: RecordKind
+  record: { facts: readonly Fact[]; parts?: readonly unknown[] }
+}) {
   const mayWrite = useCan('catalogue:write')
   const known = new Set(record.facts.map(({ property }) => property))
   const isAlone = record.parts?.length === 1
@@ -20,7 +28,9 @@ export function NotStatedCard({ base, kind, record }: { base: string; kind: Reco
   if (absent.length === 0) return null
   return (
     <Card title="Not stated">
-      <p className="px-4 pt-3 text-pencil">No sheet loaded here says it, and nobody has entered it. A check that needs one of these answers unknown.</p>
+      <p className="px-4 pt-3 text-pencil">
+        No sheet loaded here says it, and nobody has entered it. A check that needs one of these answers unknown.
+      </p>
       <dl className="px-4 py-2">
         {absent.map(({ title, members }) => (
           <div key={title} className="grid gap-x-4 py-1 sm:grid-cols-[200px_minmax(0,1fr)]">

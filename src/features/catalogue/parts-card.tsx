@@ -20,10 +20,18 @@ export function PartsCard({ mix }: { mix: MixRecord }) {
         <table className="w-full text-left">
           <thead className="text-pencil">
             <tr className="border-b border-rule">
-              {!alone && <th scope="col" className="px-4 py-2 font-normal">Part</th>}
-              <th scope="col" className="px-4 py-2 font-normal">Product</th>
+              {!alone && (
+                <th scope="col" className="px-4 py-2 font-normal">
+                  Part
+                </th>
+              )}
+              <th scope="col" className="px-4 py-2 font-normal">
+                Product
+              </th>
               {headings.slice(0, alone ? 1 : 3).map((heading) => (
-                <th key={heading} scope="col" className="px-4 text-right font-normal whitespace-nowrap">{heading}</th>
+                <th key={heading} scope="col" className="px-4 text-right font-normal whitespace-nowrap">
+                  {heading}
+                </th>
               ))}
             </tr>
           </thead>
@@ -32,11 +40,20 @@ export function PartsCard({ mix }: { mix: MixRecord }) {
               <tr key={part.part} className="border-b border-rule last:border-b-0">
                 {!alone && <td className="px-4 py-2 align-top">{part.part}</td>}
                 <td className="px-4 py-2 align-top">
-                  <Link to={paths.product(part.productId)} className="text-resin hover:underline">{part.name}</Link>
+                  <Link to={paths.product(part.productId)} className="text-resin hover:underline">
+                    {part.name}
+                  </Link>
                   {mix.parts[index]?.product.status === 'withdrawn' && <span className="text-pencil"> withdrawn</span>}
                 </td>
-                <td className={numeric}><FigureView figure={part.density} /></td>
-                {!alone && [byVolume[index], byWeight[index]].map((figure, at) => <td key={headings[at + 1]} className={numeric}>{figure && <FigureView figure={figure} />}</td>)}
+                <td className={numeric}>
+                  <FigureView figure={part.density} />
+                </td>
+                {!alone &&
+                  [byVolume[index], byWeight[index]].map((figure, at) => (
+                    <td key={headings[at + 1]} className={numeric}>
+                      {figure && <FigureView figure={figure} />}
+                    </td>
+                  ))}
               </tr>
             ))}
           </tbody>
@@ -44,7 +61,8 @@ export function PartsCard({ mix }: { mix: MixRecord }) {
       </div>
       {!alone && (
         <p className="border-t border-rule px-4 py-2 text-pencil">
-          {ratioByVolume ?? 'Not stated'} by volume, {ratioByWeight ?? 'not stated'} by weight. What is not stated itself is worked out through the densities.
+          {ratioByVolume ?? 'Not stated'} by volume, {ratioByWeight ?? 'not stated'} by weight. What is not stated itself is worked out
+          through the densities.
         </p>
       )}
     </Card>

@@ -12,7 +12,7 @@ import { AreaField, SelectField, TextField } from '../../ui/field.tsx'
 import { LeaveDialog } from '../../ui/leave-dialog.tsx'
 import { Card, Page } from '../../ui/page.tsx'
 import { ProblemSummary } from '../../ui/problem-summary.tsx'
-import { ConflictNotice, useConflict } from './conflict.tsx'
+import { ConflictNotice, merged, useConflict } from './conflict.tsx'
 import { useCatalogueChanges, useMakers, useRecord } from './queries.ts'
 
 export function NewProductPage() {
@@ -42,7 +42,9 @@ function ProductForm({ product }: { product: ProductRecord | undefined }) {
   const [draft, setDraft] = useState<ProductDraft>(base ? draftOf(base) : blank)
   const began = base ? draftOf(base) : blank
   const guard = useLeaveGuard(fieldNames.some((name) => draft[name] !== began[name]))
-  const { submit, problems, busy } = useSubmit(productBody, (body) => watch(base ? changeProduct(base.id, { ...body, version: base.version }) : addProduct(body)))
+  const { submit, problems, busy } = useSubmit(productBody, (body) =>
+    watch(base ? changeProduct(base.id, { ...body, version: base.version }) : addProduct(body)),
+  )
   const onSubmit = async (event: SubmitEvent<HTMLFormElement>) => {
     event.preventDefault()
     const kept = await submit(draft)
@@ -55,6 +57,10 @@ function ProductForm({ product }: { product: ProductRecord | undefined }) {
     settle()
   }
   const saved = theirs && draftOf(theirs)
+  const keepMine = () => {
+    if (saved) setDraft(merged(began, { mine: draft, theirs: saved }))
+    settle()
+  }
   return (
     <Page title={product ? `Edit ${product.name}` : 'Add a product'}>
       <LeaveDialog guard={guard} />
@@ -63,8 +69,11 @@ function ProductForm({ product }: { product: ProductRecord | undefined }) {
           <div className="empty:hidden sm:col-span-2">
             {saved ? (
               <ConflictNotice
-                differences={fieldNames.filter((name) => saved[name] !== draft[name]).map((name) => ({ label: labels[name], theirs: saved[name], mine: draft[name] }))}
-                onMine={settle} onTheirs={takeTheirs}
+                differences={fieldNames
+                  .filter((name) => saved[name] !== draft[name])
+                  .map((name) => ({ label: labels[name], theirs: saved[name], mine: draft[name] === began[name] ? null : draft[name] }))}
+                onMine={keepMine}
+                onTheirs={takeTheirs}
               />
             ) : (
               <ProblemSummary problems={problems} />
@@ -83,14 +92,32 @@ function ProductForm({ product }: { product: ProductRecord | undefined }) {
   )
 }
 
-function ProductFields({ draft, change, fields }: { draft: ProductDraft; change: (part: Partial<ProductDraft>) => void; fields: Record<string, string> }) {
+function ProductFields({
+  draft,
+  change,
+  fields,
+}: {
+  draft: ProductDraft
+  change: (part: Partial<ProductDraft>) => void
+  fields: Record<string, string>
+}) {
   const makers = useMakers()
-  const field = (name: keyof ProductDraft) => ({ label: labels[name], name, value: draft[name], error: fields[name], onChange: (event: { target: { value: string } }) => change({ [name]: event.target.value }) })
+  const field = (name: keyof ProductDraft) => ({
+    label: labels[name],
+    name,
+    value: draft[name],
+    error: fields[name],
+    onChange: (event: { target: { value: string } }) => change({ [name]: event.target.value }),
+  })
   return (
     <>
       <TextField {...field('name')} help="As printed on the pail, with its component." className="sm:col-span-2" autoComplete="off" />
       <TextField {...field('maker')} list="makers" autoComplete="off" />
-      <datalist id="makers">{makers.data?.items.map((maker) => <option key={maker} value={maker} />)}</datalist>
+      <datalist id="makers">
+        {makers.data?.items.map((maker) => (
+          <option key={maker} value={maker} />
+        ))}
+      </datalist>
       <SelectField {...field('kind')}>
         {productKinds.map((kind) => (
           <option key={kind}>{kind}</option>

@@ -1,6 +1,7 @@
-import Fuse from 'fuse.js'
+import Fuse, { type Expression } from 'fuse.js'
 import { type KeyboardEvent, useId, useMemo, useState } from 'react'
 import type { ProductRow } from '../../../shared/api/catalogue.ts'
+import { useSettled } from '../../lib/use-settled.ts'
 import { TextField } from '../../ui/field.tsx'
 import { useProducts } from './queries.ts'
 
@@ -24,17 +25,27 @@ interface ProductPickerProps {
 const likeness = { keys: ['name', 'maker', 'kind', 'chemistry'], threshold: 0.3, ignoreLocation: true }
 const most = 8
 
+/** Every word that is typed must be like something of the product: "hardner 110" finds the hardener of the 110. */
+const everyWord = (typed: string): Expression => ({
+  $and: typed
+    .trim()
+    .split(/\s+/)
+    .map((word) => ({ $or: likeness.keys.map((key) => ({ [key]: word })) })),
+})
+
 /** What the server found for the letters typed, put in order here on every key. */
 function useFound(typed: string, without: readonly string[]): { rows: ProductRow[]; waiting: boolean } {
-  const products = useProducts({ q: typed, sort: 'name', limit: '100', status: 'active' })
+  const asked = useSettled(typed.trim(), 150)
+  const products = useProducts({ q: asked, sort: 'name', limit: '100', status: 'active' })
   const items = products.data?.items
+  const waiting = products.isPending || products.isPlaceholderData || asked !== typed.trim()
   const rows = useMemo(() => {
     const offered = (items ?? []).filter(({ id }) => !without.includes(id))
     if (typed.trim() === '') return offered.slice(0, most)
-    const alike = new Fuse(offered, likeness).search(typed, { limit: most }).map(({ item }) => item)
-    return alike.length > 0 ? alike : offered.slice(0, most)
-  }, [items, typed, without])
-  return { rows, waiting: products.isPending }
+    const alike = new Fuse(offered, likeness).search(everyWord(typed), { limit: most }).map(({ item }) => item)
+    return alike.length > 0 || waiting ? alike : offered.slice(0, most)
+  }, [items, typed, without, waiting])
+  return { rows, waiting }
 }
 
 /** Finds a product by a few letters: arrow keys and Enter choose, Escape closes. */
@@ -47,7 +58,13 @@ export function ProductPicker({ label, name, chosen, onChoose, without, error }:
         <span>
           {chosen.name} <span className="text-pencil">{chosen.maker}</span>
         </span>
-        <button type="button" name={name} className="text-resin underline" aria-label={`Choose another product for ${label}`} onClick={() => onChoose(null)}>
+        <button
+          type="button"
+          name={name}
+          className="text-resin underline"
+          aria-label={`Choose another product for ${label}`}
+          onClick={() => onChoose(null)}
+        >
           Choose another
         </button>
       </p>
@@ -77,19 +94,41 @@ function ProductSearch({ label, name, onChoose, without, error }: Omit<ProductPi
   return (
     <div onBlur={(event) => !event.currentTarget.contains(event.relatedTarget) && setOpen(false)}>
       <TextField
-        label={label} name={name} autoComplete="off" value={typed} error={error} placeholder="Name, maker or kind" role="combobox" aria-expanded={open} aria-controls={listId} aria-autocomplete="list"
-        aria-activedescendant={open && rows.length > 0 ? `${listId}-${lit}` : undefined} onFocus={() => setOpen(true)} onKeyDown={onKeyDown}
+        label={label}
+        name={name}
+        autoComplete="off"
+        value={typed}
+        error={error}
+        placeholder="Name, maker or kind"
+        role="combobox"
+        aria-expanded={open}
+        aria-controls={listId}
+        aria-autocomplete="list"
+        aria-activedescendant={open && rows.length > 0 ? `${listId}-${lit}` : undefined}
+        onFocus={() => setOpen(true)}
+        onKeyDown={onKeyDown}
         onChange={(event) => {
           setTyped(event.target.value)
           setAt(0)
           setOpen(true)
         }}
       />
-      <ul id={listId} role="listbox" aria-label={`Products for ${label}`} className={open ? 'border border-t-0 border-pencil bg-card' : 'hidden'}>
+      <ul
+        id={listId}
+        role="listbox"
+        aria-label={`Products for ${label}`}
+        className={open ? 'border border-t-0 border-pencil bg-card' : 'hidden'}
+      >
         {rows.map((product, index) => (
           // eslint-disable-next-line jsx-a11y/click-events-have-key-events -- the keys are the input's: focus stays there
           <li
-            key={product.id} id={`${listId}-${index}`} role="option" aria-selected={index === lit} tabIndex={-1} onMouseDown={(event) => event.preventDefault()} onClick={() => choose(product)}
+            key={product.id}
+            id={`${listId}-${index}`}
+            role="option"
+            aria-selected={index === lit}
+            tabIndex={-1}
+            onMouseDown={(event) => event.preventDefault()}
+            onClick={() => choose(product)}
             className={`flex min-h-9 cursor-pointer flex-wrap items-center justify-between gap-x-3 px-2 py-1 hover:bg-resin-wash ${index === lit ? 'bg-resin-wash' : ''}`}
           >
             <span>{product.name}</span>

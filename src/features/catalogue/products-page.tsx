@@ -3,6 +3,7 @@ import type { ProductRow } from '../../../shared/api/catalogue.ts'
 import { sentenceOf } from '../../lib/api.ts'
 import { useListAddress } from '../../lib/list-address.ts'
 import { paths } from '../../lib/paths.ts'
+import { useSettled } from '../../lib/use-settled.ts'
 import { useCan } from '../../lib/user.ts'
 import { Asking } from '../../ui/asking.tsx'
 import { buttonClass } from '../../ui/button.tsx'
@@ -36,11 +37,13 @@ const columns: ListColumns<ProductRow> = [
 export function ProductsPage() {
   const address = useListAddress('name')
   const filters = filtersOf(address, true)
-  const products = useProducts({ q: address.q, sort: address.sort, cursor: address.cursor, ...filters })
+  const products = useProducts({ q: useSettled(address.q, 120), sort: address.sort, cursor: address.cursor, ...filters })
   const mayWrite = useCan('catalogue:write')
   const filtered = address.q !== '' || Object.values(filters).some(Boolean)
   return (
-    <Page title="Products" actions={
+    <Page
+      title="Products"
+      actions={
         <>
           <a href={exportAddress('products', { q: address.q, sort: address.sort, ...filters })} download className={buttonClass()}>
             Export CSV
@@ -58,11 +61,19 @@ export function ProductsPage() {
         <Asking query={products} says={sentenceOf}>
           {(page) =>
             page.items.length === 0 ? (
-              <Notice>{filtered ? 'Nothing matches. Change the search or the filters.' : 'No products yet. Add one, then upload its sheets.'}</Notice>
+              <Notice>
+                {filtered ? 'Nothing matches. Change the search or the filters.' : 'No products yet. Add one, then upload its sheets.'}
+              </Notice>
             ) : (
               <ListTable
-                caption="Products" columns={columns} page={page} sort={address.sort} stale={products.isPlaceholderData} rowKey={(row) => row.id}
-                onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+                caption="Products"
+                columns={columns}
+                page={page}
+                sort={address.sort}
+                stale={products.isPlaceholderData}
+                rowKey={(row) => row.id}
+                onSort={(sort) => address.set({ sort })}
+                onCursor={(cursor) => address.set({ cursor })}
               />
             )
           }

@@ -8,14 +8,41 @@ export interface PropertyGroup {
 
 /** Every property, in groups as a record page shows them. */
 export const propertyGroups: readonly PropertyGroup[] = [
-  { title: 'Mixing', properties: ['mixRatio', 'splitKit', 'inductionTime', 'potLife', 'density', 'viscosity', 'volumeSolids', 'weightSolids', 'voc'] },
-  { title: 'Laying', properties: ['workingTime', 'filmThickness', 'spreadRate', 'consumption', 'recoatWindow', 'tackFree', 'footTraffic', 'vehicleTraffic', 'fullCure'] },
+  {
+    title: 'Mixing',
+    properties: ['mixRatio', 'splitKit', 'inductionTime', 'potLife', 'density', 'viscosity', 'volumeSolids', 'weightSolids', 'voc'],
+  },
+  {
+    title: 'Laying',
+    properties: [
+      'workingTime',
+      'filmThickness',
+      'spreadRate',
+      'consumption',
+      'recoatWindow',
+      'tackFree',
+      'footTraffic',
+      'vehicleTraffic',
+      'fullCure',
+    ],
+  },
   {
     title: 'Slab and air',
-    properties: ['applicationTemperature', 'maxRelativeHumidity', 'dewPointMargin', 'substrateRelativeHumidity', 'moistureEmission', 'surfaceProfile', 'pullOffStrength'],
+    properties: [
+      'applicationTemperature',
+      'maxRelativeHumidity',
+      'dewPointMargin',
+      'substrateRelativeHumidity',
+      'moistureEmission',
+      'surfaceProfile',
+      'pullOffStrength',
+    ],
   },
   { title: 'Packs and storage', properties: ['packSize', 'packPrice', 'shelfLife', 'storageTemperature'] },
-  { title: 'Hazards', properties: ['signalWord', 'hazardStatements', 'supplementalStatements', 'precautionaryStatements', 'ingredient', 'flashPoint'] },
+  {
+    title: 'Hazards',
+    properties: ['signalWord', 'hazardStatements', 'supplementalStatements', 'precautionaryStatements', 'ingredient', 'flashPoint'],
+  },
   { title: 'Protection', properties: ['gloves', 'eyeProtection', 'respiratoryProtection', 'emergencyPhone'] },
   { title: 'Transport', properties: ['unNumber', 'properShippingName', 'transportClass', 'packingGroup'] },
   { title: 'On the sheet itself', properties: ['productName', 'revisionDate'] },

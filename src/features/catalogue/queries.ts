@@ -31,7 +31,9 @@ export function useRecord(kind: RecordKind, id: string) {
   return useQuery({
     queryKey: ['catalogue', kind, id],
     queryFn: ({ signal }): Promise<ProductRecord | MixRecord> =>
-      kind === 'product' ? call(wire.readProduct, { params: { productId: id }, signal }) : call(wire.readMix, { params: { mixId: id }, signal }),
+      kind === 'product'
+        ? call(wire.readProduct, { params: { productId: id }, signal })
+        : call(wire.readMix, { params: { mixId: id }, signal }),
   })
 }
 
@@ -45,18 +47,27 @@ export function useCatalogueChanges() {
   const client = useQueryClient()
   const done = async <T>(result: Promise<T>): Promise<T> => {
     const answer = await result
-    await Promise.all([client.invalidateQueries({ queryKey: ['catalogue'] }), client.invalidateQueries({ queryKey: ['build-ups'] }), client.invalidateQueries({ queryKey: ['changes'] })])
+    await Promise.all([
+      client.invalidateQueries({ queryKey: ['catalogue'] }),
+      client.invalidateQueries({ queryKey: ['build-ups'] }),
+      client.invalidateQueries({ queryKey: ['changes'] }),
+    ])
     return answer
   }
   return {
     readProduct: (productId: string) => call(wire.readProduct, { params: { productId } }),
     readMix: (mixId: string) => call(wire.readMix, { params: { mixId } }),
     addProduct: (body: z.input<typeof wire.addProduct.body>) => done(call(wire.addProduct, { body })),
-    changeProduct: (productId: string, body: z.input<typeof wire.changeProduct.body>) => done(call(wire.changeProduct, { params: { productId }, body })),
+    changeProduct: (productId: string, body: z.input<typeof wire.changeProduct.body>) =>
+      done(call(wire.changeProduct, { params: { productId }, body })),
     addMix: (body: z.input<typeof wire.addMix.body>) => done(call(wire.addMix, { body })),
     changeMix: (mixId: string, body: z.input<typeof wire.changeMix.body>) => done(call(wire.changeMix, { params: { mixId }, body })),
     addFact: (kind: RecordKind, id: string, body: FactBody) =>
-      done(kind === 'product' ? call(wire.addProductFact, { params: { productId: id }, body }) : call(wire.addMixFact, { params: { mixId: id }, body })),
+      done(
+        kind === 'product'
+          ? call(wire.addProductFact, { params: { productId: id }, body })
+          : call(wire.addMixFact, { params: { mixId: id }, body }),
+      ),
     amendFact: (factId: string, body: FactBody) => done(call(wire.amendFact, { params: { factId }, body })),
     endFact: (factId: string) => done(call(wire.endFact, { params: { factId } })),
   }

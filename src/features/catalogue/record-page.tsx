@@ -40,7 +40,11 @@ function RecordPage({ kind, id }: { kind: RecordKind; id: string }) {
 function RecordView({ kind, record }: { kind: RecordKind; record: ProductRecord | MixRecord }) {
   const mayWrite = useCan('catalogue:write')
   const base = kind === 'product' ? paths.product(record.id) : paths.mix(record.id)
-  const under = [record.maker, 'kind' in record ? record.kind : `mix of ${record.parts.length === 1 ? 'one part' : `${record.parts.length} parts`}`, record.chemistry].join(', ')
+  const under = [
+    record.maker,
+    'kind' in record ? record.kind : `mix of ${record.parts.length === 1 ? 'one part' : `${record.parts.length} parts`}`,
+    record.chemistry,
+  ].join(', ')
   return (
     <Page
       title={record.name}
@@ -48,22 +52,28 @@ function RecordView({ kind, record }: { kind: RecordKind; record: ProductRecord 
       actions={
         mayWrite && (
           <>
-            <Link to={`${base}/edit`} className={buttonClass()}>Edit</Link>
+            <Link to={`${base}/edit`} className={buttonClass()}>
+              Edit
+            </Link>
             <Withdraw kind={kind} record={record} />
-            <Link to={`${base}/values/new`} className={buttonClass('primary')}>Add a value</Link>
+            <Link to={`${base}/values/new`} className={buttonClass('primary')}>
+              Add a value
+            </Link>
           </>
         )
       }
     >
-      {record.status === 'withdrawn' && <Notice tone="caution">Withdrawn: not to be chosen for new floors. What was built with it stays as it is.</Notice>}
+      {record.status === 'withdrawn' && (
+        <Notice tone="caution">Withdrawn: not to be chosen for new floors. What was built with it stays as it is.</Notice>
+      )}
       {record.note && <p className="mb-4 max-w-3xl whitespace-pre-line">{record.note}</p>}
-      <div className="grid gap-5 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
-        <div className="grid content-start gap-5">
+      <div className="grid grid-cols-[minmax(0,1fr)] gap-5 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+        <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-5">
           {'parts' in record && <PartsCard mix={record} />}
           <ValuesCard base={base} record={record} />
           <NotStatedCard base={base} kind={kind} record={record} />
         </div>
-        <div className="grid content-start gap-5">
+        <div className="grid grid-cols-[minmax(0,1fr)] content-start gap-5">
           <SheetsCard record={record} />
           <HazardsCard record={record} />
           <TransportCard record={record} />
@@ -83,7 +93,9 @@ function Withdraw({ kind, record }: { kind: RecordKind; record: ProductRecord | 
   const onClick = async () => {
     setBusy(true)
     try {
-      await (kind === 'product' ? changeProduct(record.id, { version: record.version, status }) : changeMix(record.id, { version: record.version, status }))
+      await (kind === 'product'
+        ? changeProduct(record.id, { version: record.version, status })
+        : changeMix(record.id, { version: record.version, status }))
       setError(undefined)
     } catch (thrown) {
       setError(thrown instanceof AppError ? thrown.message : sentenceOf(thrown))

@@ -30,7 +30,15 @@ function sourcesOf(mix: MixFacts, basis: Basis) {
 /** Share of each part of a mix by volume or weight, with its sum: part ÷ sum of the parts. */
 export function shareFigures(mix: MixFacts, basis: Basis): Figure[] {
   const parts = ratiosOf(mix)[basis]
-  if (!parts) return mix.parts.map(() => notStated('mixRatio', { of: mix.name, subject: { kind: 'mix', id: mix.id }, ask: 'the maker, in writing', because: `no ratio by ${basis}` }))
+  if (!parts)
+    return mix.parts.map(() =>
+      notStated('mixRatio', {
+        of: mix.name,
+        subject: { kind: 'mix', id: mix.id },
+        ask: 'the maker, in writing',
+        because: `no ratio by ${basis}`,
+      }),
+    )
   const { facts, through } = sourcesOf(mix, basis)
   const written = numbers(parts)
   const worked = through ? `; parts by ${basis} from the ratio by ${through} ${basis === 'weight' ? '× densities' : '÷ densities'}` : ''

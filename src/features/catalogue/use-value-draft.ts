@@ -33,7 +33,14 @@ export function useValueDraft(fact: Fact | undefined) {
     const marked = search.get('revision')
     const kept = marked !== null || search.has('resume') ? (keptUnder(key, began) ?? began) : began
     if (marked === null) return kept
-    return { ...kept, how: 'stated', revisionId: marked, page: search.get('page') ?? '1', box: search.get('box') ?? '', quote: search.get('quote') ?? kept.quote }
+    return {
+      ...kept,
+      how: 'stated',
+      revisionId: marked,
+      page: search.get('page') ?? '1',
+      box: search.get('box') ?? '',
+      quote: search.get('quote') ?? kept.quote,
+    }
   })
   useEffect(() => sessionStorage.setItem(key, JSON.stringify(draft)), [key, draft])
   return {

@@ -15,7 +15,10 @@ export function UsesCard({ uses }: { uses: MixRecord['usedIn'] }) {
         {uses.map((use) => (
           <li key={`${use.kind} ${use.id} ${use.version ?? ''}`} className="border-b border-rule px-4 py-2 last:border-b-0">
             <span className="text-pencil">{names[use.kind]}</span>{' '}
-            <Link to={use.kind === 'build-up' && use.version !== null ? paths.buildUp(use.id, use.version) : addressOf[use.kind](use.id)} className="text-resin hover:underline">
+            <Link
+              to={use.kind === 'build-up' && use.version !== null ? paths.buildUp(use.id, use.version) : addressOf[use.kind](use.id)}
+              className="text-resin hover:underline"
+            >
               {use.name}
               {use.version !== null && `, version ${use.version}`}
             </Link>

@@ -1,4 +1,4 @@
-import { type SubmitEvent, useState } from 'react'
+import { type SubmitEvent, useMemo, useState } from 'react'
 import { Link, useLocation, useNavigate, useParams } from 'react-router'
 import { type MixRecord, type ProductRecord, factBody } from '../../../shared/api/catalogue.ts'
 import { formatConditions, formatValue } from '../../../shared/domain/format.ts'
@@ -52,7 +52,7 @@ function ValueForm({ kind, given }: { kind: RecordKind; given: ProductRecord | M
   const [added, setAdded] = useState<string>()
   const { addFact, amendFact } = useCatalogueChanges()
   const { submit, problems, busy } = useSubmit(factBody, (body) => (factId ? amendFact(factId, body) : addFact(kind, given.id, body)))
-  const shown = { ...problems, fields: valueFields(problems.fields) }
+  const shown = useMemo(() => ({ ...problems, fields: valueFields(problems.fields) }), [problems])
   const back = kind === 'product' ? paths.product(given.id) : paths.mix(given.id)
   const leave = async () => {
     guard.pass()
@@ -86,10 +86,20 @@ function ValueForm({ kind, given }: { kind: RecordKind; given: ProductRecord | M
           {added && Object.keys(shown.fields).length === 0 && !shown.summary && <Notice>Added {added}.</Notice>}
           {!factId && <PropertyChoice property={draft.property} kind={kind} onChoose={choose} />}
           {!factId && <TakesPlace record={given} property={draft.property} part={draft.part} base={back} />}
-          <ValueFields draft={draft} change={change} fields={shown.fields} parts={'parts' in given ? given.parts.map(({ part }) => part) : []} />
+          <ValueFields
+            draft={draft}
+            change={change}
+            fields={shown.fields}
+            parts={'parts' in given ? given.parts.map(({ part }) => part) : []}
+          />
           <HowFields
-            draft={draft} change={change} fields={shown.fields} citable={citableOf(given.sheets, fact)} firmOnly={definitionOf(draft.property).source === 'firm'}
-            returnTo={`${pathname}?resume=1`} onMark={guard.pass}
+            draft={draft}
+            change={change}
+            fields={shown.fields}
+            citable={citableOf(given.sheets, fact)}
+            firmOnly={definitionOf(draft.property).source === 'firm'}
+            returnTo={`${pathname}?resume=1`}
+            onMark={guard.pass}
           />
           <div className="flex flex-wrap gap-2">
             <Button type="submit" look="primary" busy={busy}>
@@ -111,7 +121,13 @@ function ValueForm({ kind, given }: { kind: RecordKind; given: ProductRecord | M
 
 function PropertyChoice({ property, kind, onChoose }: { property: Property; kind: RecordKind; onChoose: (property: Property) => void }) {
   return (
-    <SelectField label="Property" name="statement.property" value={property} onChange={(event) => onChoose(event.target.value as Property)} className="max-w-sm">
+    <SelectField
+      label="Property"
+      name="statement.property"
+      value={property}
+      onChange={(event) => onChoose(event.target.value as Property)}
+      className="max-w-sm"
+    >
       {propertyGroups.map(({ title, properties: members }) => (
         <optgroup key={title} label={title}>
           {members
@@ -128,7 +144,17 @@ function PropertyChoice({ property, kind, onChoose }: { property: Property; kind
 }
 
 /** Says so when the new value will take the place of one that is there. */
-function TakesPlace({ record, property, part, base }: { record: ProductRecord | MixRecord; property: Property; part: string; base: string }) {
+function TakesPlace({
+  record,
+  property,
+  part,
+  base,
+}: {
+  record: ProductRecord | MixRecord
+  property: Property
+  part: string
+  base: string
+}) {
   const there = record.facts.find((fact) => fact.property === property && fact.part === part)
   if (!there || definitionOf(property).repeats) return null
   return (
@@ -145,7 +171,11 @@ function GoneValue({ back }: { back: string }) {
   return (
     <Page title="This value is not there any more">
       <Notice>
-        Someone has changed or removed it. <Link to={back} className="text-resin underline">Go back to the record</Link> and look at what stands there now.
+        Someone has changed or removed it.{' '}
+        <Link to={back} className="text-resin underline">
+          Go back to the record
+        </Link>{' '}
+        and look at what stands there now.
       </Notice>
     </Page>
   )

@@ -12,7 +12,11 @@ describe('the value form', () => {
     fact({ property: 'density', value: { min: 9.4, max: 9.4, unit: 'lb/gal' }, part: 'A' }),
     fact({ property: 'voc', value: { max: 10, unit: 'g/L' }, thinned: true }),
     fact({ property: 'dewPointMargin', value: { min: 5, unit: 'Δ°F' } }),
-    fact({ property: 'potLife', value: { min: 25, max: 30, unit: 'min' }, at: { temperature: { value: 75, unit: '°F' }, mass: { value: 150, unit: 'g' }, relativeHumidity: { value: 50, unit: '%' } } }),
+    fact({
+      property: 'potLife',
+      value: { min: 25, max: 30, unit: 'min' },
+      at: { temperature: { value: 75, unit: '°F' }, mass: { value: 150, unit: 'g' }, relativeHumidity: { value: 50, unit: '%' } },
+    }),
     fact({ property: 'recoatWindow', value: { min: 8, unit: 'h' }, at: { next: 'Corbel Seal' } }),
     fact({ property: 'filmThickness', value: { min: 8, max: 20, unit: 'mil' }, film: 'wet' }),
     fact({ property: 'applicationTemperature', value: { min: -5, max: 35, unit: '°C' }, of: 'slab' }),
@@ -43,9 +47,16 @@ describe('the value form', () => {
   })
 
   it('tells each problem at an input that is there', () => {
-    expect(valueFields({ 'statement.value.min': 'a', 'statement.value': 'b', 'statement.value.unit': 'c', 'statement.value.codes.2': 'd', 'statement.at.mass.value': 'e', 'how.box': 'f' })).toEqual({
-      'statement.value': 'a', 'statement.value.unit': 'c', 'statement.at.mass.value': 'e', 'how.page': 'f',
-    })
+    expect(
+      valueFields({
+        'statement.value.min': 'a',
+        'statement.value': 'b',
+        'statement.value.unit': 'c',
+        'statement.value.codes.2': 'd',
+        'statement.at.mass.value': 'e',
+        'how.box': 'f',
+      }),
+    ).toEqual({ 'statement.value': 'a', 'statement.value.unit': 'c', 'statement.at.mass.value': 'e', 'how.page': 'f' })
   })
 
   it('sends what is no number as none, so that the field is named', () => {

@@ -54,13 +54,41 @@ export function unitsFor(property: Property): Unit[] {
 
 /** The first unit offered: the one that sheets of the trade print most. */
 const usual: Partial<Record<Property, Unit>> = {
-  density: 'lb/gal', voc: 'g/L', packSize: 'gal', potLife: 'min', workingTime: 'min', inductionTime: 'min', recoatWindow: 'h', tackFree: 'h', footTraffic: 'h', vehicleTraffic: 'h', fullCure: 'd',
-  filmThickness: 'mil', spreadRate: 'ft²/gal', consumption: 'lb/ft²', applicationTemperature: '°F', storageTemperature: '°F', flashPoint: '°F', dewPointMargin: 'Δ°F', pullOffStrength: 'psi',
+  density: 'lb/gal',
+  voc: 'g/L',
+  packSize: 'gal',
+  potLife: 'min',
+  workingTime: 'min',
+  inductionTime: 'min',
+  recoatWindow: 'h',
+  tackFree: 'h',
+  footTraffic: 'h',
+  vehicleTraffic: 'h',
+  fullCure: 'd',
+  filmThickness: 'mil',
+  spreadRate: 'ft²/gal',
+  consumption: 'lb/ft²',
+  applicationTemperature: '°F',
+  storageTemperature: '°F',
+  flashPoint: '°F',
+  dewPointMargin: 'Δ°F',
+  pullOffStrength: 'psi',
 }
 /** How sheets mostly say it: limits as bounds, working ranges from – to. */
 const usualSaying: Partial<Record<Property, Saying>> = {
-  recoatWindow: 'between', ingredient: 'between', filmThickness: 'between', applicationTemperature: 'between', storageTemperature: 'between', surfaceProfile: 'between', spreadRate: 'between',
-  voc: 'most', maxRelativeHumidity: 'most', substrateRelativeHumidity: 'most', moistureEmission: 'most', dewPointMargin: 'least', pullOffStrength: 'least',
+  recoatWindow: 'between',
+  ingredient: 'between',
+  filmThickness: 'between',
+  applicationTemperature: 'between',
+  storageTemperature: 'between',
+  surfaceProfile: 'between',
+  spreadRate: 'between',
+  voc: 'most',
+  maxRelativeHumidity: 'most',
+  substrateRelativeHumidity: 'most',
+  moistureEmission: 'most',
+  dewPointMargin: 'least',
+  pullOffStrength: 'least',
 }
 const usualOf: Record<ConditionName, Unit> = { temperature: '°F', mass: 'g', volume: 'gal', relativeHumidity: '%', film: 'mil' }
 
@@ -92,7 +120,10 @@ function valueOf(draft: ValueDraft): unknown {
 
 /** Codes from a line of them. The first letters are made capitals; those after the digits tell classes apart by their case (H360Fd, H350i) and stay. */
 export function codesFrom(text: string): string[] {
-  const codes = text.replace(/\s*\+\s*/g, '+').split(/[\s,;]+/).filter(Boolean)
+  const codes = text
+    .replace(/\s*\+\s*/g, '+')
+    .split(/[\s,;]+/)
+    .filter(Boolean)
   return codes.map((code) => code.replace(/(^|\+)[a-z]+/gi, (letters) => letters.toUpperCase()))
 }
 
@@ -147,13 +178,33 @@ function sayingOf(min: number | undefined, max: number | undefined): Saying {
   return min === max ? 'one' : 'between'
 }
 
-const blankConditions = () => Object.fromEntries(conditionNames.map((name) => [name, { value: '', unit: usualOf[name] }])) as ValueDraft['at']
+const blankConditions = () =>
+  Object.fromEntries(conditionNames.map((name) => [name, { value: '', unit: usualOf[name] }])) as ValueDraft['at']
 
 /** What the inputs begin with: empty, or what a value says. */
 export function draftOf(property: Property, fact?: Fact): ValueDraft {
   const blank: ValueDraft = {
-    property, part: 'mixed', saying: usualSaying[property] ?? 'one', min: '', max: '', unit: usual[property] ?? unitsFor(property)[0] ?? '', text: '', basis: 'volume', cas: '', is: 'yes', at: blankConditions(),
-    next: '', wetOrDry: '', of: '', thinned: '', how: 'entered', reason: '', revisionId: '', page: '1', box: '', quote: '',
+    property,
+    part: 'mixed',
+    saying: usualSaying[property] ?? 'one',
+    min: '',
+    max: '',
+    unit: usual[property] ?? unitsFor(property)[0] ?? '',
+    text: '',
+    basis: 'volume',
+    cas: '',
+    is: 'yes',
+    at: blankConditions(),
+    next: '',
+    wetOrDry: '',
+    of: '',
+    thinned: '',
+    how: 'entered',
+    reason: '',
+    revisionId: '',
+    page: '1',
+    box: '',
+    quote: '',
   }
   if (!fact) return blank
   const { value, at, origin } = fact
@@ -165,7 +216,14 @@ export function draftOf(property: Property, fact?: Fact): ValueDraft {
   return {
     ...blank,
     part: fact.part,
-    ...('unit' in value ? { saying: 'name' in value && value.min === undefined && value.max === undefined ? 'between' : sayingOf(value.min, value.max), min: written(value.min), max: written(value.max), unit: value.unit } : {}),
+    ...('unit' in value
+      ? {
+          saying: 'name' in value && value.min === undefined && value.max === undefined ? 'between' : sayingOf(value.min, value.max),
+          min: written(value.min),
+          max: written(value.max),
+          unit: value.unit,
+        }
+      : {}),
     ...('parts' in value ? { text: value.parts.join(' : '), basis: value.basis ?? '' } : {}),
     ...('codes' in value ? { text: value.codes.join(', ') } : {}),
     ...('name' in value ? { text: value.name, cas: value.cas ?? '' } : {}),
@@ -178,7 +236,13 @@ export function draftOf(property: Property, fact?: Fact): ValueDraft {
     of: fact.of ?? '',
     thinned: fact.thinned ? 'yes' : '',
     ...(origin.kind === 'stated'
-      ? { how: 'stated' as const, revisionId: origin.citation.revisionId, page: String(origin.citation.page), box: origin.citation.box?.join(',') ?? '', quote: origin.citation.quote ?? '' }
+      ? {
+          how: 'stated' as const,
+          revisionId: origin.citation.revisionId,
+          page: String(origin.citation.page),
+          box: origin.citation.box?.join(',') ?? '',
+          quote: origin.citation.quote ?? '',
+        }
       : { how: 'entered' as const, reason: origin.kind === 'entered' ? origin.reason : '' }),
   }
 }

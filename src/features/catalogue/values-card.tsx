@@ -20,7 +20,9 @@ export function ValuesCard({ base, record }: ValuesCardProps) {
   const known = propertyGroups
     .map(({ title, properties: members }) => ({
       title,
-      lines: members.map((property) => ({ property, facts: record.facts.filter((fact) => fact.property === property) })).filter(({ facts }) => facts.length > 0),
+      lines: members
+        .map((property) => ({ property, facts: record.facts.filter((fact) => fact.property === property) }))
+        .filter(({ facts }) => facts.length > 0),
     }))
     .filter(({ lines }) => lines.length > 0)
   return (
@@ -60,7 +62,7 @@ function ValueLine({ base, fact, isSuperseded }: { base: string; fact: Fact; isS
   const conditions = formatConditions(fact.at, system)
   const shown = formatValue(fact, system)
   return (
-    <div className="flex items-baseline justify-between gap-x-3">
+    <div className="flex min-h-6 items-baseline justify-between gap-x-3 py-px">
       <span className="min-w-0 break-words">
         {fact.part !== 'mixed' && <span className="text-pencil">part {fact.part} </span>}
         <OriginValue origin={fact.origin}>{shown}</OriginValue>
@@ -73,7 +75,11 @@ function ValueLine({ base, fact, isSuperseded }: { base: string; fact: Fact; isS
         )}
       </span>
       {mayWrite && (
-        <Link to={`${base}/values/${fact.id}`} className="no-print -my-1 shrink-0 px-1 py-1 text-small text-resin hover:underline" aria-label={`Amend ${properties[fact.property].label} ${shown} ${conditions}`.trim()}>
+        <Link
+          to={`${base}/values/${fact.id}`}
+          className="no-print min-h-6 shrink-0 px-1 text-small leading-6 text-resin hover:underline"
+          aria-label={`Amend ${properties[fact.property].label} ${shown} ${conditions}`.trim()}
+        >
           Amend
         </Link>
       )}

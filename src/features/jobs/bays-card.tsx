@@ -22,7 +22,12 @@ export function BaysCard({ body, change, fields, disabled }: JobFormPart) {
   const put = (index: number, bay: Bay) => change({ bays: bays.map((one, at) => (at === index ? bay : one)) })
   const add = () => {
     const last = bays.at(-1)
-    change({ bays: [...bays, { id: freshBayId(bays), name: `Bay ${bays.length + 1}`, area: last?.area ?? { value: 500, unit: 'ft²' }, joints: [], spalls: null }] })
+    change({
+      bays: [
+        ...bays,
+        { id: freshBayId(bays), name: `Bay ${bays.length + 1}`, area: last?.area ?? { value: 500, unit: 'ft²' }, joints: [], spalls: null },
+      ],
+    })
   }
   return (
     <Card title="Bays" actions={<span className="text-pencil">{bays.length > 0 && `${bays.length}, ${totalOf(bays)} in all`}</span>}>
@@ -33,12 +38,23 @@ export function BaysCard({ body, change, fields, disabled }: JobFormPart) {
           <li key={bay.id} className="border-b border-rule px-4 py-3">
             <div className="flex flex-wrap items-start gap-3">
               <TextField
-                label="Bay" name={`bays.${index}.name`} value={bay.name} disabled={disabled} error={fields[`bays.${index}.name`]} className="w-32"
+                label="Bay"
+                name={`bays.${index}.name`}
+                value={bay.name}
+                disabled={disabled}
+                error={fields[`bays.${index}.name`]}
+                className="w-32"
                 onChange={(event) => put(index, { ...bay, name: event.target.value })}
               />
               <QuantityField
-                label="Area" name={`bays.${index}.area.value`} value={bay.area} units={['ft²', 'm²']} disabled={disabled} className="w-44"
-                error={fields[`bays.${index}.area.value`]} onChange={(area) => area && put(index, { ...bay, area })}
+                label="Area"
+                name={`bays.${index}.area.value`}
+                value={bay.area}
+                units={['ft²', 'm²']}
+                disabled={disabled}
+                className="w-44"
+                error={fields[`bays.${index}.area.value`]}
+                onChange={(area) => area && put(index, { ...bay, area })}
               />
               {!disabled && (
                 <Button look="quiet" className="mt-7" onClick={() => change({ bays: bays.filter((_, at) => at !== index) })}>

@@ -22,14 +22,26 @@ export function CrewCard({ body, change, fields, disabled, job }: JobFormPart & 
               ) : (
                 items.map((person) => (
                   <label key={person.id} className="flex min-h-9 items-center gap-2">
-                    <input type="checkbox" className="h-5 w-5" checked={body.crewIds.includes(person.id)} disabled={disabled} onChange={(event) => toggle(person.id, event.target.checked)} />
+                    <input
+                      type="checkbox"
+                      className="h-5 w-5"
+                      checked={body.crewIds.includes(person.id)}
+                      disabled={disabled}
+                      onChange={(event) => toggle(person.id, event.target.checked)}
+                    />
                     {person.name}
                   </label>
                 ))
               )
             }
           </Asking>
-          {Object.entries(fields).map(([name, message]) => (name.startsWith('crewIds') ? <p key={name} className="font-semibold text-stop">{message}</p> : null))}
+          {Object.entries(fields).map(([name, message]) =>
+            name.startsWith('crewIds') ? (
+              <p key={name} className="font-semibold text-stop">
+                {message}
+              </p>
+            ) : null,
+          )}
         </fieldset>
         {job && (
           <div>

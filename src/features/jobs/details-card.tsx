@@ -17,19 +17,60 @@ export function DetailsCard({ body, change, fields, disabled }: JobFormPart) {
   return (
     <Card title="Job">
       <div className="grid gap-4 p-4 sm:grid-cols-2">
-        <TextField label="Name" name="name" value={body.name} error={fields['name']} disabled={disabled} className="sm:col-span-2" onChange={(event) => change({ name: event.target.value })} />
-        <TextField label="Client" name="client" value={body.client} error={fields['client']} disabled={disabled} onChange={(event) => change({ client: event.target.value })} />
-        <TextField label="Site" name="site" value={body.site} error={fields['site']} disabled={disabled} onChange={(event) => change({ site: event.target.value })} />
         <TextField
-          label="Planned start of the first course" name="startsAt" type="datetime-local" value={toLocal(body.startsAt)} error={fields['startsAt']} disabled={disabled}
-          help="In this device's time." onChange={(event) => change({ startsAt: fromLocal(event.target.value) })}
+          label="Name"
+          name="name"
+          value={body.name}
+          error={fields['name']}
+          disabled={disabled}
+          className="sm:col-span-2"
+          onChange={(event) => change({ name: event.target.value })}
         />
-        <SelectField label="Time zone of the site" name="timeZone" value={body.timeZone} error={fields['timeZone']} disabled={disabled} onChange={(event) => change({ timeZone: event.target.value })}>
+        <TextField
+          label="Client"
+          name="client"
+          value={body.client}
+          error={fields['client']}
+          disabled={disabled}
+          onChange={(event) => change({ client: event.target.value })}
+        />
+        <TextField
+          label="Site"
+          name="site"
+          value={body.site}
+          error={fields['site']}
+          disabled={disabled}
+          onChange={(event) => change({ site: event.target.value })}
+        />
+        <TextField
+          label="Planned start of the first course"
+          name="startsAt"
+          type="datetime-local"
+          value={toLocal(body.startsAt)}
+          error={fields['startsAt']}
+          disabled={disabled}
+          help="In this device's time."
+          onChange={(event) => change({ startsAt: fromLocal(event.target.value) })}
+        />
+        <SelectField
+          label="Time zone of the site"
+          name="timeZone"
+          value={body.timeZone}
+          error={fields['timeZone']}
+          disabled={disabled}
+          onChange={(event) => change({ timeZone: event.target.value })}
+        >
           {[...new Set([body.timeZone, ...zones])].map((zone) => (
             <option key={zone}>{zone}</option>
           ))}
         </SelectField>
-        <SelectField label="Standing" name="status" value={body.status} disabled={disabled} onChange={(event) => change({ status: event.target.value === 'closed' ? 'closed' : 'open' })}>
+        <SelectField
+          label="Standing"
+          name="status"
+          value={body.status}
+          disabled={disabled}
+          onChange={(event) => change({ status: event.target.value === 'closed' ? 'closed' : 'open' })}
+        >
           <option value="open">Open</option>
           <option value="closed">Closed</option>
         </SelectField>

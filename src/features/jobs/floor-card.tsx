@@ -17,12 +17,25 @@ export function FloorCard({ body, change, fields, disabled, job }: JobFormPart &
   const released = useReleasedBuildUps()
   const worked = useEvaluated(body, job)
   return (
-    <Card title="Floor" actions={worked && <Link className="text-resin hover:underline" to={paths.buildUp(worked.buildUp.buildUpId, worked.buildUp.version)}>Open the build-up</Link>}>
+    <Card
+      title="Floor"
+      actions={
+        worked && (
+          <Link className="text-resin hover:underline" to={paths.buildUp(worked.buildUp.buildUpId, worked.buildUp.version)}>
+            Open the build-up
+          </Link>
+        )
+      }
+    >
       <div className="p-4">
         <Asking query={released} says={sentenceOf}>
           {(list) => (
             <SelectField
-              label="Build-up" name="buildUpVersionId" value={body.buildUpVersionId ?? ''} disabled={disabled} error={fields['buildUpVersionId']}
+              label="Build-up"
+              name="buildUpVersionId"
+              value={body.buildUpVersionId ?? ''}
+              disabled={disabled}
+              error={fields['buildUpVersionId']}
               help={list.length === 0 ? 'No build-up is released yet. A technical lead releases one.' : 'Released versions only.'}
               onChange={(event) => change({ buildUpVersionId: event.target.value || null })}
             >
@@ -49,7 +62,10 @@ export function FloorCard({ body, change, fields, disabled, job }: JobFormPart &
           </div>
           <div className="border-t border-rule p-4">
             <h3 className="mb-2">Checks at this job’s conditions</h3>
-            <FindingList findings={worked.evaluation.findings} titles={Object.fromEntries(worked.input.courses.map(({ id, title }) => [id, title]))} />
+            <FindingList
+              findings={worked.evaluation.findings}
+              titles={Object.fromEntries(worked.input.courses.map(({ id, title }) => [id, title]))}
+            />
           </div>
         </>
       )}

@@ -3,7 +3,19 @@ import type { Job, JobBody } from '../../../shared/api/jobs.ts'
 /** What of a job a person edits. */
 export function bodyOf(job: Job): JobBody {
   const { name, client, site, status, conditions, loss, startsAt, timeZone, bays, crew, buildUp } = job
-  return { name, client, site, status, conditions, loss, startsAt, timeZone, bays, crewIds: crew.map(({ id }) => id), buildUpVersionId: buildUp?.versionId ?? null }
+  return {
+    name,
+    client,
+    site,
+    status,
+    conditions,
+    loss,
+    startsAt,
+    timeZone,
+    bays,
+    crewIds: crew.map(({ id }) => id),
+    buildUpVersionId: buildUp?.versionId ?? null,
+  }
 }
 
 /** A job before anything is known of it. The conditions are a heated hall, to be replaced by what is measured. */

@@ -29,7 +29,9 @@ export function JobEditor({ job }: { job: Job | undefined }) {
   const save = useSaveJob()
   const navigate = useNavigate()
   const dirty = body !== saved
-  const blocker = useBlocker(({ currentLocation, nextLocation }) => dirty && currentLocation.pathname !== nextLocation.pathname && !leaving.now)
+  const blocker = useBlocker(
+    ({ currentLocation, nextLocation }) => dirty && currentLocation.pathname !== nextLocation.pathname && !leaving.now,
+  )
   const { submit, problems, busy } = useSubmit(jobEndpoints.addJob.body, async (checked) => {
     try {
       return base ? await save.change(base, checked) : await save.add(checked)
@@ -50,7 +52,12 @@ export function JobEditor({ job }: { job: Job | undefined }) {
       leaving.now = false
     }
   }
-  const part: JobFormPart = { body, change: (changes) => setBody((before) => ({ ...before, ...changes })), fields: problems.fields, disabled: !mayWrite }
+  const part: JobFormPart = {
+    body,
+    change: (changes) => setBody((before) => ({ ...before, ...changes })),
+    fields: problems.fields,
+    disabled: !mayWrite,
+  }
   return (
     <Page
       title={base ? base.name : 'Open a job'}

@@ -31,7 +31,11 @@ export function JobsPage() {
       <Card>
         <div className="flex flex-wrap gap-4 border-b border-rule p-4">
           <TextField
-            label="Search" type="search" defaultValue={address.q} className="w-full max-w-sm" placeholder="Name, client or site"
+            label="Search"
+            type="search"
+            defaultValue={address.q}
+            className="w-full max-w-sm"
+            placeholder="Name, client or site"
             onChange={(event) => address.set({ q: event.target.value })}
           />
           <SelectField label="Standing" value={status} onChange={(event) => address.set({ status: event.target.value })}>
@@ -93,11 +97,24 @@ interface JobTableProps {
 }
 
 function JobTable({ page, address, stale, filtered }: JobTableProps) {
-  if (page.items.length === 0) return <Notice>{filtered ? 'No job matches. Change the search or the standing.' : 'No jobs yet. Open one to work out quantities and write its specification.'}</Notice>
+  if (page.items.length === 0)
+    return (
+      <Notice>
+        {filtered
+          ? 'No job matches. Change the search or the standing.'
+          : 'No jobs yet. Open one to work out quantities and write its specification.'}
+      </Notice>
+    )
   return (
     <ListTable
-      caption="Jobs" columns={columns} page={page} sort={address.sort} stale={stale} rowKey={(job) => job.id}
-      onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+      caption="Jobs"
+      columns={columns}
+      page={page}
+      sort={address.sort}
+      stale={stale}
+      rowKey={(job) => job.id}
+      onSort={(sort) => address.set({ sort })}
+      onCursor={(cursor) => address.set({ cursor })}
     />
   )
 }

@@ -22,7 +22,9 @@ export function QuantitiesCards({ body, job }: { body: JobBody; job: Job | undef
   return (
     <>
       <Card title="Quantities">
-        {body.conditions.texture === null && <p className="px-4 pt-3 text-pencil">The texture of the slab is not measured: the resin that it takes is not counted.</p>}
+        {body.conditions.texture === null && (
+          <p className="px-4 pt-3 text-pencil">The texture of the slab is not measured: the resin that it takes is not counted.</p>
+        )}
         {[...worked.quantities].reverse().map((course) => (
           <CourseTable key={course.courseId} course={course} />
         ))}
@@ -52,24 +54,38 @@ function CourseTable({ course }: { course: CourseQuantity }) {
         <table className="w-full text-right text-small">
           <thead>
             <tr className="border-b border-rule text-pencil">
-              <th scope="col" className="py-1 text-left font-normal">Bay</th>
-              <th scope="col" className="font-normal">Area</th>
+              <th scope="col" className="py-1 text-left font-normal">
+                Bay
+              </th>
+              <th scope="col" className="font-normal">
+                Area
+              </th>
               {shown.map((term) => (
-                <th key={term} scope="col" className="font-normal">{termNames[term]}</th>
+                <th key={term} scope="col" className="font-normal">
+                  {termNames[term]}
+                </th>
               ))}
-              <th scope="col" className="font-normal">Total</th>
+              <th scope="col" className="font-normal">
+                Total
+              </th>
             </tr>
           </thead>
           <tbody>
             {course.bays.map((bay) => (
               <tr key={bay.bayId} className="border-b border-rule">
-                <th scope="row" className="py-1 text-left font-normal">{bay.name}</th>
-                <td><QuantityText {...bay.area} /></td>
+                <th scope="row" className="py-1 text-left font-normal">
+                  {bay.name}
+                </th>
+                <td>
+                  <QuantityText {...bay.area} />
+                </td>
                 {shown.map((term) => {
                   const figure = bay[term]
                   return <td key={term}>{figure ? <FigureView figure={figure} /> : '–'}</td>
                 })}
-                <td><FigureView figure={bay.total} /></td>
+                <td>
+                  <FigureView figure={bay.total} />
+                </td>
               </tr>
             ))}
           </tbody>
@@ -80,15 +96,15 @@ function CourseTable({ course }: { course: CourseQuantity }) {
   )
 }
 
-const splitWords = {
-  allowed: 'The sheet allows part kits.',
-  forbidden: 'The sheet forbids part kits: whole kits for each bay.',
-} as const
+const splitWords = { allowed: 'The sheet allows part kits.', forbidden: 'The sheet forbids part kits: whole kits for each bay.' } as const
 
 /** Components, sand and kits of a course. */
 function CourseParts({ course }: { course: CourseQuantity }) {
   const { packing } = course
-  const word = packing.partKits in splitWords ? splitWords[packing.partKits as keyof typeof splitWords] : 'No sheet says whether kits may be split: whole kits for each bay.'
+  const word =
+    packing.partKits in splitWords
+      ? splitWords[packing.partKits as keyof typeof splitWords]
+      : 'No sheet says whether kits may be split: whole kits for each bay.'
   return (
     <div className="mt-2 text-small">
       {course.parts.map((part) => (

@@ -27,7 +27,8 @@ export function useSaveJob() {
   }
   return {
     add: async (body: JobBody) => keep(await call(wire.addJob, { body })),
-    change: async ({ id, version }: Pick<Job, 'id' | 'version'>, body: JobBody) => keep(await call(wire.changeJob, { params: { jobId: id }, body: { ...body, version } })),
+    change: async ({ id, version }: Pick<Job, 'id' | 'version'>, body: JobBody) =>
+      keep(await call(wire.changeJob, { params: { jobId: id }, body: { ...body, version } })),
     reload: (jobId: string) => client.invalidateQueries({ queryKey: keys.one(jobId) }),
   }
 }
@@ -38,7 +39,9 @@ export function useReleasedBuildUps() {
     queryKey: ['build-ups', 'released'],
     queryFn: async ({ signal }) => {
       const { items } = await call(buildUpEndpoints.listBuildUps, { query: { sort: 'name', limit: 200 }, signal })
-      return items.flatMap(({ id, number, name, released }) => (released ? [{ id, number, name, versionId: released.versionId, version: released.number }] : []))
+      return items.flatMap(({ id, number, name, released }) =>
+        released ? [{ id, number, name, versionId: released.versionId, version: released.number }] : [],
+      )
     },
   })
 }

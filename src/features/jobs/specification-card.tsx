@@ -47,11 +47,19 @@ export function SpecificationCard({ job, dirty }: { job: Job; dirty: boolean }) 
                 <Link to={paths.specification(id)} className="font-semibold text-resin underline-offset-4 hover:underline">
                   {sectionNumber} {title}
                 </Link>
-                <span className="block text-small text-pencil">{last ? `Issue ${last.number}, by ${last.issuedByName}` : 'Draft, not issued'}</span>
+                <span className="block text-small text-pencil">
+                  {last ? `Issue ${last.number}, by ${last.issuedByName}` : 'Draft, not issued'}
+                </span>
               </li>
             ))}
             {items.length === 0 && (
-              <li className="px-4 py-3 text-pencil">{job.buildUp ? (dirty ? 'Save the job, then write its specification.' : 'None yet.') : 'Choose a released build-up and save, then write its specification.'}</li>
+              <li className="px-4 py-3 text-pencil">
+                {job.buildUp
+                  ? dirty
+                    ? 'Save the job, then write its specification.'
+                    : 'None yet.'
+                  : 'Choose a released build-up and save, then write its specification.'}
+              </li>
             )}
           </ul>
         )}

@@ -35,8 +35,23 @@ export function AccountPage() {
           <form onSubmit={onSubmit} className="flex max-w-md flex-col gap-4 p-4">
             <ProblemSummary problems={problems} />
             {changed && <Notice>The password is changed. All other devices are signed out.</Notice>}
-            <TextField label="Present password" name="currentPassword" type="password" autoComplete="current-password" required error={problems.fields['currentPassword']} />
-            <TextField label="New password" name="newPassword" type="password" autoComplete="new-password" help="At least 12 characters." required error={problems.fields['newPassword']} />
+            <TextField
+              label="Present password"
+              name="currentPassword"
+              type="password"
+              autoComplete="current-password"
+              required
+              error={problems.fields['currentPassword']}
+            />
+            <TextField
+              label="New password"
+              name="newPassword"
+              type="password"
+              autoComplete="new-password"
+              help="At least 12 characters."
+              required
+              error={problems.fields['newPassword']}
+            />
             <div>
               <Button type="submit" look="primary" busy={busy}>
                 Change password

@@ -41,8 +41,13 @@ function FirmForm({ firm }: { firm: Firm }) {
         <AreaField label="Address" name="address" defaultValue={firm.address} error={fields['address']} />
         <TextField label="Telephone" name="phone" defaultValue={firm.phone} error={fields['phone']} />
         <TextField
-          label="Oldest safety sheet to accept" name="sheetAgeLimitYears" inputMode="decimal" defaultValue={String(firm.sheetAgeLimitYears)} unit="years"
-          help="Older ones are called out by the check of sheets." error={fields['sheetAgeLimitYears']}
+          label="Oldest safety sheet to accept"
+          name="sheetAgeLimitYears"
+          inputMode="decimal"
+          defaultValue={String(firm.sheetAgeLimitYears)}
+          unit="years"
+          help="Older ones are called out by the check of sheets."
+          error={fields['sheetAgeLimitYears']}
         />
         <div>
           <Button type="submit" look="primary" busy={busy}>

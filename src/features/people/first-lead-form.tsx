@@ -23,11 +23,26 @@ export function FirstLeadForm() {
       <h1 className="mb-4 text-title">Start a new firm</h1>
       <ProblemSummary problems={problems} />
       <form onSubmit={onSubmit} className="flex flex-col gap-4 border border-rule bg-card p-5">
-        <TextField label="Code" name="code" help="Printed where Wearcourse was started." autoComplete="off" required error={fields['code']} />
+        <TextField
+          label="Code"
+          name="code"
+          help="Printed where Wearcourse was started."
+          autoComplete="off"
+          required
+          error={fields['code']}
+        />
         <TextField label="Name of the firm" name="firmName" autoComplete="organization" required error={fields['firmName']} />
         <TextField label="Your name" name="name" autoComplete="name" required error={fields['name']} />
         <TextField label="Your e-mail address" name="email" type="email" autoComplete="username" required error={fields['email']} />
-        <TextField label="Password" name="password" type="password" help="At least 12 characters. A few unrelated words do well." autoComplete="new-password" required error={fields['password']} />
+        <TextField
+          label="Password"
+          name="password"
+          type="password"
+          help="At least 12 characters. A few unrelated words do well."
+          autoComplete="new-password"
+          required
+          error={fields['password']}
+        />
         <div>
           <Button type="submit" look="primary" busy={busy}>
             Start

@@ -27,7 +27,15 @@ export function ForgottenPassword({ onBack }: { onBack: () => void }) {
         <>
           <ProblemSummary problems={problems} />
           <form onSubmit={onSubmit} className="border border-rule bg-card p-5">
-            <TextField label="E-mail address" name="email" type="email" autoComplete="username" required error={problems.fields['email']} className="mb-5" />
+            <TextField
+              label="E-mail address"
+              name="email"
+              type="email"
+              autoComplete="username"
+              required
+              error={problems.fields['email']}
+              className="mb-5"
+            />
             <Button type="submit" look="primary" busy={busy}>
               Send me a link
             </Button>

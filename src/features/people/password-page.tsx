@@ -39,8 +39,14 @@ export function PasswordPage() {
           <ProblemSummary problems={problems} />
           <form onSubmit={onSubmit} className="border border-rule bg-card p-5">
             <TextField
-              label="New password" name="password" type="password" autoComplete="new-password" required className="mb-5"
-              help="At least 12 characters. A few unrelated words do well." error={problems.fields['password'] ?? (problems.fields['token'] && 'The link is not whole. Open it again from the mail.')}
+              label="New password"
+              name="password"
+              type="password"
+              autoComplete="new-password"
+              required
+              className="mb-5"
+              help="At least 12 characters. A few unrelated words do well."
+              error={problems.fields['password'] ?? (problems.fields['token'] && 'The link is not whole. Open it again from the mail.')}
             />
             <Button type="submit" look="primary" busy={busy}>
               Set password

@@ -27,9 +27,15 @@ export function PeoplePage() {
       title="People"
       actions={
         <>
-          <Link className="text-resin underline-offset-4 hover:underline" to={paths.firm}>Firm</Link>
-          <Link className="text-resin underline-offset-4 hover:underline" to={paths.outbox}>Outbox</Link>
-          <Link className="text-resin underline-offset-4 hover:underline" to={paths.changes}>Changes</Link>
+          <Link className="text-resin underline-offset-4 hover:underline" to={paths.firm}>
+            Firm
+          </Link>
+          <Link className="text-resin underline-offset-4 hover:underline" to={paths.outbox}>
+            Outbox
+          </Link>
+          <Link className="text-resin underline-offset-4 hover:underline" to={paths.changes}>
+            Changes
+          </Link>
           <Button look="primary" onClick={() => setInviting(true)}>
             Invite a person
           </Button>
@@ -41,7 +47,13 @@ export function PeoplePage() {
       </Dialog>
       <Card>
         <div className="border-b border-rule p-4">
-          <TextField label="Search" type="search" defaultValue={address.q} onChange={(event) => address.set({ q: event.target.value })} className="max-w-sm" />
+          <TextField
+            label="Search"
+            type="search"
+            defaultValue={address.q}
+            onChange={(event) => address.set({ q: event.target.value })}
+            className="max-w-sm"
+          />
         </div>
         <Asking query={people} says={sentenceOf}>
           {(page) => <PeopleTable page={page} address={address} stale={people.isPlaceholderData} />}
@@ -71,8 +83,14 @@ function PeopleTable({ page, address, stale }: PeopleTableProps) {
   if (page.items.length === 0) return <Notice>Nobody matches this search.</Notice>
   return (
     <ListTable
-      caption="People of the firm" columns={columns} page={page} sort={address.sort} stale={stale} rowKey={(person) => person.id}
-      onSort={(sort) => address.set({ sort })} onCursor={(cursor) => address.set({ cursor })}
+      caption="People of the firm"
+      columns={columns}
+      page={page}
+      sort={address.sort}
+      stale={stale}
+      rowKey={(person) => person.id}
+      onSort={(sort) => address.set({ sort })}
+      onCursor={(cursor) => address.set({ cursor })}
     />
   )
 }
@@ -86,8 +104,11 @@ function PersonActions({ person }: { person: Person }) {
   return (
     <div className="flex flex-wrap items-center gap-2">
       <select
-        aria-label={`Role of ${person.name}`} className="min-h-9 border border-pencil bg-card px-1" value={person.role}
-        disabled={change.isPending || person.id === user.id} onChange={(event) => update({ role: event.target.value as Person['role'] })}
+        aria-label={`Role of ${person.name}`}
+        className="min-h-9 border border-pencil bg-card px-1"
+        value={person.role}
+        disabled={change.isPending || person.id === user.id}
+        onChange={(event) => update({ role: event.target.value as Person['role'] })}
       >
         {Object.entries(roleNames).map(([role, name]) => (
           <option key={role} value={role}>
@@ -101,7 +122,11 @@ function PersonActions({ person }: { person: Person }) {
         </Button>
       )}
       {person.id !== user.id && person.status !== 'invited' && (
-        <Button look={person.status === 'disabled' ? 'plain' : 'stop'} busy={change.isPending} onClick={() => update({ status: person.status === 'disabled' ? 'active' : 'disabled' })}>
+        <Button
+          look={person.status === 'disabled' ? 'plain' : 'stop'}
+          busy={change.isPending}
+          onClick={() => update({ status: person.status === 'disabled' ? 'active' : 'disabled' })}
+        >
           {person.status === 'disabled' ? 'Enable' : 'Disable'}
         </Button>
       )}

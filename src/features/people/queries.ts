@@ -107,5 +107,9 @@ export function useCrew(enabled = true) {
 
 /** Who changed what of one subject, or of all. */
 export function useChanges(subject: { subjectKind?: string; subjectId?: string }, enabled = true) {
-  return useQuery({ queryKey: [...keys.changes, subject], queryFn: ({ signal }) => call(peopleWire.listChanges, { query: { ...subject, limit: 100 }, signal }), enabled })
+  return useQuery({
+    queryKey: [...keys.changes, subject],
+    queryFn: ({ signal }) => call(peopleWire.listChanges, { query: { ...subject, limit: 100 }, signal }),
+    enabled,
+  })
 }

@@ -58,8 +58,24 @@ function SignInForm({ firmName }: { firmName: string }) {
       <h1 className="mb-4 text-title">Sign in to {firmName}</h1>
       <ProblemSummary problems={problems} />
       <form onSubmit={onSubmit} className="border border-rule bg-card p-5">
-        <TextField label="E-mail address" name="email" type="email" autoComplete="username" required error={problems.fields['email']} className="mb-4" />
-        <TextField label="Password" name="password" type="password" autoComplete="current-password" required error={problems.fields['password']} className="mb-5" />
+        <TextField
+          label="E-mail address"
+          name="email"
+          type="email"
+          autoComplete="username"
+          required
+          error={problems.fields['email']}
+          className="mb-4"
+        />
+        <TextField
+          label="Password"
+          name="password"
+          type="password"
+          autoComplete="current-password"
+          required
+          error={problems.fields['password']}
+          className="mb-5"
+        />
         <div className="flex flex-wrap items-center justify-between gap-3">
           <Button type="submit" look="primary" busy={busy}>
             Sign in

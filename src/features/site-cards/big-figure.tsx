@@ -11,7 +11,11 @@ export function BigFigure({ figure, large = true }: { figure: Figure; large?: bo
       <span className={large ? 'text-site-figure font-bold' : 'font-semibold'}>{number}</span> {unit}
     </>
   )
-  return figure.kind === 'fact' && figure.origin.kind === 'stated' ? <CitationLink citation={figure.origin.citation}>{shown}</CitationLink> : <span>{shown}</span>
+  return figure.kind === 'fact' && figure.origin.kind === 'stated' ? (
+    <CitationLink citation={figure.origin.citation}>{shown}</CitationLink>
+  ) : (
+    <span>{shown}</span>
+  )
 }
 
 /** Why a figure is missing, in the sheet's terms. */

@@ -32,17 +32,26 @@ export function CardScreen({ card }: { card: SiteCard }) {
           Card as of {new Date(card.asOf).toLocaleString([], { dateStyle: 'medium', timeStyle: 'short' })}
         </p>
       </header>
-      {card.buildUp ? <CardBody card={card} buildUp={card.buildUp} /> : <p className="p-4">No floor is chosen for this job yet. Call the office.</p>}
+      {card.buildUp ? (
+        <CardBody card={card} buildUp={card.buildUp} />
+      ) : (
+        <p className="p-4">No floor is chosen for this job yet. Call the office.</p>
+      )}
     </main>
   )
 }
 
 function CardBody({ card, buildUp }: { card: SiteCard; buildUp: JobBuildUp }) {
   const [slab, setSlab] = useState<Quantity>(card.conditions.slabTemperature)
-  const [courseId, setCourseId] = useState(() => (buildUp.input.courses.find((course) => !isDry(course)) ?? buildUp.input.courses[0])?.id ?? '')
+  const [courseId, setCourseId] = useState(
+    () => (buildUp.input.courses.find((course) => !isDry(course)) ?? buildUp.input.courses[0])?.id ?? '',
+  )
   const [bayId, setBayId] = useState(card.bays[0]?.id ?? '')
   const [view, setView] = useState<View>('mix')
-  const input = useMemo(() => ({ ...buildUp.input, conditions: { ...buildUp.input.conditions, slabTemperature: slab } }), [buildUp.input, slab])
+  const input = useMemo(
+    () => ({ ...buildUp.input, conditions: { ...buildUp.input.conditions, slabTemperature: slab } }),
+    [buildUp.input, slab],
+  )
   const evaluation = useMemo(() => evaluate(input), [input])
   const course = input.courses.find(({ id }) => id === courseId)
   const result = evaluation.courses.find((one) => one.courseId === courseId)
@@ -51,7 +60,11 @@ function CardBody({ card, buildUp }: { card: SiteCard; buildUp: JobBuildUp }) {
   if (!course || !result) return <p className="p-4">This floor has no courses. Call the office.</p>
   return (
     <>
-      {buildUp.status === 'withdrawn' && <p className="border-b-2 border-stop bg-card p-4 font-semibold text-stop">■ The office has withdrawn this floor. Hold the work and call.</p>}
+      {buildUp.status === 'withdrawn' && (
+        <p className="border-b-2 border-stop bg-card p-4 font-semibold text-stop">
+          ■ The office has withdrawn this floor. Hold the work and call.
+        </p>
+      )}
       <div className="grid gap-3 px-4 pt-3">
         <CoursePicker courses={input.courses} courseId={courseId} onCourse={setCourseId} bays={card.bays} bayId={bayId} onBay={setBayId} />
       </div>
@@ -61,14 +74,20 @@ function CardBody({ card, buildUp }: { card: SiteCard; buildUp: JobBuildUp }) {
           {mix ? (
             <>
               <MixPanel course={course} mix={mix} result={result} bay={bay} />
-              <ClockPanel key={`${card.jobId} ${bayId} ${courseId}`} place={`${card.jobId} ${bayId} ${courseId}`} result={result} zone={card.timeZone} />
+              <ClockPanel
+                key={`${card.jobId} ${bayId} ${courseId}`}
+                place={`${card.jobId} ${bayId} ${courseId}`}
+                result={result}
+                zone={card.timeZone}
+              />
             </>
           ) : (
             <PrepPanel course={course} />
           )}
           {course.note && <p className="border-l-4 border-ink pl-3">{course.note}</p>}
           <p className="text-body text-[#3c4649]">
-            Worked out at a slab of {formatRange({ min: slab.value, max: slab.value, unit: slab.unit })}. The sheet, the label and the competent person decide.
+            Worked out at a slab of {formatRange({ min: slab.value, max: slab.value, unit: slab.unit })}. The sheet, the label and the
+            competent person decide.
           </p>
         </div>
       )}
@@ -79,7 +98,10 @@ function CardBody({ card, buildUp }: { card: SiteCard; buildUp: JobBuildUp }) {
         <div className="mx-auto grid max-w-xl grid-cols-4 gap-3 p-3">
           {(Object.keys(views) as View[]).map((one) => (
             <button
-              key={one} type="button" aria-pressed={view === one} onClick={() => setView(one)}
+              key={one}
+              type="button"
+              aria-pressed={view === one}
+              onClick={() => setView(one)}
               className={`min-h-[64px] rounded-touch border-2 border-ink px-1 text-[17px] font-semibold ${view === one ? 'bg-ink text-white' : 'bg-card text-ink'}`}
             >
               {views[one]}

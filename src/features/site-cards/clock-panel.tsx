@@ -58,7 +58,8 @@ const minutesAndSeconds = (ms: number) => {
 function PailClock({ potLife, mixed, onMixed }: { potLife: Figure; mixed: number | null; onMixed: (at: number | null) => void }) {
   const now = useNow(mixed !== null)
   const known = potLife.kind === 'not-stated' ? undefined : (potLife.value.min ?? potLife.value.max)
-  const limit = potLife.kind === 'not-stated' || known === undefined ? undefined : valueIn({ value: known, unit: potLife.value.unit }, 's') * 1000
+  const limit =
+    potLife.kind === 'not-stated' || known === undefined ? undefined : valueIn({ value: known, unit: potLife.value.unit }, 's') * 1000
   const left = mixed !== null && limit !== undefined ? mixed + limit - now : undefined
   const over = left !== undefined && left <= 0
   return (
@@ -70,7 +71,8 @@ function PailClock({ potLife, mixed, onMixed }: { potLife: Figure; mixed: number
       <p className="text-body">A full pail is shorter than the sheet’s small mass. Pour at once and spread.</p>
       {left !== undefined && (
         <p role="timer" className={`mt-1 ${over ? 'text-stop' : ''}`}>
-          <span className="text-site-figure font-bold">{minutesAndSeconds(left)}</span> {over ? '■ Time is over. Do not use this pail.' : 'left in the pail'}
+          <span className="text-site-figure font-bold">{minutesAndSeconds(left)}</span>{' '}
+          {over ? '■ Time is over. Do not use this pail.' : 'left in the pail'}
         </p>
       )}
       <div className="mt-2 grid grid-cols-2 gap-3">
@@ -87,7 +89,17 @@ function PailClock({ potLife, mixed, onMixed }: { potLife: Figure; mixed: number
 
 const quarter = 15 * 60_000
 
-function WindowClock({ window: figure, laid, onLaid, zone }: { window: Figure; laid: number | null; onLaid: (at: number | null) => void; zone: string }) {
+function WindowClock({
+  window: figure,
+  laid,
+  onLaid,
+  zone,
+}: {
+  window: Figure
+  laid: number | null
+  onLaid: (at: number | null) => void
+  zone: string
+}) {
   const times = laid !== null && figure.kind !== 'not-stated' ? clockWindow(figure.value, { start: laid, zone }) : undefined
   return (
     <div className="border-2 border-ink p-3">

@@ -15,10 +15,17 @@ interface CoursePickerProps {
 export function CoursePicker({ courses, courseId, onCourse, bays, bayId, onBay }: CoursePickerProps) {
   return (
     <>
-      <Stepper what="course" items={courses.map(({ id, title }, index) => ({ id, name: title, under: `Course ${index + 1} of ${courses.length}` }))} current={courseId} onPick={onCourse} />
+      <Stepper
+        what="course"
+        items={courses.map(({ id, title }, index) => ({ id, name: title, under: `Course ${index + 1} of ${courses.length}` }))}
+        current={courseId}
+        onPick={onCourse}
+      />
       {bays.length > 0 && (
         <Stepper
-          what="bay" current={bayId} onPick={onBay}
+          what="bay"
+          current={bayId}
+          onPick={onBay}
           items={bays.map(({ id, name, area }) => ({ id, name, under: `${area.value.toLocaleString('en-US')} ${area.unit}` }))}
         />
       )}

@@ -19,13 +19,20 @@ export function FirstAidPanel({ hazards, firm }: { hazards: HazardSummary | null
         return (
           <div key={name} className="border-b border-ink pb-3">
             <h2 className="text-site font-bold">{name}</h2>
-            {lines.length === 0 ? <p>Not stated as a statement on the loaded safety sheets. Open section 4 of the sheet.</p> : lines.map(({ code, text }) => <p key={code}>{text}</p>)}
+            {lines.length === 0 ? (
+              <p>Not stated as a statement on the loaded safety sheets. Open section 4 of the sheet.</p>
+            ) : (
+              lines.map(({ code, text }) => <p key={code}>{text}</p>)
+            )}
           </div>
         )
       })}
       <div className="border-2 border-stop p-3">
         <h2 className="text-site font-bold">Hot or smoking pail</h2>
-        <p>Keep clear, fume is toxic. Do not cap it, do not put it in a bin, no water into it. Get it outside only if that is without danger; trained and protected people pour in dry sand. Never mix leftovers.</p>
+        <p>
+          Keep clear, fume is toxic. Do not cap it, do not put it in a bin, no water into it. Get it outside only if that is without danger;
+          trained and protected people pour in dry sand. Never mix leftovers.
+        </p>
       </div>
       <div>
         <h2 className="text-site font-bold">Call</h2>
@@ -34,7 +41,9 @@ export function FirstAidPanel({ hazards, firm }: { hazards: HazardSummary | null
           <CallLink key={`${from} ${text}`} phone={text} who={from} />
         ))}
         {firm.phone && <CallLink phone={firm.phone} who={firm.name} />}
-        {(hazards?.emergencyPhones.length ?? 0) === 0 && <p className="text-body">No emergency telephone is stated on the loaded safety sheets.</p>}
+        {(hazards?.emergencyPhones.length ?? 0) === 0 && (
+          <p className="text-body">No emergency telephone is stated on the loaded safety sheets.</p>
+        )}
       </div>
     </section>
   )
@@ -42,7 +51,10 @@ export function FirstAidPanel({ hazards, firm }: { hazards: HazardSummary | null
 
 function CallLink({ phone, who }: { phone: string; who: string }) {
   return (
-    <a href={`tel:${phone.replace(/[^+\d]/g, '')}`} className="mt-3 flex min-h-[64px] flex-col justify-center rounded-touch border-2 border-ink px-4">
+    <a
+      href={`tel:${phone.replace(/[^+\d]/g, '')}`}
+      className="mt-3 flex min-h-[64px] flex-col justify-center rounded-touch border-2 border-ink px-4"
+    >
       <span className="font-bold">{phone}</span>
       <span className="text-body">{who}</span>
     </a>

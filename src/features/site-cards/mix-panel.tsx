@@ -38,7 +38,12 @@ export function MixPanel({ course, mix, result, bay }: MixPanelProps) {
       {packs.length > 1 && (
         <div className="my-3 grid grid-cols-2 gap-3">
           {packs.map((one, index) => (
-            <TouchButton key={`${one.size.value} ${one.size.unit}`} strong={index === chosen} aria-pressed={index === chosen} onClick={() => setChosen(index)}>
+            <TouchButton
+              key={`${one.size.value} ${one.size.unit}`}
+              strong={index === chosen}
+              aria-pressed={index === chosen}
+              onClick={() => setChosen(index)}
+            >
               {formatRange({ min: one.size.value, max: one.size.value, unit: one.size.unit })} kit
             </TouchButton>
           ))}
@@ -50,14 +55,22 @@ export function MixPanel({ course, mix, result, bay }: MixPanelProps) {
           {partKits === 'allowed' ? (
             <div className="my-3 grid grid-cols-4 gap-3">
               {shares.map((one) => (
-                <TouchButton key={one.name} strong={one.share === allowed} aria-pressed={one.share === allowed} className="px-1" onClick={() => setShare(one.share)}>
+                <TouchButton
+                  key={one.name}
+                  strong={one.share === allowed}
+                  aria-pressed={one.share === allowed}
+                  className="px-1"
+                  onClick={() => setShare(one.share)}
+                >
                   {one.name}
                 </TouchButton>
               ))}
             </div>
           ) : (
             <p className="my-2 border-l-4 border-caution pl-3 font-semibold">
-              {partKits === 'forbidden' ? 'Full kits only: the sheet forbids splitting.' : 'Full kits only: no sheet says that kits may be split.'}
+              {partKits === 'forbidden'
+                ? 'Full kits only: the sheet forbids splitting.'
+                : 'Full kits only: no sheet says that kits may be split.'}
             </p>
           )}
           <PailTable pail={pailOf({ course, mix, result, pack, share: allowed })} bay={bay} />
@@ -71,7 +84,8 @@ function Ratio({ mix, result }: { mix: MixFacts; result: CourseResult }) {
   if (mix.parts.length === 1) return <p className="text-body">One part, nothing to add.</p>
   return (
     <p className="text-body">
-      {mix.parts.map(({ part }) => part).join(' : ')} is {result.ratioByVolume ?? 'not stated'} by volume, {result.ratioByWeight ?? 'not stated'} by weight
+      {mix.parts.map(({ part }) => part).join(' : ')} is {result.ratioByVolume ?? 'not stated'} by volume,{' '}
+      {result.ratioByWeight ?? 'not stated'} by weight
     </p>
   )
 }
@@ -83,9 +97,15 @@ function PailTable({ pail, bay }: { pail: Pail; bay: Bay | undefined }) {
         <caption className="sr-only">Amounts for this pail</caption>
         <thead className="text-body text-[#3c4649]">
           <tr>
-            <th scope="col" className="text-left font-normal">Part</th>
-            <th scope="col" className="text-right font-normal">On the scale</th>
-            <th scope="col" className="text-right font-normal">By volume</th>
+            <th scope="col" className="text-left font-normal">
+              Part
+            </th>
+            <th scope="col" className="text-right font-normal">
+              On the scale
+            </th>
+            <th scope="col" className="text-right font-normal">
+              By volume
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -95,8 +115,12 @@ function PailTable({ pail, bay }: { pail: Pail; bay: Bay | undefined }) {
                 {pail.parts.length > 1 && `${part.part} `}
                 <span className="block text-body font-normal">{part.name}</span>
               </th>
-              <td className="text-right whitespace-nowrap"><BigFigure figure={part.mass} /></td>
-              <td className="pl-3 text-right whitespace-nowrap"><BigFigure figure={part.volume} large={part.mass.kind === 'not-stated'} /></td>
+              <td className="text-right whitespace-nowrap">
+                <BigFigure figure={part.mass} />
+              </td>
+              <td className="pl-3 text-right whitespace-nowrap">
+                <BigFigure figure={part.volume} large={part.mass.kind === 'not-stated'} />
+              </td>
             </tr>
           ))}
           {pail.sand && (
@@ -105,7 +129,9 @@ function PailTable({ pail, bay }: { pail: Pail; bay: Bay | undefined }) {
                 Sand
                 <span className="block text-body font-normal">after the liquids are mixed</span>
               </th>
-              <td className="text-right whitespace-nowrap"><BigFigure figure={pail.sand} /></td>
+              <td className="text-right whitespace-nowrap">
+                <BigFigure figure={pail.sand} />
+              </td>
               <td />
             </tr>
           )}
@@ -113,10 +139,20 @@ function PailTable({ pail, bay }: { pail: Pail; bay: Bay | undefined }) {
       </table>
       <p className="mt-2 border-t-2 border-ink pt-2">
         Covers <BigFigure figure={pail.covers} large={false} />
-        {bay && pail.covers.kind !== 'not-stated' && <span className="text-body"> of {bay.area.value.toLocaleString('en-US')} {bay.area.unit} in {bay.name}</span>}
+        {bay && pail.covers.kind !== 'not-stated' && (
+          <span className="text-body">
+            {' '}
+            of {bay.area.value.toLocaleString('en-US')} {bay.area.unit} in {bay.name}
+          </span>
+        )}
         <WhyMissing figure={pail.covers} />
       </p>
-      {pail.parts.some(({ mass }) => mass.kind === 'not-stated') && <p className="text-body">On the scale: {formatFigure(pail.parts.find(({ mass }) => mass.kind === 'not-stated')?.mass ?? pail.covers)}; a density is missing.</p>}
+      {pail.parts.some(({ mass }) => mass.kind === 'not-stated') && (
+        <p className="text-body">
+          On the scale: {formatFigure(pail.parts.find(({ mass }) => mass.kind === 'not-stated')?.mass ?? pail.covers)}; a density is
+          missing.
+        </p>
+      )}
     </>
   )
 }

@@ -14,7 +14,11 @@ export function SheetsPanel({ course, input }: { course: Course; input: Evaluati
     <section aria-label="Sheets" className="grid gap-3 p-4">
       {sheets.length === 0 && <p>No sheet is loaded for this course. Call the office before opening a pail.</p>}
       {sheets.map((sheet) => (
-        <Link key={sheet.revisionId} to={paths.sheetPage(sheet.revisionId)} className="flex min-h-[64px] flex-col justify-center rounded-touch border-2 border-ink px-4 py-2">
+        <Link
+          key={sheet.revisionId}
+          to={paths.sheetPage(sheet.revisionId)}
+          className="flex min-h-[64px] flex-col justify-center rounded-touch border-2 border-ink px-4 py-2"
+        >
           <span className="font-semibold">{sheet.title}</span>
           <span className="text-body">
             {kinds[sheet.kind]}, {sheet.revisionDate ?? 'no date stated'}, {sheet.pages === 1 ? 'one page' : `${sheet.pages} pages`}

@@ -14,7 +14,9 @@ export function SiteCardsPage() {
   return (
     <Page title="Site cards">
       <div className="max-w-xl text-site">
-        {(q !== '' || (cards.data?.total ?? 0) > 8) && <TextField label="Search" type="search" value={q} onChange={(event) => setQ(event.target.value)} className="mb-4" />}
+        {(q !== '' || (cards.data?.total ?? 0) > 8) && (
+          <TextField label="Search" type="search" value={q} onChange={(event) => setQ(event.target.value)} className="mb-4" />
+        )}
         <Asking query={cards} says={sentenceOf}>
           {({ items }) =>
             items.length === 0 ? (
@@ -23,7 +25,10 @@ export function SiteCardsPage() {
               <ul className="grid gap-3">
                 {items.map((card) => (
                   <li key={card.id}>
-                    <Link to={paths.siteCard(card.id)} className="flex min-h-[72px] flex-col justify-center rounded-touch border-2 border-ink bg-card px-4 py-3">
+                    <Link
+                      to={paths.siteCard(card.id)}
+                      className="flex min-h-[72px] flex-col justify-center rounded-touch border-2 border-ink bg-card px-4 py-3"
+                    >
                       <span className="font-semibold">{card.name}</span>
                       <span className="text-body text-pencil">{[card.site, `${card.bays} bays`].filter(Boolean).join(', ')}</span>
                     </Link>

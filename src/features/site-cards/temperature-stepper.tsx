@@ -6,7 +6,10 @@ import { TouchButton } from './touch-button.tsx'
 export function TemperatureStepper({ value, onChange }: { value: Quantity; onChange: (value: Quantity) => void }) {
   const step = (by: number) => onChange({ value: Math.round(value.value) + by, unit: value.unit })
   return (
-    <section aria-label="Slab temperature" className="grid grid-cols-[64px_minmax(0,1fr)_64px] items-center gap-3 border-y-2 border-ink py-3">
+    <section
+      aria-label="Slab temperature"
+      className="grid grid-cols-[64px_minmax(0,1fr)_64px] items-center gap-3 border-y-2 border-ink py-3"
+    >
       <TouchButton aria-label="One degree colder" onClick={() => step(-1)}>
         −
       </TouchButton>

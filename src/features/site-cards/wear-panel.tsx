@@ -11,11 +11,15 @@ export function WearPanel({ course, hazards }: { course: Course; hazards: Hazard
       {hazards ? <FromSheets hazards={hazards} /> : <p>Nothing is handled in this course whose safety sheet could be asked.</p>}
       {dusty && (
         <p className="border-l-4 border-caution pl-3">
-          <strong>Dust.</strong> Grinding, blasting and tipping sand raise silica dust. Use the shroud, the extraction and the vacuum that belong to the tool (29 CFR 1926.1153 Table 1, or an exposure
-          assessment). No dry sweeping, no compressed air. Your competent person decides on breathing protection.
+          <strong>Dust.</strong> Grinding, blasting and tipping sand raise silica dust. Use the shroud, the extraction and the vacuum that
+          belong to the tool (29 CFR 1926.1153 Table 1, or an exposure assessment). No dry sweeping, no compressed air. Your competent
+          person decides on breathing protection.
         </p>
       )}
-      <p className="text-body">New rash, tight chest, cough: stop, get out, tell the foreman and occupational health. Sensitisation is permanent. A mask that suffices is chosen by the competent person, never by this card.</p>
+      <p className="text-body">
+        New rash, tight chest, cough: stop, get out, tell the foreman and occupational health. Sensitisation is permanent. A mask that
+        suffices is chosen by the competent person, never by this card.
+      </p>
     </section>
   )
 }
@@ -59,7 +63,10 @@ function FromSheets({ hazards }: { hazards: HazardSummary }) {
         </ul>
       </div>
       {hazards.notStated.length > 0 && (
-        <p className="border-l-4 border-stop pl-3 font-semibold">No safety sheet with hazards is loaded for {hazards.notStated.join(', ')}. What they do is not known here. Do not open them; call the office.</p>
+        <p className="border-l-4 border-stop pl-3 font-semibold">
+          No safety sheet with hazards is loaded for {hazards.notStated.join(', ')}. What they do is not known here. Do not open them; call
+          the office.
+        </p>
       )}
     </>
   )
