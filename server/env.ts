@@ -1,40 +1,54 @@
 import { resolve } from 'node:path'
 import * as z from 'zod'
 
-const optional = z.string().trim().min(1).optional()
 const s3 = ['S3_BUCKET', 'S3_ENDPOINT', 'S3_REGION', 'S3_ACCESS_KEY_ID', 'S3_SECRET_ACCESS_KEY'] as const
 
-const envSchema = z
-  .object({
-    PORT: z.coerce.number().int().min(1).max(65535).default(4620),
-    HOST: z.string().trim().min(1).default('127.0.0.1'),
-    DATA_DIR: z.string().trim().min(1).default('./data'),
-    DATABASE_URL: z
-      .string()
-      .regex(/^postgres(ql)?:\/\//, 'must begin with postgres://')
-      .optional(),
-    DEMO: z.enum(['auto', 'off']).default('auto'),
-    SESSION_SECRET: z.string().min(32, 'must have at least 32 characters').optional(),
-    PUBLIC_URL: z.url({ protocol: /^https?$/, error: 'must be an http or https address' }).optional(),
-    SMTP_URL: z
-      .string()
-      .regex(/^smtps?:\/\//, 'must begin with smtp:// or smtps://')
-      .optional(),
-    MAIL_FROM: z.string().trim().min(3).optional(),
-    S3_BUCKET: optional,
-    S3_ENDPOINT: optional,
-    S3_REGION: optional,
-    S3_ACCESS_KEY_ID: optional,
-    S3_SECRET_ACCESS_KEY: optional,
-  })
-  .superRefine((env, context) => {
-    const given = s3.filter((name) => env[name])
-    if (given.length > 0 && given.length < s3.length) {
-      for (const name of s3.filter((name) => !env[name]))
-        context.addIssue({ code: 'custom', path: [name], message: 'is missing while other S3 values are given' })
-    }
-    if (env.SMTP_URL && !env.MAIL_FROM) context.addIssue({ code: 'custom', path: ['MAIL_FROM'], message: 'is needed with SMTP_URL' })
-  })
+const text = z.string().trim().min(1, 'must not be blank')
+const address = (protocol: RegExp, error: string) =>
+  text.refine((value) => URL.canParse(value) && protocol.test(new URL(value).protocol), error)
+const httpAddress = address(/^https?:$/, 'must be an http or https address')
+/** Pages and API are served at the root. */
+const publicAddress = httpAddress.refine(
+  (value) => !URL.canParse(value) || new URL(value).href === `${new URL(value).origin}/`,
+  'must be an address without a path',
+)
+const port = z
+  .string()
+  .trim()
+  .regex(/^\d{1,5}$/, 'must be a whole number from 1 to 65535')
+  .transform(Number)
+  .refine((value) => value >= 1 && value <= 65535, 'must be a whole number from 1 to 65535')
+
+const envSchema = z.object({
+  PORT: port.default(4620),
+  HOST: text.default('127.0.0.1'),
+  DATA_DIR: text.default('./data'),
+  DATABASE_URL: address(/^postgres(ql)?:$/, 'must be an address that begins with postgres://').optional(),
+  DEMO: z.enum(['auto', 'off'], 'must be auto or off').default('auto'),
+  SESSION_SECRET: z.string().min(32, 'must have at least 32 characters').optional(),
+  PUBLIC_URL: publicAddress.optional(),
+  SMTP_URL: address(/^smtps?:$/, 'must be an address that begins with smtp:// or smtps://').optional(),
+  MAIL_FROM: z
+    .string()
+    .trim()
+    .regex(/^[^\r\n]*\S@\S+$/, 'must be an e-mail address, or a name and an address in < >')
+    .optional(),
+  S3_BUCKET: text.optional(),
+  S3_ENDPOINT: httpAddress.optional(),
+  S3_REGION: text.optional(),
+  S3_ACCESS_KEY_ID: text.optional(),
+  S3_SECRET_ACCESS_KEY: text.optional(),
+})
+
+/** What is missing beside what is given. Asked of the raw values, so that it is told along with those that are wrong. */
+function missing(given: Record<string, unknown>): string[] {
+  const s3Given = s3.filter((name) => given[name])
+  const s3Missing = s3Given.length > 0 ? s3.filter((name) => !given[name]) : []
+  return [
+    ...s3Missing.map((name) => `${name}: is missing while other S3 values are given`),
+    ...(given['SMTP_URL'] && !given['MAIL_FROM'] ? ['MAIL_FROM: is needed with SMTP_URL'] : []),
+  ]
+}
 
 export interface Environment {
   port: number
@@ -56,10 +70,10 @@ export function readEnvironment(variables: NodeJS.ProcessEnv): Environment {
   const known = Object.keys(envSchema.shape)
   const given = Object.fromEntries(known.flatMap((name) => (variables[name] ? [[name, variables[name]]] : [])))
   const result = envSchema.safeParse(given)
-  if (!result.success) {
-    const lines = result.error.issues.map((issue) => `  ${issue.path.join('.')}: ${issue.message}`)
-    throw new Error(`The environment is not right:\n${lines.join('\n')}`)
-  }
+  const wrong = result.success ? [] : result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`)
+  const all = [...wrong, ...missing(given)]
+  if (!result.success || all.length > 0)
+    throw new Error(`The environment is not right:\n${[...new Set(all)].map((line) => `  ${line}`).join('\n')}`)
   const env = result.data
   return {
     port: env.PORT,
@@ -68,7 +82,7 @@ export function readEnvironment(variables: NodeJS.ProcessEnv): Environment {
     databaseUrl: env.DATABASE_URL,
     demo: env.DEMO,
     sessionSecret: env.SESSION_SECRET,
-    publicUrl: (env.PUBLIC_URL ?? `http://localhost:${env.PORT}`).replace(/\/+$/, ''),
+    publicUrl: new URL(env.PUBLIC_URL ?? `http://localhost:${env.PORT}`).origin,
     smtp: env.SMTP_URL ? { url: env.SMTP_URL, from: env.MAIL_FROM ?? '' } : undefined,
     s3: env.S3_BUCKET
       ? {

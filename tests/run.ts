@@ -37,7 +37,7 @@ step('Lint', process.execPath, node('eslint/bin/eslint.js', '.', '--max-warnings
 step(
   'Format',
   process.execPath,
-  node('prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '**/*.{ts,tsx,js,cjs,mjs,css,html,json,md}'),
+  node('prettier/bin/prettier.cjs', '--check', '--log-level', 'warn', '**/*.{ts,tsx,js,cjs,mjs,css,html,md}', '!fixtures/**'),
 )
 step('Dead code', process.execPath, node('knip/bin/knip.js'))
 step(

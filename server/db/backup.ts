@@ -7,6 +7,7 @@ import { restoreBackup } from './restore-backup.ts'
 const [, , what, name] = process.argv
 
 async function run(): Promise<void> {
+  process.umask(0o077)
   if ((what !== 'backup' && what !== 'restore') || !name)
     throw new Error('Say which file: npm run backup -- FILE, or npm run restore -- FILE.')
   // npm runs scripts in the project's folder; a relative name is meant from where the person stands.

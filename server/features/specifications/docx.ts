@@ -68,6 +68,12 @@ async function bodyOf(document: SpecDocument) {
 
 const escaped = (text: string) => text.replace(/[<>&"']/g, (sign) => `&#${sign.charCodeAt(0)};`)
 
+/** Where the font is not installed, a word processor takes the nearest upright sans by this description (PANOSE as the font's own OS/2 table has it). */
+const fontTable = {
+  path: 'word/fontTable.xml',
+  data: '<?xml version="1.0" encoding="UTF-8" standalone="yes"?><w:fonts xmlns:w="http://schemas.openxmlformats.org/wordprocessingml/2006/main"><w:font w:name="Source Sans 3"><w:altName w:val="Source Sans Pro"/><w:panose1 w:val="020B0303030403020204"/><w:charset w:val="00"/><w:family w:val="swiss"/><w:pitch w:val="variable"/></w:font></w:fonts>',
+}
+
 /** Title and dates of the file (ECMA-376 part 2, core properties): the document's own date, not the clock's. */
 function coreProperties({ header }: SpecDocument, title: string): string {
   const at = `${header.date}T00:00:00Z`
@@ -94,5 +100,5 @@ export async function toDocx(document: SpecDocument): Promise<Buffer> {
     ],
   })
   const core = { path: 'docProps/core.xml', data: coreProperties(document, title) }
-  return withoutZipDates(await Packer.toBuffer(file, undefined, [core]))
+  return withoutZipDates(await Packer.toBuffer(file, undefined, [core, fontTable]))
 }

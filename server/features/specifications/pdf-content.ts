@@ -1,4 +1,4 @@
-import type { Content, ContentNode } from 'pdfmake'
+import { type Content, type ContentNode, fontName } from '../../documents/print-pdf.ts'
 import {
   type Run,
   type Runs,
@@ -11,7 +11,6 @@ import { type NumberedItem, numberedArticles, numberedItems } from '../../../sha
 import { registersOf } from '../../../shared/domain/specification/registers.ts'
 import { drawSection } from './section-drawing.ts'
 
-export const fontName = 'SourceSans3'
 const pencil = '#55606a'
 const step = 22
 export const strong = (node: ContentNode): ContentNode => ({ ...node, bold: true })

@@ -1,13 +1,8 @@
-import pdfmake, { type Content } from 'pdfmake'
+import { type Content, fontName, printPdf } from '../../documents/print-pdf.ts'
 import { writtenDate } from '../../../shared/domain/sheet-age.ts'
 import { type SpecDocument, issueWords } from '../../../shared/domain/specification/document.ts'
-import { fontFiles, fontFolder } from './fonts.ts'
-import { contentOf, fontName, strong } from './pdf-content.ts'
+import { contentOf, strong } from './pdf-content.ts'
 import { titleRows } from '../../../shared/domain/specification/title-block.ts'
-
-pdfmake.setFonts({ [fontName]: fontFiles })
-pdfmake.setUrlAccessPolicy(() => false)
-pdfmake.setLocalAccessPolicy((path) => path.startsWith(fontFolder))
 
 const ink = '#1d2226'
 const pencil = '#55606a'
@@ -70,29 +65,27 @@ const pageFoot = ({ header }: SpecDocument, page: number, pages: number): Conten
 })
 
 /** The document as PDF. The same tree gives the same bytes: the only date is the document's own. */
-export async function toPdf(document: SpecDocument): Promise<Buffer> {
+export async function toPdf(document: SpecDocument): Promise<Uint8Array> {
   const { header } = document
   const title = `${header.sectionNumber} ${header.sectionTitle}, ${header.project}`
-  return pdfmake
-    .createPdf({
-      content: [...titleBlock(document), ...contentOf(document)].map(withLayouts),
-      header: () => pageHead(document),
-      footer: (page: number, pages: number) => pageFoot(document, page, pages),
-      pageSize: 'LETTER',
-      pageMargins: [side, inch * 0.9, side, inch * 0.85],
-      defaultStyle: { font: fontName, fontSize: 10, lineHeight: 1.12, color: ink },
-      styles: { part: { fontSize: 12, bold: true, margin: [0, 18, 0, 2] }, article: { fontSize: 10.5, bold: true, margin: [0, 11, 0, 1] } },
-      info: {
-        title,
-        author: header.firm.name,
-        subject: header.site,
-        creator: 'Wearcourse',
-        producer: 'Wearcourse',
-        creationDate: new Date(`${header.date}T00:00:00Z`),
-      },
-      version: '1.7',
-      language: 'en-US',
-      displayTitle: true,
-    })
-    .getBuffer()
+  return printPdf({
+    content: [...titleBlock(document), ...contentOf(document)].map(withLayouts),
+    header: () => pageHead(document),
+    footer: (page: number, pages: number) => pageFoot(document, page, pages),
+    pageSize: 'LETTER',
+    pageMargins: [side, inch * 0.9, side, inch * 0.85],
+    defaultStyle: { font: fontName, fontSize: 10, lineHeight: 1.12, color: ink },
+    styles: { part: { fontSize: 12, bold: true, margin: [0, 18, 0, 2] }, article: { fontSize: 10.5, bold: true, margin: [0, 11, 0, 1] } },
+    info: {
+      title,
+      author: header.firm.name,
+      subject: header.site,
+      creator: 'Wearcourse',
+      producer: 'Wearcourse',
+      creationDate: new Date(`${header.date}T00:00:00Z`),
+    },
+    version: '1.7',
+    language: 'en-US',
+    displayTitle: true,
+  })
 }

@@ -1,7 +1,7 @@
 import { GlobalFonts, createCanvas, loadImage } from '@napi-rs/canvas'
 import { sectionOf, sectionSvg, standaloneHeight } from '../../../shared/drawing/section.ts'
 import type { SpecDocument } from '../../../shared/domain/specification/document.ts'
-import { fontFiles } from './fonts.ts'
+import { fontFiles } from '../../documents/print-pdf.ts'
 
 const width = 680
 

@@ -18,7 +18,7 @@ const columns: ListColumns<MixRow> = [
     header: 'Mix',
     accessorKey: 'name',
     cell: ({ row: { original } }) => (
-      <span className="flex items-center gap-2">
+      <span className="flex min-w-40 items-center gap-2">
         <svg width="16" height="16" aria-hidden="true" className="shrink-0 border border-rule">
           <rect width="16" height="16" fill={original.color} />
         </svg>
@@ -35,7 +35,7 @@ const columns: ListColumns<MixRow> = [
     id: 'parts',
     header: 'Parts',
     enableSorting: false,
-    cell: ({ row: { original } }) => <span className="text-small text-pencil">{original.parts.join(' + ')}</span>,
+    cell: ({ row: { original } }) => <span className="inline-block min-w-56 text-small text-pencil">{original.parts.join(' + ')}</span>,
   },
   { id: 'facts', header: 'Values', accessorKey: 'facts', enableSorting: false, meta: { numeric: true } },
   { id: 'sheets', header: 'Sheets', accessorKey: 'sheets', enableSorting: false, meta: { numeric: true } },

@@ -19,7 +19,7 @@ const columns: ListColumns<ProductRow> = [
     accessorKey: 'name',
     cell: ({ row: { original } }) => (
       <>
-        <Link to={paths.product(original.id)} className="font-semibold text-resin hover:underline">
+        <Link to={paths.product(original.id)} className="inline-block min-w-44 font-semibold text-resin hover:underline">
           {original.name}
         </Link>
         {original.status === 'withdrawn' && <span className="text-pencil"> withdrawn</span>}

@@ -108,15 +108,15 @@ function CourseParts({ course }: { course: CourseQuantity }) {
   return (
     <div className="mt-2 text-small">
       {course.parts.map((part) => (
-        <p key={part.part}>
+        <div key={part.part}>
           {course.parts.length > 1 && `${part.part}: `}
           {part.name}, <FigureView figure={part.volume} />, <FigureView figure={part.mass} />
-        </p>
+        </div>
       ))}
       {course.aggregates.map((sand) => (
-        <p key={`${sand.use} ${sand.product.id}`}>
+        <div key={`${sand.use} ${sand.product.id}`}>
           {sand.product.name} as {sand.use}: <FigureView figure={sand.mass} />
-        </p>
+        </div>
       ))}
       <p>
         {packing.plan
