@@ -70,7 +70,10 @@ export function readEnvironment(variables: NodeJS.ProcessEnv): Environment {
   const known = Object.keys(envSchema.shape)
   const given = Object.fromEntries(known.flatMap((name) => (variables[name] ? [[name, variables[name]]] : [])))
   const result = envSchema.safeParse(given)
-  const wrong = result.success ? [] : result.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`)
+  const issues = result.success ? [] : result.error.issues
+  const wrong = issues
+    .filter(({ path }, index) => issues.findIndex((other) => other.path[0] === path[0]) === index)
+    .map(({ path, message }) => `${path.join('.')}: ${message}`)
   const all = [...wrong, ...missing(given)]
   if (!result.success || all.length > 0)
     throw new Error(`The environment is not right:\n${[...new Set(all)].map((line) => `  ${line}`).join('\n')}`)
