@@ -168,7 +168,7 @@ describe('specifications', () => {
         .flatMap(({ text: words }) => (/^(EUH|H|P)\d{3}/.test(words) ? [words] : []))
       expect(statements.length).toBeGreaterThan(0)
       for (const words of statements)
-        expect(`${ghsStatement(words.split(' ')[0] ?? '') ?? ''}`, words).toContain(words.slice(words.indexOf(' ') + 1))
+        expect(ghsStatement(words.split(' ')[0] ?? '') ?? '', words).toContain(words.slice(words.indexOf(' ') + 1))
       const standards = allLines(document)
         .flat()
         .flatMap((run) => (run.kind === 'figure' && run.known === 'standard' ? [run.text] : []))
@@ -285,7 +285,11 @@ describe('specifications', () => {
     expect(body.match(/<w:tblHeader\/>/g)?.length).toBeGreaterThan(6)
     expect(body).toMatch(/<wp:docPr [^>]*descr="Section through the floor, from the top down/)
     expect(body).toMatch(/<asvg:svgBlip [^>]*r:embed=/)
-    expect(Object.keys(entries).filter((name) => name.startsWith('word/media/')).sort()).toEqual(['word/media/image1.png', 'word/media/image1.svg'])
+    expect(
+      Object.keys(entries)
+        .filter((name) => name.startsWith('word/media/'))
+        .sort(),
+    ).toEqual(['word/media/image1.png', 'word/media/image1.svg'])
     expect(part('word/fontTable.xml')).toContain('w:name="Source Sans 3"')
     expect(part('word/header1.xml')).toContain('Draft, not issued')
     expect(part('word/footer1.xml')).toMatch(/PAGE.*NUMPAGES/)
