@@ -4,7 +4,7 @@ import { createServer, type RequestListener, type Server } from 'node:http'
 import { join } from 'node:path'
 import { createApp } from './app.ts'
 import { type OpenDatabase, openDatabase } from './db/open.ts'
-import { fillDemo, demoAccounts } from './db/demo/fill.ts'
+import { demoAccounts } from './db/demo/people.ts'
 import { readEnvironment } from './env.ts'
 import { hasPeople, readFirm } from './features/people/queries.ts'
 import { openDiskStore } from './files/store.ts'
@@ -52,6 +52,7 @@ async function start(): Promise<void> {
     const mail = env.smtp ? smtpMailer(env.smtp) : await outboxMailer(env.dataDir, clock)
     if (env.demo === 'auto' && !(await hasPeople(database.db))) {
       say('Filling the empty database with the demo …')
+      const { fillDemo } = await import('./db/demo/fill.ts')
       await fillDemo({ db: database.db, files, now: clock() })
     }
     const firstLeadCode = (await hasPeople(database.db)) ? undefined : randomBytes(5).toString('hex')

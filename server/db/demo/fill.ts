@@ -25,8 +25,6 @@ import { demoMixes } from './mixes.ts'
 import { demoFirm, demoPassword, demoPeople } from './people.ts'
 import { demoProducts } from './products.ts'
 
-export { demoAccounts } from './people.ts'
-
 interface Filling {
   db: Database
   files: FileStore
