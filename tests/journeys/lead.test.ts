@@ -39,8 +39,7 @@ it('a technical lead adds a product, uploads its sheet and ties a value to the p
   await look(page, 'lead-upload-1440')
 
   await page.goto(`/products/${id}/values/new?property=density`)
-  await page.getByLabel('At least').fill('9.3')
-  await page.getByLabel('At most').fill('9.3')
+  await page.getByLabel('Figure').fill('9.3')
   await page.getByLabel('Unit, as stated').selectOption('lb/gal')
   await page.getByRole('button', { name: 'Add', exact: true }).click()
   await page.getByText('There is a problem').waitFor()
@@ -50,6 +49,27 @@ it('a technical lead adds a product, uploads its sheet and ties a value to the p
   await page.goto(`/products/${id}`)
   await page.getByText('9.3 lb/gal').first().waitFor()
   await look(page, 'lead-product-1440')
+
+  const found = (await (await page.request.get('/api/sheets?q=ostrel-90-flex')).json()) as { items: { sheetId: string; title: string }[] }
+  const { version } = (await (await page.request.get(`/api/sheets/${found.items[0]?.sheetId ?? ''}`)).json()) as { version: number }
+  const attached = await page.request.put(`/api/sheets/${found.items[0]?.sheetId ?? ''}`, {
+    data: { version, kind: 'safety', title: 'Ostrel 90 Flex, Part A, safety sheet', maker: 'Ostrel', subjects: [{ productId: id }] },
+  })
+  expect(attached.ok()).toBe(true)
+  await page.reload()
+  await page.getByRole('link', { name: /^Amend Density/ }).click()
+  await page.getByLabel('Stated on a sheet').check()
+  await page.getByRole('link', { name: 'Mark the place on the page' }).click()
+  await page.getByRole('button', { name: 'Put a box on the page' }).click()
+  await page.getByLabel('The sheet’s words').fill('Density 9.3 lb/gal')
+  await page.getByRole('button', { name: 'Use this place' }).click()
+  await page.getByText('A place is marked on page 1.').waitFor()
+  expect(await page.getByLabel('Figure').inputValue()).toBe('9.3')
+  await look(page, 'lead-value-1440')
+  await page.getByRole('button', { name: 'Save', exact: true }).click()
+  await page.getByRole('heading', { name: 'History' }).waitFor()
+  await page.getByRole('link', { name: '9.3 lb/gal', exact: true }).first().click()
+  await page.waitForURL(/\/sheets\/pages\/.*box=/)
 })
 
 it('a technical lead sees what stops a draft; a released floor stays as it is', async () => {
