@@ -78,7 +78,7 @@ function ValueLine({ base, fact, isSuperseded }: { base: string; fact: Fact; isS
         <Link
           to={`${base}/values/${fact.id}`}
           className="no-print min-h-6 shrink-0 px-1 text-small leading-6 text-resin hover:underline"
-          aria-label={`Amend ${properties[fact.property].label} ${shown} ${conditions}`.trim()}
+          aria-label={`Amend ${properties[fact.property].label} ${conditions}`.trim()}
         >
           Amend
         </Link>
