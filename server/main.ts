@@ -2,7 +2,6 @@ import { randomBytes } from 'node:crypto'
 import { mkdir } from 'node:fs/promises'
 import { createServer, type RequestListener, type Server } from 'node:http'
 import { join } from 'node:path'
-import { createApp } from './app.ts'
 import { type OpenDatabase, openDatabase } from './db/open.ts'
 import { demoAccounts } from './db/demo/people.ts'
 import { readEnvironment } from './env.ts'
@@ -47,7 +46,11 @@ async function start(): Promise<void> {
     say('Opening the database …')
     // What is lost is told by the log; a process that cannot answer any more ends, for whoever keeps it running to start it again.
     const onLost = () => setTimeout(() => process.exit(1), 1000)
-    const database = await openDatabase({ dataDir: env.dataDir, databaseUrl: env.databaseUrl, log, onLost })
+    // The database opens in its own thread while this one reads the routes.
+    const [database, { createApp }] = await Promise.all([
+      openDatabase({ dataDir: env.dataDir, databaseUrl: env.databaseUrl, log, onLost }),
+      import('./app.ts'),
+    ])
     const files = env.s3 ? await (await import('./files/s3-store.ts')).openS3Store(env.dataDir, env.s3) : await openDiskStore(env.dataDir)
     const mail = env.smtp ? smtpMailer(env.smtp) : await outboxMailer(env.dataDir, clock)
     if (env.demo === 'auto' && !(await hasPeople(database.db))) {
