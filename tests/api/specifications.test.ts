@@ -4,6 +4,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { eq } from 'drizzle-orm'
+import { getDocument } from 'pdfjs-dist/legacy/build/pdf.mjs'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import type { Job } from '../../shared/api/jobs.ts'
 import type { SpecIssue, Specification } from '../../shared/api/specifications.ts'
@@ -27,6 +28,16 @@ const allLines = ({ front, parts, schedules }: SpecDocument): Run[][] => [
   ...parts.flatMap(({ articles }) => articles.flatMap(({ items }) => linesOf(items))),
   ...schedules.flatMap(({ rows }) => rows.flat()),
 ]
+/** Titles of a PDF's outline in reading order, as pdf.js reads them. */
+async function bookmarksOf(pdf: Buffer): Promise<string[]> {
+  const task = getDocument({ data: new Uint8Array(pdf), verbosity: 0 })
+  const outline = await (await task.promise).getOutline()
+  const titles = (items: typeof outline): string[] =>
+    items.flatMap(({ title, items: under }) => [title, ...titles(under as typeof outline)])
+  const found = titles(outline)
+  await task.destroy()
+  return found
+}
 const hasTool = (name: string) => {
   try {
     execFileSync(name, ['-v'], { stdio: 'ignore' })
@@ -310,6 +321,18 @@ describe('specifications', () => {
     // ISO 32000-1, 12.3.3 outline and 14.9.2 language
     expect(body.toString('latin1')).toMatch(/\/Outlines \d+ 0 R/)
     expect(body.toString('latin1')).toContain('/Lang (en-US)')
+    const bookmarks = await bookmarksOf(body)
+    expect(bookmarks).toEqual([
+      'READ FIRST',
+      ...made.document.parts.flatMap((one) => [
+        `PART ${one.number} ${one.title.toUpperCase()}`,
+        ...numberedArticles(one).map(({ number, title }) => `${number}  ${title.toUpperCase()}`),
+      ]),
+      'SCHEDULES',
+      'Section through the floor',
+      ...made.document.schedules.map(({ title }) => title),
+      ...registersOf(made.document).map(({ title }) => title),
+    ])
   })
 
   it('refuses a job without a released build-up, an unknown job, and the crew', async () => {

@@ -80,20 +80,25 @@ function front({ front: lists }: SpecDocument): Content[] {
 }
 
 interface Grid {
-  id: string
   title: string
   columns: { label: string; width: number }[]
-  rows: Content[][]
+  rows: ContentNode[][]
   note?: string
 }
 
-const titleRow = ({ id, title, columns }: Pick<Grid, 'id' | 'title' | 'columns'>): Content[] => [
-  heading(title, id, { fontSize: 10.5, bold: true, outlineParentId: 'schedules', colSpan: columns.length }),
+const titleRow = ({ title, columns }: Pick<Grid, 'title' | 'columns'>): Content[] => [
+  strong({ text: title, fontSize: 10.5, colSpan: columns.length }),
   ...columns.slice(1).map(() => ({})),
 ]
 
+/** The bookmark of a table sits in its first row: title and head are printed on every page, and each printing would be one more. */
+function bookmarked([first = [], ...rest]: readonly ContentNode[][], title: string): Content[][] {
+  const [cell = {}, ...cells] = first
+  return [[{ ...cell, outline: true, outlineText: title, outlineParentId: 'schedules' }, ...cells], ...rest]
+}
+
 /** A table with its title and head repeated on every page and no row broken over two. */
-function grid({ id, title, columns, rows, note }: Grid): Content[] {
+function grid({ title, columns, rows, note }: Grid): Content[] {
   const total = columns.reduce((sum, { width }) => sum + width, 0)
   return [
     {
@@ -102,7 +107,7 @@ function grid({ id, title, columns, rows, note }: Grid): Content[] {
         keepWithHeaderRows: 1,
         dontBreakRows: true,
         widths: columns.map(({ width }) => `${(100 * width) / total}%`),
-        body: [titleRow({ id, title, columns }), columns.map(({ label }) => ({ text: label, bold: true })), ...rows],
+        body: [titleRow({ title, columns }), columns.map(({ label }) => ({ text: label, bold: true })), ...bookmarked(rows, title)],
       },
       layout: 'schedule',
       fontSize: 8.5,
@@ -112,12 +117,12 @@ function grid({ id, title, columns, rows, note }: Grid): Content[] {
   ]
 }
 
-const schedule = ({ id, title, columns, rows, note }: SpecTable): Content[] =>
-  grid({ id: `schedule-${id}`, title, columns, note, rows: rows.map((row) => row.map((cell: Runs): Content => ({ text: inline(cell) }))) })
+const schedule = ({ title, columns, rows, note }: SpecTable): Content[] =>
+  grid({ title, columns, note, rows: rows.map((row) => row.map((cell: Runs) => ({ text: inline(cell) }))) })
 
 function registers(document: SpecDocument): Content[] {
-  return registersOf(document).flatMap(({ rows, ...register }) =>
-    grid({ ...register, rows: rows.map(([tag = '', ...cells]): Content[] => [{ text: tag, id: tag }, ...cells]) }),
+  return registersOf(document).flatMap(({ title, columns, rows }) =>
+    grid({ title, columns, rows: rows.map(([tag = '', ...cells]) => [{ text: tag, id: tag }, ...cells.map((text) => ({ text }))]) }),
   )
 }
 
