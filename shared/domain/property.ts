@@ -101,7 +101,7 @@ const someWords = (most: number) => words(most).min(1, 'This cannot be empty.')
 /** A quantity as written: both ends equal for a single figure, one end alone for a bound. */
 export const rangeSchema = z
   .strictObject({ min: finite.optional(), max: finite.optional(), unit: unitSchema })
-  .refine((range) => range.min !== undefined || range.max !== undefined, { error: 'Give a least or a greatest value.' })
+  .refine((range) => range.min !== undefined || range.max !== undefined, { error: 'Write a figure.' })
   .refine((range) => range.min === undefined || range.max === undefined || range.min <= range.max, {
     error: 'The least value is above the greatest.',
   })

@@ -59,6 +59,18 @@ const symbols: Record<PictogramCode, ReactNode> = {
   ),
 }
 
+/** Drawn so much smaller, so that a wide symbol keeps clear of the diamond. */
+const scales: Partial<Record<PictogramCode, number>> = {
+  GHS01: 0.9,
+  GHS02: 0.88,
+  GHS03: 0.8,
+  GHS04: 0.84,
+  GHS05: 0.76,
+  GHS06: 0.84,
+  GHS08: 0.84,
+  GHS09: 0.78,
+}
+
 /** A GHS pictogram with its name. */
 export function Pictogram({ code, size = 52 }: { code: string; size?: number }) {
   if (!(code in pictograms)) return <span>{code}</span>
@@ -68,7 +80,7 @@ export function Pictogram({ code, size = 52 }: { code: string; size?: number }) 
     <svg viewBox="0 0 100 100" width={size} height={size} role="img" aria-label={`${code}, ${shows}: ${means}`} className="shrink-0">
       <title>{`${shows}: ${means}`}</title>
       <path d="M50 4L96 50 50 96 4 50z" fill="#fff" stroke="#d5001c" strokeWidth="6" strokeLinejoin="miter" />
-      {symbols[known]}
+      <g transform={`translate(50 50) scale(${scales[known] ?? 1}) translate(-50 -50)`}>{symbols[known]}</g>
     </svg>
   )
 }

@@ -63,6 +63,6 @@ describe('the value form', () => {
     const draft = { ...draftOf('density'), min: 'nine', reason: 'x' }
     expect(factBody.safeParse(bodyOfDraft(draft)).error?.issues.map(({ path }) => path.join('.'))).toContain('statement.value.min')
     const empty = { ...draftOf('density'), reason: 'x' }
-    expect(factBody.safeParse(bodyOfDraft(empty)).error?.issues[0]?.message).toBe('Give a least or a greatest value.')
+    expect(factBody.safeParse(bodyOfDraft(empty)).error?.issues[0]?.message).toBe('Write a figure.')
   })
 })
