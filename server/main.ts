@@ -25,6 +25,7 @@ function inWords(error: unknown, env: { port: number; host: string; dataDir: str
   if (code === 'EADDRINUSE') return new Error(`Port ${env.port} is in use by another program. Stop that one, or set another PORT.`)
   if (syscall === 'listen' || syscall === 'getaddrinfo')
     return new Error(`Port ${env.port} of ${env.host} cannot be opened (${code}). Set another PORT or HOST.`)
+  if (syscall === 'connect') return new Error(`The database server of DATABASE_URL does not answer (${code}).`)
   if (syscall === 'mkdir') return new Error(`The data folder ${env.dataDir} cannot be made (${code}). Set another DATA_DIR.`)
   if (code === 'EACCES' || code === 'EPERM' || code === 'EROFS')
     return new Error(`The data folder ${env.dataDir} cannot be written (${code}). See to its owner, or set another DATA_DIR.`)

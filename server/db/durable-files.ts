@@ -37,6 +37,7 @@ export function watchWrites(folder: string): DurableFiles {
     unlinkSync: fs.unlinkSync,
     mkdirSync: fs.mkdirSync,
     rmdirSync: fs.rmdirSync,
+    chmodSync: fs.chmodSync,
   }
 
   const isOurs = (path: string) => path.startsWith(`${root}/`)
@@ -144,6 +145,10 @@ export function watchWrites(folder: string): DurableFiles {
     entryChanged(path)
     return original.mkdirSync(path, options)
   }) as typeof fs.mkdirSync
+  // PGlite opens its files to everyone; the folder above is closed to others, and so are they.
+  fs.chmodSync = (path: fs.PathLike, mode: fs.Mode) => {
+    original.chmodSync(path, isOurs(String(path)) && typeof mode === 'number' ? mode & 0o700 : mode)
+  }
   fs.rmdirSync = (path: fs.PathLike) => {
     entryChanged(path)
     original.rmdirSync(path)
