@@ -29,7 +29,7 @@ it('the specification goes out as DOCX and PDF, and an issue stays as it was', a
   const { items } = (await (await page.request.get(`/api/jobs/${jobId}/specifications`)).json()) as { items: { id: string }[] }
   const id = items[0]?.id ?? ''
   await page.goto(`/specifications/${id}`)
-  await page.getByRole('heading', { name: /^PART 1/ }).waitFor()
+  await page.getByRole('heading', { name: /^part 1/i }).waitFor()
   await look(page, 'estimator-specification-1440')
   for (const kind of ['DOCX', 'PDF']) {
     const waiting = page.waitForEvent('download')

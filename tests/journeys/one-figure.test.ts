@@ -36,7 +36,7 @@ it('one figure, followed from the page of its sheet to the specification and the
   const jobId = await idOf(page, 'jobs', 'filling hall')
   const { items } = (await (await page.request.get(`/api/jobs/${jobId}/specifications`)).json()) as { items: { id: string }[] }
   await page.goto(`/specifications/${items[0]?.id ?? ''}`)
-  await page.getByRole('heading', { name: /^PART 1/ }).waitFor()
+  await page.getByRole('heading', { name: /^part 1/i }).waitFor()
   await expect.poll(() => page.locator('main').textContent()).toContain(words)
 
   await page.goto(`/site-cards/${jobId}`)
