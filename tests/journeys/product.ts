@@ -87,7 +87,12 @@ export async function look(page: Page, name: string): Promise<void> {
   await page.waitForLoadState('networkidle')
   await page.screenshot({ path: join(pictures, `${name}.png`), fullPage: true })
   const { violations } = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']).analyze()
-  expect(violations.map(({ id, nodes }) => `${name}: ${id}: ${nodes.map(({ html }) => html.slice(0, 120)).join(' | ')}`)).toEqual([])
+  expect(
+    violations.map(
+      ({ id, nodes }) =>
+        `${name}: ${id}: ${nodes.map(({ html, failureSummary }) => `${html.slice(0, 120)} (${failureSummary?.split('\n').slice(1, 3).join(';') ?? ''})`).join(' | ')}`,
+    ),
+  ).toEqual([])
 }
 
 /** Id of the first record of a list whose name contains the words. */

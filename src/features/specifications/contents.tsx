@@ -25,13 +25,13 @@ export function Contents({ document }: { document: SpecDocument }) {
     <nav aria-label="Contents" className="px-4 py-3 text-small">
       {entriesOf(document).map(({ id, text, under }) => (
         <div key={id} className="mb-2 last:mb-0">
-          <a href={`#${id}`} className="inline-block min-h-6 font-semibold underline-offset-4 hover:underline">
+          <a href={`#${id}`} className="block py-1 font-semibold underline-offset-4 hover:underline">
             {text}
           </a>
           <ul>
             {under.map((entry) => (
               <li key={entry.id}>
-                <a href={`#${entry.id}`} className="inline-block min-h-6 text-pencil underline-offset-4 hover:text-resin hover:underline">
+                <a href={`#${entry.id}`} className="block py-1 text-pencil underline-offset-4 hover:text-resin hover:underline">
                   {entry.text}
                 </a>
               </li>
